@@ -35,7 +35,8 @@ export function readQuantity(
       const said = describeDimension(measured.dimension);
       return { ok: false, message: `That is ${said}. A ${kind.noun} is asked for, ${example}.` };
     }
-    const value = measured.si / coherentFactor(kind.dimension, set);
+    // Fifteen figures: what was typed in the sheet's own unit comes back as typed, not one bit beside it.
+    const value = Number((measured.si / coherentFactor(kind.dimension, set)).toPrecision(15));
     if (!Number.isFinite(value)) return { ok: false, message: 'This number is too large to be worked with.' };
     return { ok: true, value, arithmetic: /[\d)]\s*[*/+×·^-]|[A-Za-z]\s*[*+]/.test(text) };
   } catch (error) {
