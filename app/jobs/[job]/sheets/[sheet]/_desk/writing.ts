@@ -1,0 +1,52 @@
+import type { Drawing } from '@/lib/figures/drawing';
+import type { FieldError } from '@/lib/model/field-reader';
+import type { Quantity } from '@/lib/model/quantity';
+import type { Refusal } from '@/lib/model/refusal';
+import type { Block } from '@/templates/block';
+
+/** A force quantity as the desk shows it: its symbol and what releasing it means. */
+export interface QuantityChoice {
+  quantity: Quantity;
+  key: string;
+  /** Rich text: "$M_{2}$". */
+  symbol: string;
+  /** "hinge at 2", "roller at 4", "cut in 2–3". */
+  words: string;
+}
+
+export interface FixedQuantity extends QuantityChoice {
+  values: { case: string; value: string }[];
+}
+
+/** What the server says of a draft: its written pages, what is still missing, or why it cannot be solved. */
+export type Writing =
+  | {
+      state: 'written';
+      blocks: Block[];
+      milliseconds: number;
+      degree: number;
+      redundants: QuantityChoice[];
+      proposed: boolean;
+      condition: number;
+      choices: QuantityChoice[];
+      fixed: FixedQuantity[];
+      reactions: { symbol: string; values: { case: string; value: string }[]; unit: string }[];
+      combinations: { id: string; source: string }[];
+      checks: { subject: string; residual: string; tolerance: string; holds: boolean }[];
+      primary?: Drawing;
+      units: { symbol: string; drawing: Drawing }[];
+      overlays: { moments: Drawing[]; deflected: Drawing[] };
+    }
+  | { state: 'incomplete'; errors: FieldError[] }
+  | { state: 'refused'; refusal: Refusal; drawing?: Drawing };
+
+/** The answer about one set of redundants that was tried. */
+export type Trial =
+  | { good: true; condition: number; drawing: Drawing | undefined }
+  | { good: false; message: string; drawing: Drawing | undefined };
+
+/** What keeping a draft answers: kept, or somebody else's version stands there by now. */
+export type Keeping =
+  | { ok: true; version: number; keptAt: string }
+  | { ok: false; reason: 'conflict'; version: number; draft: unknown; by: string; at: string }
+  | { ok: false; reason: 'refused'; message: string };
