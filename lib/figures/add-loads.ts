@@ -1,0 +1,123 @@
+import type { Load, LoadCase } from '@/lib/model/load';
+import type { Stations } from './add-dimensions';
+import { addDistributed, pen } from './add-distributed';
+import { addMemberNote, addSettlement } from './add-movements';
+import { addCouple, addJointLoad, addPointLoad } from './add-point-loads';
+import type { Prepared } from './draw-structure';
+import type { Sheet } from './fit-drawing';
+import { magnitude } from './magnitude';
+import { LoadStack } from './stack-loads';
+import { beyond, dot } from './vector';
+
+/** Every load of a case at its place, with its value. Forces at joints come last: they stand above what is there. */
+export function addLoads(sheet: Sheet, ready: Prepared, { id, loads }: LoadCase): void {
+  const stack = new LoadStack();
+  const greatest = Math.max(
+    ...loads.map((l) => (l.kind === 'distributed' ? Math.max(Math.abs(l.w1), Math.abs(l.w2)) : 0)),
+    Number.MIN_VALUE,
+  );
+  for (const kinds of order) {
+    loads.forEach((load, i) => {
+      if (kinds.includes(load.kind))
+        addLoad(sheet, ready, load, { greatest, stack, ref: { of: 'load', id: `${id}:${i}` } });
+    });
+  }
+}
+
+const order: Load['kind'][][] = [
+  ['distributed', 'self-weight'],
+  ['point', 'couple', 'temperature', 'misfit', 'settlement'],
+  ['joint'],
+];
+
+interface Look {
+  greatest: number;
+  stack: LoadStack;
+  ref: { of: 'load'; id: string };
+}
+
+function addLoad(sheet: Sheet, { frame, axes, signs }: Prepared, load: Load, look: Look): void {
+  const axis = 'member' in load ? axes.get(load.member) : undefined;
+  switch (load.kind) {
+    case 'distributed':
+      return axis && addDistributed(sheet, frame, axis, load, look);
+    case 'point':
+      return axis && addPointLoad(sheet, frame, axis, load, look.stack, look.ref);
+    case 'couple':
+      return axis && addCouple(sheet, sheet.view.at(axis.at(load.at)), load.value, frame, look.ref);
+    case 'temperature':
+    case 'misfit':
+      return axis && addMemberNote(sheet, frame, axis, load, look.ref);
+    case 'settlement':
+      return addSettlement(sheet, frame, signs, load, look.ref);
+    case 'joint':
+      return addJointLoad(
+        sheet,
+        frame,
+        axes,
+        signs,
+        load,
+        (toward) => standing(load.joint, toward, axes, look),
+        look.ref,
+      );
+    case 'self-weight':
+      return addWeights(sheet, { frame, axes, signs }, load.members, look);
+  }
+}
+
+/** What stands on the members of a joint towards a side, points. */
+function standing(
+  joint: string,
+  toward: { x: number; y: number },
+  axes: Prepared['axes'],
+  { stack }: Look,
+): number {
+  let height = 0;
+  for (const { member, left, length } of axes.values()) {
+    const s = member.start === joint ? 0 : member.end === joint ? length : undefined;
+    if (s === undefined || Math.abs(dot(toward, left)) < 0.5) continue;
+    height = Math.max(height, stack.clear(member.id, dot(toward, left) > 0 ? 1 : -1, s, s));
+  }
+  return height;
+}
+
+/** Own weight: a small arrow down at the middle of every member that has one, with its weight per length. */
+function addWeights(
+  { sketch, view, size }: Sheet,
+  { frame, axes }: Prepared,
+  only: string[] | undefined,
+  look: Look,
+): void {
+  for (const { member, at, length } of axes.values()) {
+    if (member.weight === undefined || (only && !only.includes(member.id))) continue;
+    const middle = view.at(at(0.5 * length));
+    const tip = beyond(middle, { x: 0, y: 1 }, 17);
+    sketch.arrow(beyond(middle, { x: 0, y: 1 }, 4), tip, { ...pen, ref: look.ref }, 5);
+    sketch.label({
+      text: `own weight $${magnitude(member.weight, 'distributed', frame.units)}$`,
+      size: size * 0.9,
+      tone: 'pen',
+      ref: look.ref,
+      rank: 1,
+      spots: [
+        { at: beyond(middle, { x: 0, y: 1 }, 11), toward: { x: 1, y: 0 }, gap: 5 },
+        { at: tip, toward: { x: 0, y: 1 }, gap: 2 },
+      ],
+    });
+  }
+}
+
+/** Ends of loads that stand between joints: they get dimensions of their own. */
+export function stationsOf({ axes }: Prepared, { loads }: LoadCase): Stations {
+  const points = loads.flatMap((load) => {
+    if (load.kind !== 'point' && load.kind !== 'couple' && load.kind !== 'distributed') return [];
+    const axis = axes.get(load.member);
+    if (!axis) return [];
+    const places = load.kind === 'distributed' ? [load.from ?? 0, load.to ?? axis.length] : [load.at];
+    return places.filter((s) => s > 0 && s < axis.length).map((s) => ({ ...axis.at(s), along: axis.along }));
+  });
+  return {
+    x: points.filter((p) => Math.abs(p.along.x) > 0.3).map((p) => p.x),
+    y: points.filter((p) => Math.abs(p.along.x) <= 0.3).map((p) => p.y),
+  };
+}
