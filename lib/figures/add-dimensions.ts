@@ -14,22 +14,32 @@ export interface Stations {
 const line: Style = { stroke: 'ink3', width: 0.6 };
 const tick: Style = { stroke: 'ink2', width: 1 };
 const off = 13;
-const between = 15;
+const between = 16;
+/** Distance of a second chain where a label of the first has to stand below its line. */
+const apart = 27;
 
 /** Chains of dimensions below and to the right of all that is drawn so far, in the sheet's unit of length. */
 export function addDimensions(sheet: Sheet, frame: Frame, stations: Stations = { x: [], y: [] }): void {
   const { view, sketch } = sheet;
   const [xs, ys] = [frame.joints.map((j) => j.x), frame.joints.map((j) => j.y)];
   const below = sketch.bounds.bottom + off;
-  chainsOf(xs, stations.x).forEach((stops, i) => {
-    const y = below + i * between;
+  chainsOf(xs, stations.x).forEach((stops, i, all) => {
+    const y = below + i * step(sheet, frame.units, all[0]);
     addChain(sheet, frame.units, stops, (v) => ({ x: view.at({ x: v, y: 0 }).x, y }), { x: 1, y: 0 });
   });
   const beside = sketch.bounds.right + off;
-  chainsOf(ys, stations.y).forEach((stops, i) => {
-    const x = beside + i * between;
+  chainsOf(ys, stations.y).forEach((stops, i, all) => {
+    const x = beside + i * step(sheet, frame.units, all[0]);
     addChain(sheet, frame.units, stops, (v) => ({ x, y: view.at({ x: 0, y: v }).y }), { x: 0, y: -1 });
   });
+}
+
+function step({ sketch, size, view }: Sheet, units: UnitSet, stops: readonly number[] = []): number {
+  const tight = stretches(stops).some(({ from, to, count }) => {
+    const text = `$${writeNumber((to - from) / count, 2, units)}$`;
+    return sketch.measure(text, size * 0.9).width + 4 > (to - from) * view.perUnit;
+  });
+  return tight ? apart : between;
 }
 
 /** The chain of the joints alone, under a chain that has the stations as well where there are any. */

@@ -11,6 +11,15 @@ import { beyond, cross, mix, type Point, scale, unit } from './vector';
 export type Distributed = Extract<Load, { kind: 'distributed' }>;
 
 export const pen: Style = { stroke: 'pen', width: 1 };
+export interface DistributedLook {
+  /** Greatest intensity of the case: drawn tallest. */
+  greatest: number;
+  stack: LoadStack;
+  ref: ShapeRef;
+  /** The value is written on a neighbour that goes on with the same load. */
+  mute?: boolean;
+}
+
 const spacing = 15;
 const tallest = 24;
 const lowest = 11;
@@ -36,12 +45,15 @@ export function addDistributed(
   frame: Frame,
   axis: MemberAxis,
   load: Distributed,
-  look: { greatest: number; stack: LoadStack; ref: ShapeRef },
+  look: DistributedLook,
 ): void {
   const { view, sketch, size } = sheet;
   const [from, to] = [load.from ?? 0, load.to ?? axis.length];
   const sense = senseOf(load.direction, axis);
-  if (Math.abs(cross(sense, axis.along)) < 0.2) return addAlong(sheet, frame, axis, load, look);
+  if (Math.abs(cross(sense, axis.along)) < 0.2) {
+    addAlong(sheet, frame, axis, load, look);
+    return;
+  }
   const mean = load.w1 + load.w2 < 0 ? -1 : 1;
   const force = scale(sense, mean);
   const back = view.direction(scale(force, -1));
@@ -56,6 +68,7 @@ export function addDistributed(
   const outline = [a, top(0), ...crossing(load.w1, load.w2).map((t) => mix(a, b, t)), top(1), b];
   sketch.poly(outline, false, style);
   if (floor > 0 || load.per === 'projection') sketch.line(a, b, { ...style, width: 0.7 });
+  for (const k of [0.3, 0.6]) sketch.shade(mix(a, top(0), k), mix(b, top(1), k));
   const count = Math.max(2, Math.round(Math.hypot(b.x - a.x, b.y - a.y) / spacing));
   for (let i = 0; i <= count; i++) {
     const [tip, tail] = [mix(a, b, i / count), top(i / count)];
@@ -79,7 +92,11 @@ export function addDistributed(
     for (const k of [0.35, 0.65, 0.2, 0.8]) spots.push({ at: top(aside ? t : k), toward: out, gap: 2.5 });
     sketch.label({ text: `$${write(w)}$${plan}`, size, tone: 'pen', spots, own, rank: 1, ref: look.ref });
   };
-  if (load.w1 === load.w2) return put(load.w1, 0.5);
+  if (look.mute) return;
+  if (load.w1 === load.w2) {
+    put(load.w1, 0.5);
+    return;
+  }
   const along = unit({ x: b.x - a.x, y: b.y - a.y });
   if (load.w1 !== 0) put(load.w1, 0, along);
   if (load.w2 !== 0) put(load.w2, 1, scale(along, -1));
@@ -113,7 +130,7 @@ function addAlong(
   frame: Frame,
   axis: MemberAxis,
   load: Distributed,
-  look: { stack: LoadStack; ref: ShapeRef },
+  look: DistributedLook,
 ): void {
   const [from, to] = [load.from ?? 0, load.to ?? axis.length];
   const out = view.direction(axis.left);

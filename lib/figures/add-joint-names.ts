@@ -33,9 +33,9 @@ export function addJointNames(
     const spots: LabelSpot[] = toward.map((v) => ({ at, toward: v, gap: 3.5 }));
     if (sign && signReach(sign) > 8) {
       const ground = view.direction(sign.ground);
-      const beside = { x: at.x + 5 * ground.x, y: at.y + 5 * ground.y };
+      const beside = { x: at.x + 11 * ground.x, y: at.y + 11 * ground.y };
       for (const k of [-1, 1])
-        spots.unshift({ at: beside, toward: { x: -k * ground.y, y: k * ground.x }, gap: 7 });
+        spots.unshift({ at: beside, toward: { x: -k * ground.y, y: k * ground.x }, gap: 10 });
     }
     const [first, ...rest] = spots;
     if (!first) continue;

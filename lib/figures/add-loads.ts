@@ -16,12 +16,43 @@ export function addLoads(sheet: Sheet, ready: Prepared, { id, loads }: LoadCase)
     ...loads.map((l) => (l.kind === 'distributed' ? Math.max(Math.abs(l.w1), Math.abs(l.w2)) : 0)),
     Number.MIN_VALUE,
   );
+  const muted = goingOn(ready, loads);
   for (const kinds of order) {
     loads.forEach((load, i) => {
-      if (kinds.includes(load.kind))
-        addLoad(sheet, ready, load, { greatest, stack, ref: { of: 'load', id: `${id}:${i}` } });
+      if (!kinds.includes(load.kind)) return;
+      const look = { greatest, stack, ref: { of: 'load', id: `${id}:${i}` }, mute: muted.has(i) } as const;
+      addLoad(sheet, ready, load, look);
     });
   }
+}
+
+/** Loads that only go on with the same value along the same line: one label, on the longest, serves the whole run. */
+function goingOn({ axes }: Prepared, loads: readonly Load[]): Set<number> {
+  const muted = new Set<number>();
+  let told: number | undefined;
+  loads.forEach((load, i) => {
+    const before = loads[i - 1];
+    if (!before || !goesOn(axes, before, load)) {
+      told = i;
+      return;
+    }
+    const lengthOf = (k: number) => {
+      const l = loads[k];
+      return l?.kind === 'distributed' ? (axes.get(l.member)?.length ?? 0) : 0;
+    };
+    const shorter = told !== undefined && lengthOf(i) > lengthOf(told) ? told : i;
+    if (shorter === told) told = i;
+    muted.add(shorter);
+  });
+  return muted;
+}
+
+function goesOn(axes: Prepared['axes'], a: Load, b: Load): boolean {
+  if (a.kind !== 'distributed' || b.kind !== 'distributed') return false;
+  const whole = [a.from, a.to, b.from, b.to].every((s) => s === undefined);
+  const same = a.direction === b.direction && a.per === b.per && new Set([a.w1, a.w2, b.w1, b.w2]).size === 1;
+  const [p, q] = [axes.get(a.member), axes.get(b.member)];
+  return whole && same && !!p && !!q && p.member.end === q.member.start && dot(p.along, q.along) > 0.999;
 }
 
 const order: Load['kind'][][] = [
@@ -34,24 +65,30 @@ interface Look {
   greatest: number;
   stack: LoadStack;
   ref: { of: 'load'; id: string };
+  mute: boolean;
 }
 
 function addLoad(sheet: Sheet, { frame, axes, signs }: Prepared, load: Load, look: Look): void {
   const axis = 'member' in load ? axes.get(load.member) : undefined;
   switch (load.kind) {
     case 'distributed':
-      return axis && addDistributed(sheet, frame, axis, load, look);
+      if (axis) addDistributed(sheet, frame, axis, load, look);
+      break;
     case 'point':
-      return axis && addPointLoad(sheet, frame, axis, load, look.stack, look.ref);
+      if (axis) addPointLoad(sheet, frame, axis, load, look.stack, look.ref);
+      break;
     case 'couple':
-      return axis && addCouple(sheet, sheet.view.at(axis.at(load.at)), load.value, frame, look.ref);
+      if (axis) addCouple(sheet, sheet.view.at(axis.at(load.at)), load.value, frame, look.ref);
+      break;
     case 'temperature':
     case 'misfit':
-      return axis && addMemberNote(sheet, frame, axis, load, look.ref);
+      if (axis) addMemberNote(sheet, frame, axis, load, look.ref);
+      break;
     case 'settlement':
-      return addSettlement(sheet, frame, signs, load, look.ref);
+      addSettlement(sheet, frame, signs, load, look.ref);
+      break;
     case 'joint':
-      return addJointLoad(
+      addJointLoad(
         sheet,
         frame,
         axes,
@@ -60,8 +97,10 @@ function addLoad(sheet: Sheet, { frame, axes, signs }: Prepared, load: Load, loo
         (toward) => standing(load.joint, toward, axes, look),
         look.ref,
       );
+      break;
     case 'self-weight':
-      return addWeights(sheet, { frame, axes, signs }, load.members, look);
+      addWeights(sheet, { frame, axes, signs }, load.members, look);
+      break;
   }
 }
 

@@ -37,7 +37,8 @@ export function addSettlement(
   if (load.component === 'turn') {
     const [from, to] = load.value > 0 ? [2.4, 0.7] : [0.7, 2.4];
     addTurnArrow(sketch, view.at(joint), 13, from, to, style);
-    return label(`$${magnitude(Math.abs(load.value), 'rotation', frame.units)}$`, base, ground);
+    label(`$${magnitude(Math.abs(load.value), 'rotation', frame.units)}$`, base, ground);
+    return;
   }
   const angle = ((joint.support?.angle ?? 0) * Math.PI) / 180;
   const own = turn(load.component === 'x' ? { x: 1, y: 0 } : { x: 0, y: 1 }, angle);
@@ -67,7 +68,7 @@ export function addMemberNote(
       tone: 'pen',
       rank: 1,
       ref,
-      spots: [share, 0.5, 0.35, 0.65].map((t) => ({
+      spots: [share, share - 0.08, share + 0.08].map((t) => ({
         at: view.at(axis.at(t * axis.length)),
         toward,
         gap: 7,
@@ -75,9 +76,10 @@ export function addMemberNote(
     });
   if (load.kind === 'misfit') {
     const way = load.value > 0 ? 'long' : 'short';
-    return write(`${magnitude(Math.abs(load.value), 'movement', frame.units)}\\text{ too ${way}}`, 0.5, out);
+    write(`${magnitude(Math.abs(load.value), 'movement', frame.units)}\\text{ too ${way}}`, 0.5, out);
+    return;
   }
-  if (load.rise !== 0) write(`T=${magnitude(load.rise, 'temperature', frame.units, true)}`, 0.5, out);
+  if (load.rise !== 0) write(`T=${magnitude(load.rise, 'temperature', frame.units, true)}`, 0.68, out);
   if (load.difference === 0) return;
   const warm = load.difference > 0 ? out : scale(out, -1);
   for (const [face, dash] of [
@@ -87,9 +89,5 @@ export function addMemberNote(
     const at = (s: number) => beyond(view.at(axis.at(s * axis.length)), face, 3.6);
     sketch.line(at(0.08), at(0.92), { ...pen, width: 0.8, dash: dash && [...dash], ref });
   }
-  write(
-    `\\Delta T=${magnitude(Math.abs(load.difference), 'temperature', frame.units)}\\text{ warmer}`,
-    0.35,
-    warm,
-  );
+  write(`${magnitude(Math.abs(load.difference), 'temperature', frame.units)}\\text{ warmer}`, 0.3, warm);
 }

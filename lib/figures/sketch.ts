@@ -91,6 +91,11 @@ export class Sketch {
     });
   }
 
+  /** Ink that is not seen: keeps labels out of a place that reads as one thing. */
+  shade(a: Point, b: Point): void {
+    this.leave([a, b], {});
+  }
+
   label(wish: LabelWish): void {
     this.wishes.push(wish);
   }
