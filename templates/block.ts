@@ -50,6 +50,8 @@ export const figureBlock = z.object({
   caption: richText,
   /** Drawings set side by side on one row; widths share the text width in proportion to theirs. */
   drawings: z.array(drawingSchema).min(1),
+  /** The same drawings laid out for a column of a phone; without them the wide ones are shrunk there. */
+  narrow: z.array(drawingSchema).optional(),
 });
 
 export const tableColumn = z.object({
