@@ -3,6 +3,9 @@ import type { EquationRow } from '../block';
 import { RichText } from './rich-text';
 import { Tex } from './tex';
 
+/** The sign is set as a letter, or KaTeX would let a line end after it; what follows it begins anew, so −x has no gap. */
+const equals = '{=}\\;\\mathopen{}';
+
 /** One row of a chain of equalities; it breaks before an equals sign, and the next member stands under the first. */
 export function EquationView({ row }: { row: EquationRow }) {
   const { lhs, chain, boxed, note } = row;
@@ -25,7 +28,7 @@ export function EquationView({ row }: { row: EquationRow }) {
     createElement(
       'span',
       { className: 'link' },
-      <Tex display>{i === last && boxed ? `= \\boxed{${member}}` : `= ${member}`}</Tex>,
+      <Tex display>{i === last && boxed ? `${equals}\\boxed{${member}}` : `${equals}${member}`}</Tex>,
     ),
   );
   return (

@@ -29,11 +29,6 @@ export function TableView({ block }: { block: TableBlock }) {
   );
   const table = (
     <table className="cal">
-      {caption === undefined ? null : (
-        <caption>
-          <RichText text={caption} />
-        </caption>
-      )}
       <thead>{createElement('tr', null, ...heads)}</thead>
       {createElement('tbody', null, ...lines)}
     </table>
@@ -46,6 +41,11 @@ export function TableView({ block }: { block: TableBlock }) {
   );
   return (
     <>
+      {caption === undefined ? null : (
+        <p>
+          <RichText text={caption} />
+        </p>
+      )}
       {box}
       {note === undefined ? null : (
         <p className="note">
