@@ -24,13 +24,17 @@ export interface Sheet {
   view: View;
   /** Size of values, points. */
   size: number;
+  /** Written after the title: what only the chosen scale tells. */
+  note?: string;
 }
 
 const tries = 60;
 /** A structure is never made smaller than this, points; its labels then stand wider than it. */
 const least = 48;
 
-/** Lays out at finer and finer usual scales until the drawing, labels and all, has the width it is to have. */
+/**
+ * Lays out at coarser and coarser usual scales until the drawing, labels and all, has the width it is to have.
+ */
 export function fitDrawing(
   frame: Frame,
   options: DrawOptions,
@@ -48,12 +52,10 @@ export function fitDrawing(
   for (const ratio of usualRatios(length || 1, length ? room : room / 4, frame.units)) {
     const sketch = new Sketch(measure);
     const view = viewAt(ratio, frame.units);
-    make({ sketch, view, size });
-    drawing = sketch.finish(
-      width,
-      alt,
-      options.title ? { text: options.title, size: 0.95 * size } : undefined,
-    );
+    const sheet: Sheet = { sketch, view, size };
+    make(sheet);
+    const title = [options.title, sheet.note].filter((t) => t !== undefined).join(', ');
+    drawing = sketch.finish(width, alt, title ? { text: title, size: 0.95 * size } : undefined);
     const [w, h] = [wide * view.perUnit, high * view.perUnit];
     const fits = (drawing.width <= width + 0.01 || w < least) && (drawing.height <= maxHeight || h < least);
     if (fits || ++tried === tries) break;

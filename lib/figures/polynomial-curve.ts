@@ -77,3 +77,13 @@ export function arcsOf(piece: Piece): Arc[] {
     return { from, to, ordinates: [a, a + valueAt(slope, from) * third, b - valueAt(slope, to) * third, b] };
   });
 }
+
+/** Value of a piecewise polynomial at s; where pieces jump, of the one on the left. */
+export function curveAt(curve: PiecewisePolynomial, s: number): number {
+  const piece = curve.find((p) => s <= p.to) ?? curve.at(-1);
+  return piece ? valueAt(piece, s) : 0;
+}
+
+export function slopeAt(curve: PiecewisePolynomial, s: number): number {
+  return curveAt(curve.map(derivative), s);
+}

@@ -6,7 +6,7 @@ import { beyond, cross, type Point, scale, subtract, unit } from './vector';
 export interface Style {
   stroke?: Tone;
   width?: number;
-  dash?: number[];
+  dash?: readonly number[];
   fill?: Tone;
   ref?: ShapeRef;
   /** A shape that labels may cover: washes, ordinates, the grid. */
@@ -163,7 +163,7 @@ const edge = 2;
 const round = (v: number): number => Math.round(v * 100) / 100 || 0;
 
 function strokes({ stroke, width, dash, fill, ref }: Style) {
-  return { stroke, width, dash, fill, ref };
+  return { stroke, width, dash: dash && [...dash], fill, ref };
 }
 
 function pathData(commands: readonly PathCommand[], o: Point): string {
