@@ -33,7 +33,8 @@ const tries = 60;
 const least = 48;
 
 /**
- * Lays out at coarser and coarser usual scales until the drawing, labels and all, has the width it is to have.
+ * Lays out at coarser and coarser usual scales until the drawing, labels and all, has the width it is to have. Where
+ * none will do, labels are held within the width; what is too wide even then keeps its own width.
  */
 export function fitDrawing(
   frame: Frame,
@@ -43,26 +44,32 @@ export function fitDrawing(
 ): Drawing {
   const { width, maxHeight = Math.max(170, 0.62 * width), measure = estimateText } = options;
   const size = options.size ?? sizeFor(width);
-  const [xs, ys] = [frame.joints.map((j) => j.x), frame.joints.map((j) => j.y)];
-  const wide = Math.max(...xs) - Math.min(...xs);
-  const high = Math.max(...ys) - Math.min(...ys);
+  const [wide, high] = [extent(frame.joints.map((j) => j.x)), extent(frame.joints.map((j) => j.y))];
   const [length, room] = wide / width >= high / maxHeight ? [wide, width] : [high, maxHeight];
-  let drawing: Drawing | undefined;
-  let tried = 0;
-  for (const ratio of usualRatios(length || 1, length ? room : room / 4, frame.units)) {
-    const sketch = new Sketch(measure);
-    const view = viewAt(ratio, frame.units);
-    const sheet: Sheet = { sketch, view, size };
-    make(sheet);
-    const title = [options.title, sheet.note].filter((t) => t !== undefined).join(', ');
-    drawing = sketch.finish(width, alt, title ? { text: title, size: 0.95 * size } : undefined);
-    const [w, h] = [wide * view.perUnit, high * view.perUnit];
-    const fits = (drawing.width <= width + 0.01 || w < least) && (drawing.height <= maxHeight || h < least);
-    if (fits || ++tried === tries) break;
+  let narrowest: Drawing | undefined;
+  for (const holdLabels of [false, true]) {
+    let tried = 0;
+    for (const ratio of usualRatios(length || 1, length ? room : room / 4, frame.units)) {
+      const view = viewAt(ratio, frame.units);
+      const sheet: Sheet = { sketch: new Sketch(measure), view, size };
+      make(sheet);
+      const title = [options.title, sheet.note].filter((t) => t !== undefined).join(', ');
+      const drawing = sheet.sketch.finish(width, {
+        alt,
+        holdLabels,
+        title: title === '' ? undefined : { text: title, size: 0.95 * size },
+      });
+      const small = high * view.perUnit < least;
+      if (drawing.width <= width + 0.01 && (drawing.height <= maxHeight || small)) return drawing;
+      if (!narrowest || drawing.width < narrowest.width) narrowest = drawing;
+      if (Math.max(wide, high) * view.perUnit < least || ++tried === tries) break;
+    }
   }
-  if (!drawing) throw new Error('there are no scales');
-  return drawing;
+  if (!narrowest) throw new Error('there are no scales');
+  return narrowest;
 }
+
+const extent = (values: readonly number[]): number => Math.max(...values) - Math.min(...values);
 
 /** 10.5 pt in a drawing over the full width of a page, down to 7.5 pt where three stand side by side. */
 export function sizeFor(width: number): number {

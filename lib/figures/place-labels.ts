@@ -45,25 +45,42 @@ const clear = 1.2;
 const crossing = 8;
 const farther = 2.5;
 const leaderFrom = 16;
+const beyondRoom = 60;
 
-/** Places labels one after another so that no two overlap and none covers its own ink; other ink is avoided. */
+/** The stretch of the page that labels should keep within. */
+interface Room {
+  from: number;
+  to: number;
+}
+
+interface Surroundings {
+  ink: InkIndex;
+  taken: InkIndex<LabelBox>;
+  room?: Room;
+}
+
+/**
+ * Places labels one after another so that no two overlap and none covers its own ink; other ink is avoided, and what
+ * lies outside `room` even more.
+ */
 export function placeLabels(
   wishes: readonly LabelWish[],
   ink: readonly Ink[],
   measure: Measure,
+  room?: Room,
 ): PlacedLabel[] {
   const index = new InkIndex(ink);
   const placed: PlacedLabel[] = [];
   const taken = new InkIndex<LabelBox>([]);
   for (const wish of wishes.toSorted((a, b) => a.rank - b.rank)) {
-    const label = place(wish, index, taken, measure);
+    const label = place(wish, { ink: index, taken, room }, measure);
     taken.addBox(label.box, label.box);
     placed.push(label);
   }
   return placed;
 }
 
-function place(wish: LabelWish, ink: InkIndex, taken: InkIndex<LabelBox>, measure: Measure): PlacedLabel {
+function place(wish: LabelWish, { ink, taken, room }: Surroundings, measure: Measure): PlacedLabel {
   const box = measure(wish.text, wish.size);
   const [w, h] = wish.turn === 90 ? [box.height + box.depth, box.width] : [box.width, box.height + box.depth];
   const own = new InkIndex(wish.own ?? []);
@@ -72,11 +89,12 @@ function place(wish: LabelWish, ink: InkIndex, taken: InkIndex<LabelBox>, measur
     if (best && best.cost <= cost) return;
     const rect = boxBeside(spot, w, h);
     if (taken.meets(grown(rect, clear)) || own.meets(rect)) return;
-    const total = cost + crossing * ink.count(rect);
+    const outside = room && (rect.left < room.from || rect.right > room.to) ? beyondRoom : 0;
+    const total = cost + crossing * ink.count(rect) + outside;
     if (!best || total < best.cost) best = { cost: total, rect, spot };
   };
   for (const [i, spot] of wish.spots.entries()) consider(spot, i);
-  for (let ring = 1; best === undefined || (best.cost >= ring + 2 && ring <= 12); ring++) {
+  for (let ring = 1; best === undefined || (best.cost >= ring + 2 && ring <= 16); ring++) {
     for (const spot of wish.spots) consider({ ...spot, gap: (spot.gap ?? 2) + ring * farther }, ring + 2);
     for (const toward of around)
       consider({ ...wish.spots[0], toward, gap: (wish.spots[0].gap ?? 2) + ring * farther }, ring + 3);

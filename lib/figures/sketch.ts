@@ -21,6 +21,13 @@ export interface Ink {
   b: Point;
 }
 
+interface Finish {
+  alt: string;
+  title?: { text: string; size: number };
+  /** Labels keep within the width rather than in their best places. */
+  holdLabels?: boolean;
+}
+
 /** Shapes of a drawing while it is made, in points with y down and the origin anywhere. */
 export class Sketch {
   readonly ink: Ink[] = [];
@@ -106,8 +113,10 @@ export class Sketch {
   }
 
   /** Places the labels and crops to what was drawn, centred in `width`; a wider drawing keeps its own width. */
-  finish(width: number, alt: string, title?: { text: string; size: number }): Drawing {
-    const labels = placeLabels(this.wishes, this.ink, this.measure);
+  finish(width: number, { alt, title, holdLabels }: Finish): Drawing {
+    const middle = (this.box.left + this.box.right) / 2;
+    const [from, to] = [middle - width / 2 + edge, middle + width / 2 - edge];
+    const labels = placeLabels(this.wishes, this.ink, this.measure, holdLabels ? { from, to } : undefined);
     for (const { box } of labels) this.reach({ x: box.left, y: box.top }, { x: box.right, y: box.bottom });
     if (title) labels.push(this.titleBelow(title));
     const { left, top, right, bottom } = this.box;
