@@ -2,9 +2,10 @@ import type { PiecewisePolynomial } from '@/lib/engine/diagrams/piecewise-polyno
 import type { ShapeRef } from './drawing';
 import type { Sheet } from './fit-drawing';
 import type { MemberAxis } from './member-axis';
+import type { PathCommand } from './path';
 import type { LabelSpot } from './place-labels';
 import { arcsOf, valueAt } from './polynomial-curve';
-import type { Ink, PathCommand } from './sketch';
+import type { Ink } from './sketch';
 import { beyond, type Point, scale } from './vector';
 
 /** How ordinates are drawn: points per unit of value, and the side a positive one lies on. */

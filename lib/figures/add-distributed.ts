@@ -12,8 +12,9 @@ export type Distributed = Extract<Load, { kind: 'distributed' }>;
 
 export const pen: Style = { stroke: 'pen', width: 1 };
 export interface DistributedLook {
-  /** Greatest intensity of the case: drawn tallest. */
+  /** Greatest intensity of the case, and the height, points, that it is drawn with. */
   greatest: number;
+  tallest: number;
   stack: LoadStack;
   ref: ShapeRef;
   /** The value is written on a neighbour that goes on with the same load. */
@@ -21,8 +22,8 @@ export interface DistributedLook {
 }
 
 const spacing = 15;
-const tallest = 24;
-const lowest = 11;
+/** Share of the tallest that the faintest load still has. */
+const faintest = 0.45;
 const gap = 1.6;
 
 /** The unit direction, in model axes, in which a positive value of a load acts. */
@@ -61,7 +62,7 @@ export function addDistributed(
   const floor = look.stack.clear(axis.member.id, side, from, to);
   const [a, b] = footOf(sheet, axis, load, from, to, back, floor === 0 ? gap : floor);
   const height = (w: number) =>
-    ((mean * w) / look.greatest) * (tallest - lowest) + Math.sign(mean * w) * lowest;
+    look.tallest * (((1 - faintest) * mean * w) / look.greatest + faintest * Math.sign(mean * w));
   const head = (t: number) => load.w1 + (load.w2 - load.w1) * t;
   const top = (t: number) => beyond(mix(a, b, t), back, height(head(t)));
   const style = { ...pen, ref: look.ref };

@@ -1,10 +1,10 @@
 import type { Load, LoadCase } from '@/lib/model/load';
-import type { Stations } from './add-dimensions';
 import { addDistributed, pen } from './add-distributed';
 import { addMemberNote, addSettlement } from './add-movements';
 import { addCouple, addJointLoad, addPointLoad } from './add-point-loads';
 import type { Prepared } from './draw-structure';
 import type { Sheet } from './fit-drawing';
+import { goingOn } from './load-runs';
 import { magnitude } from './magnitude';
 import { LoadStack } from './stack-loads';
 import { beyond, dot } from './vector';
@@ -16,43 +16,23 @@ export function addLoads(sheet: Sheet, ready: Prepared, { id, loads }: LoadCase)
     ...loads.map((l) => (l.kind === 'distributed' ? Math.max(Math.abs(l.w1), Math.abs(l.w2)) : 0)),
     Number.MIN_VALUE,
   );
+  const lengths = [...ready.axes.values()].map((axis) => axis.length).toSorted((a, b) => a - b);
+  const usual = (lengths[Math.floor(lengths.length / 2)] ?? 0) * sheet.view.perUnit;
+  const tallest = Math.min(24, Math.max(9, 0.4 * usual));
   const muted = goingOn(ready, loads);
   for (const kinds of order) {
     loads.forEach((load, i) => {
       if (!kinds.includes(load.kind)) return;
-      const look = { greatest, stack, ref: { of: 'load', id: `${id}:${i}` }, mute: muted.has(i) } as const;
+      const look = {
+        greatest,
+        tallest,
+        stack,
+        ref: { of: 'load', id: `${id}:${i}` },
+        mute: muted.has(i),
+      } as const;
       addLoad(sheet, ready, load, look);
     });
   }
-}
-
-/** Loads that only go on with the same value along the same line: one label, on the longest, serves the whole run. */
-function goingOn({ axes }: Prepared, loads: readonly Load[]): Set<number> {
-  const muted = new Set<number>();
-  let told: number | undefined;
-  loads.forEach((load, i) => {
-    const before = loads[i - 1];
-    if (!before || !goesOn(axes, before, load)) {
-      told = i;
-      return;
-    }
-    const lengthOf = (k: number) => {
-      const l = loads[k];
-      return l?.kind === 'distributed' ? (axes.get(l.member)?.length ?? 0) : 0;
-    };
-    const shorter = told !== undefined && lengthOf(i) > lengthOf(told) ? told : i;
-    if (shorter === told) told = i;
-    muted.add(shorter);
-  });
-  return muted;
-}
-
-function goesOn(axes: Prepared['axes'], a: Load, b: Load): boolean {
-  if (a.kind !== 'distributed' || b.kind !== 'distributed') return false;
-  const whole = [a.from, a.to, b.from, b.to].every((s) => s === undefined);
-  const same = a.direction === b.direction && a.per === b.per && new Set([a.w1, a.w2, b.w1, b.w2]).size === 1;
-  const [p, q] = [axes.get(a.member), axes.get(b.member)];
-  return whole && same && !!p && !!q && p.member.end === q.member.start && dot(p.along, q.along) > 0.999;
 }
 
 const order: Load['kind'][][] = [
@@ -63,6 +43,7 @@ const order: Load['kind'][][] = [
 
 interface Look {
   greatest: number;
+  tallest: number;
   stack: LoadStack;
   ref: { of: 'load'; id: string };
   mute: boolean;
@@ -144,19 +125,4 @@ function addWeights(
       ],
     });
   }
-}
-
-/** Ends of loads that stand between joints: they get dimensions of their own. */
-export function stationsOf({ axes }: Prepared, { loads }: LoadCase): Stations {
-  const points = loads.flatMap((load) => {
-    if (load.kind !== 'point' && load.kind !== 'couple' && load.kind !== 'distributed') return [];
-    const axis = axes.get(load.member);
-    if (!axis) return [];
-    const places = load.kind === 'distributed' ? [load.from ?? 0, load.to ?? axis.length] : [load.at];
-    return places.filter((s) => s > 0 && s < axis.length).map((s) => ({ ...axis.at(s), along: axis.along }));
-  });
-  return {
-    x: points.filter((p) => Math.abs(p.along.x) > 0.3).map((p) => p.x),
-    y: points.filter((p) => Math.abs(p.along.x) <= 0.3).map((p) => p.y),
-  };
 }

@@ -7,23 +7,27 @@ import type { LabelSpot } from './place-labels';
 import type { Style } from './sketch';
 import { signReach } from './support-symbol';
 import { beyond, dot, mix, type Point, scale, turn } from './vector';
-import { writeNumber } from './write-number';
+import { exactDecimals, writeNumber } from './write-number';
 
 type Reaction = Extract<Quantity, { kind: 'reaction' }>;
 
 const arrow = 22;
 
-/** Reactions as forces of the supports on the structure: the arrow shows the sense, the label the amount. */
+/**
+ * Reactions as forces of the supports on the structure: the arrow shows the sense, the label the amount, each with the
+ * decimals it needs (four at most) unless told.
+ */
 export function addReactions(
   sheet: Sheet,
   ready: Prepared,
   reactions: readonly { quantity: Quantity; value: number }[],
-  decimals: number,
+  decimals?: number,
 ): void {
-  const least = 0.5 * 10 ** -decimals;
+  const greatest = Math.max(...reactions.map((r) => Math.abs(r.value)), 0);
+  const least = decimals === undefined ? 1e-9 * greatest : 0.5 * 10 ** -decimals;
   for (const { quantity, value } of reactions) {
     if (quantity.kind !== 'reaction' || Math.abs(value) < least) continue;
-    const text = `$${writeNumber(Math.abs(value), decimals, ready.frame.units)}$`;
+    const text = `$${writeNumber(Math.abs(value), decimals ?? exactDecimals([value], 0, 4), ready.frame.units)}$`;
     const ref = { of: 'support', id: quantity.joint } as const;
     addJointForce(sheet, ready, quantity, value, text, { stroke: 'ink', width: 1.2, ref });
   }

@@ -5,8 +5,9 @@ import type { Drawing } from './drawing';
 import { type DrawOptions, fitDrawing, type Sheet } from './fit-drawing';
 import { magnitude } from './magnitude';
 import type { Frame, MemberAxis } from './member-axis';
+import type { PathCommand } from './path';
 import { curveAt, slopeAt } from './polynomial-curve';
-import type { Ink, PathCommand } from './sketch';
+import type { Ink } from './sketch';
 import { beyond, size as lengthOf, type Point, scale, unit } from './vector';
 
 export interface DeflectedOptions extends DrawOptions {

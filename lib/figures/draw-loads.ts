@@ -1,10 +1,11 @@
 import type { LoadCase } from '@/lib/model/load';
-import { addLoads, stationsOf } from './add-loads';
+import { addLoads } from './add-loads';
 import { describeLoads } from './describe-loads';
 import { describeStructure } from './describe-structure';
 import { addMeasures, addStructure, prepare, type Show } from './draw-structure';
 import type { Drawing } from './drawing';
 import { type DrawOptions, fitDrawing } from './fit-drawing';
+import { stationsOf } from './load-stations';
 import type { Frame } from './member-axis';
 
 /** The structure with the loads of one case at their places, to scale, with values and dimensions. */

@@ -38,7 +38,8 @@ export function drawPrimary(frame: Frame, redundants: readonly Quantity[], optio
     addStructure(sheet, ready, show);
     if (loadCase) addLoads(sheet, ready, loadCase);
     // Senses of X are those of the real supports, so reactions let go are read from the frame as it was.
-    addRedundants(sheet, { ...ready, frame: withSupportAxes(released, frame) }, redundants);
+    const labels = show.redundants === false ? () => undefined : undefined;
+    addRedundants(sheet, { ...ready, frame: withSupportAxes(released, frame) }, redundants, labels);
     addReactions(sheet, ready, reactions, decimals);
     addMeasures(sheet, ready, show);
   });

@@ -17,6 +17,8 @@ export interface Show {
   scaleBar?: boolean;
   /** Members as thin lines. */
   thin?: boolean;
+  /** Redundants with their arrows, where the drawing has any; without them only what is taken out is seen. */
+  redundants?: boolean;
 }
 
 /** The structure ready to be drawn: axes of members and signs of supports. */

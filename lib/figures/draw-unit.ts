@@ -31,7 +31,6 @@ export function drawUnit(
   const ready = prepare(released);
   const curves = curvesOf(ready, (id) => state.members[id]?.M);
   const greatest = Math.max(...curves.map((c) => greatestOf(c.curve)), 0);
-  const values = state.reactions.map((r) => r.value);
   const decimals = options.decimals ?? exactDecimals([greatest], 0, 3);
   const quantity = redundants[index];
   const alt = `Unit-load structure ${index + 1}: ${quantity ? quantityInWords(quantity) : ''} is 1; greatest moment ${Number(greatest.toPrecision(4))}.`;
@@ -41,7 +40,7 @@ export function drawUnit(
     addRedundants(sheet, { ...ready, frame: withSupportAxes(released, frame) }, redundants, (i) =>
       i === index ? `X_{${i + 1}}=1` : undefined,
     );
-    addReactions(sheet, ready, state.reactions, options.decimals ?? exactDecimals(values, 0, 4));
+    addReactions(sheet, ready, state.reactions, options.decimals);
     addMeasures(sheet, ready, options.show ?? {});
   });
 }

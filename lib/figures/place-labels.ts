@@ -45,6 +45,17 @@ const clear = 1.2;
 const crossing = 8;
 const farther = 2.5;
 const leaderFrom = 16;
+/** How many steps out a better place than a free one is sought. */
+const better = 16;
+
+/** How far from what it names, in steps, and over how much ink (as cost) a label may stand. */
+interface Limits {
+  rings: number;
+  cost: number;
+}
+const everywhere: Limits = { rings: 32, cost: Number.POSITIVE_INFINITY };
+const closeBy: Limits = { rings: 2, cost: 20 };
+
 const beyondRoom = 60;
 
 /** The stretch of the page that labels should keep within. */
@@ -61,7 +72,8 @@ interface Surroundings {
 
 /**
  * Places labels one after another so that no two overlap and none covers its own ink; other ink is avoided, and what
- * lies outside `room` even more.
+ * lies outside `room` even more. A structure so dense that not all find a place keeps only those that stand clear and
+ * close by: the result is then shorter than the wishes.
  */
 export function placeLabels(
   wishes: readonly LabelWish[],
@@ -70,17 +82,26 @@ export function placeLabels(
   room?: Room,
 ): PlacedLabel[] {
   const index = new InkIndex(ink);
-  const placed: PlacedLabel[] = [];
-  const taken = new InkIndex<LabelBox>([]);
-  for (const wish of wishes.toSorted((a, b) => a.rank - b.rank)) {
-    const label = place(wish, { ink: index, taken, room }, measure);
-    taken.addBox(label.box, label.box);
-    placed.push(label);
-  }
-  return placed;
+  const sorted = wishes.toSorted((a, b) => a.rank - b.rank);
+  const placeAll = (limits: Limits): PlacedLabel[] => {
+    const taken = new InkIndex<LabelBox>([]);
+    return sorted.flatMap((wish) => {
+      const label = place(wish, { ink: index, taken, room }, measure, limits);
+      if (!label) return [];
+      taken.addBox(label.box, label.box);
+      return [label];
+    });
+  };
+  const placed = placeAll(everywhere);
+  return placed.length === wishes.length ? placed : placeAll(closeBy);
 }
 
-function place(wish: LabelWish, { ink, taken, room }: Surroundings, measure: Measure): PlacedLabel {
+function place(
+  wish: LabelWish,
+  { ink, taken, room }: Surroundings,
+  measure: Measure,
+  limits: Limits,
+): PlacedLabel | undefined {
   const box = measure(wish.text, wish.size);
   const [w, h] = wish.turn === 90 ? [box.height + box.depth, box.width] : [box.width, box.height + box.depth];
   const own = new InkIndex(wish.own ?? []);
@@ -91,14 +112,15 @@ function place(wish: LabelWish, { ink, taken, room }: Surroundings, measure: Mea
     if (taken.meets(grown(rect, clear)) || own.meets(rect)) return;
     const outside = room && (rect.left < room.from || rect.right > room.to) ? beyondRoom : 0;
     const total = cost + crossing * ink.count(rect) + outside;
-    if (!best || total < best.cost) best = { cost: total, rect, spot };
+    if (total <= limits.cost && (!best || total < best.cost)) best = { cost: total, rect, spot };
   };
   for (const [i, spot] of wish.spots.entries()) consider(spot, i);
-  for (let ring = 1; best === undefined || (best.cost >= ring + 2 && ring <= 16); ring++) {
+  for (let ring = 1; best === undefined || (best.cost >= ring + 2 && ring <= better); ring++) {
+    if (ring > limits.rings) return undefined;
     for (const spot of wish.spots) consider({ ...spot, gap: (spot.gap ?? 2) + ring * farther }, ring + 2);
-    for (const toward of around)
+    for (const toward of around) {
       consider({ ...wish.spots[0], toward, gap: (wish.spots[0].gap ?? 2) + ring * farther }, ring + 3);
-    if (ring > 400) throw new Error(`no place for the label ${wish.text}`);
+    }
   }
   const { rect, spot } = best;
   return { shape: labelShape(wish, rect, spot, box), box: rect, leader: leaderOf(rect, spot.at) };

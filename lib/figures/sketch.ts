@@ -1,7 +1,8 @@
 import type { Drawing, Shape, ShapeRef, Tone } from './drawing';
 import type { Measure } from './measure-text';
+import { flatten, type PathCommand, pathData, round } from './path';
 import { type LabelBox, type LabelWish, type PlacedLabel, placeLabels } from './place-labels';
-import { beyond, cross, type Point, scale, subtract, unit } from './vector';
+import { beyond, type Point, scale, subtract, unit } from './vector';
 
 export interface Style {
   stroke?: Tone;
@@ -12,8 +13,6 @@ export interface Style {
   /** A shape that labels may cover: washes, ordinates, the grid. */
   quiet?: boolean;
 }
-
-export type PathCommand = ['M' | 'L', Point] | ['C', Point, Point, Point] | ['Z'];
 
 /** A straight piece of ink that labels keep clear of. */
 export interface Ink {
@@ -118,7 +117,10 @@ export class Sketch {
     const [from, to] = [middle - width / 2 + edge, middle + width / 2 - edge];
     const labels = placeLabels(this.wishes, this.ink, this.measure, holdLabels ? { from, to } : undefined);
     for (const { box } of labels) this.reach({ x: box.left, y: box.top }, { x: box.right, y: box.bottom });
-    if (title) labels.push(this.titleBelow(title));
+    const lost = this.wishes.length - labels.length;
+    const missing = lost === 0 ? '' : `${lost} ${lost === 1 ? 'label has' : 'labels have'} no room here`;
+    const below = [title?.text, missing].filter((t) => t !== undefined && t !== '').join('; ');
+    if (below !== '') labels.push(this.titleBelow({ text: below, size: title?.size ?? 9 }));
     const { left, top, right, bottom } = this.box;
     const drawn = right - left + 2 * edge;
     const full = Math.max(width, drawn);
@@ -139,7 +141,12 @@ export class Sketch {
       }
       shapes.push({ ...shape, x: round(shape.x + shift.x), y: round(shape.y + shift.y) });
     }
-    return { width: round(full), height: round(bottom - top + 2 * edge), shapes, alt };
+    return {
+      width: round(full),
+      height: round(bottom - top + 2 * edge),
+      shapes,
+      alt: missing === '' ? alt : `${alt} ${missing}.`,
+    };
   }
 
   private titleBelow({ text, size }: { text: string; size: number }): PlacedLabel {
@@ -169,39 +176,6 @@ export class Sketch {
 /** White around a finished drawing, points. */
 const edge = 2;
 
-const round = (v: number): number => Math.round(v * 100) / 100 || 0;
-
 function strokes({ stroke, width, dash, fill, ref }: Style) {
   return { stroke, width, dash: dash && [...dash], fill, ref };
-}
-
-function pathData(commands: readonly PathCommand[], o: Point): string {
-  const write = (p: Point) => `${round(p.x + o.x)} ${round(p.y + o.y)}`;
-  return commands.map(([c, ...points]) => `${c}${points.map(write).join(' ')}`).join('');
-}
-
-/** The run of a path as straight pieces, eight to a curve. */
-function flatten(commands: readonly PathCommand[]): Point[] {
-  const run: Point[] = [];
-  for (const command of commands) {
-    if (command[0] === 'Z') continue;
-    if (command[0] !== 'C') {
-      run.push(command[1]);
-      continue;
-    }
-    const [, b, c, d] = command;
-    const a = run.at(-1) ?? b;
-    const bent =
-      Math.abs(cross(subtract(b, a), subtract(d, a))) + Math.abs(cross(subtract(c, a), subtract(d, a)));
-    const pieces = bent < 1e-6 ? 1 : 8;
-    for (let i = 1; i <= pieces; i++) {
-      const t = i / pieces;
-      const w = [(1 - t) ** 3, 3 * t * (1 - t) ** 2, 3 * t * t * (1 - t), t ** 3] as const;
-      run.push({
-        x: w[0] * a.x + w[1] * b.x + w[2] * c.x + w[3] * d.x,
-        y: w[0] * a.y + w[1] * b.y + w[2] * c.y + w[3] * d.y,
-      });
-    }
-  }
-  return run;
 }

@@ -4,7 +4,7 @@ import { drawPrimary } from '@/lib/figures/draw-primary';
 import { drawStructure } from '@/lib/figures/draw-structure';
 import type { Drawing, LabelShape, Shape } from '@/lib/figures/drawing';
 import { estimateText } from '@/lib/figures/measure-text';
-import { corpus } from './sample-frames';
+import { corpus, frame, joint, member } from './sample-frames';
 
 interface Box {
   left: number;
@@ -123,3 +123,35 @@ function runCrosses(points: readonly (readonly [number, number])[], box: Box): b
     return crosses(x0, y0, x, y, box);
   });
 }
+
+describe('a structure too dense for its labels', () => {
+  const bays = 12;
+  const dense = frame({
+    units: 'SI',
+    joints: Array.from({ length: bays * bays }, (_, i) =>
+      joint(`${i}`, (i % bays) * 6, Math.floor(i / bays) * 3.5, i < bays ? 'fixed' : undefined),
+    ),
+    members: Array.from({ length: bays * bays }, (_, i) => [
+      i % bays < bays - 1 ? [i, i + 1] : [],
+      [i, i + bays],
+    ])
+      .flat()
+      .flatMap(([a, b]) =>
+        a !== undefined && b !== undefined && b < bays * bays ? [member(`${a}`, `${b}`)] : [],
+      ),
+  });
+
+  it('is drawn without those that would stand far off, and says how many', () => {
+    const drawing = drawStructure(dense, { width: 300 });
+    const told = labelsOf(drawing).find((l) => l.text.includes('no room here'));
+    const names = labelsOf(drawing).filter((l) => l.ref?.of === 'joint').length;
+    expect(names).toBeLessThan(bays * bays);
+    expect(told?.text).toContain(`${bays * bays - names} labels have no room here`);
+    expect(drawing.alt).toContain('no room here');
+    expect(drawing.width).toBe(300);
+  });
+
+  it.each(drawings)('is none of these: %s', (_, drawing) => {
+    expect(drawing.alt).not.toContain('no room');
+  });
+});
