@@ -113,6 +113,7 @@ function addWeights(
     const middle = view.at(at(0.5 * length));
     const tip = beyond(middle, { x: 0, y: 1 }, 17);
     sketch.arrow(beyond(middle, { x: 0, y: 1 }, 4), tip, { ...pen, ref: look.ref }, 5);
+    sketch.reserve(beyond(tip, { x: 0, y: 1 }, 1.4 * size));
     sketch.label({
       text: `own weight $${magnitude(member.weight, 'distributed', frame.units)}$`,
       size: size * 0.9,
@@ -120,8 +121,8 @@ function addWeights(
       ref: look.ref,
       rank: 1,
       spots: [
-        { at: beyond(middle, { x: 0, y: 1 }, 11), toward: { x: 1, y: 0 }, gap: 5 },
         { at: tip, toward: { x: 0, y: 1 }, gap: 2 },
+        { at: beyond(middle, { x: 0, y: 1 }, 11), toward: { x: 1, y: 0 }, gap: 5 },
       ],
     });
   }

@@ -97,6 +97,11 @@ export class Sketch {
     });
   }
 
+  /** Keeps room for a label that will stand there, so that dimensions run beyond it. */
+  reserve(...points: readonly Point[]): void {
+    this.reach(...points);
+  }
+
   /** Ink that is not seen: keeps labels out of a place that reads as one thing. */
   shade(a: Point, b: Point): void {
     this.leave([a, b], {});

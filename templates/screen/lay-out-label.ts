@@ -44,6 +44,15 @@ export function measureLabel(text: string, size: number): TextBox {
   return { width: width * size, height: height * size, depth: depth * size };
 }
 
+/** Width in em of the widest piece of a formula that KaTeX keeps on one line; nought where it cannot be set. */
+export function widestPiece(tex: string): number {
+  try {
+    return Math.max(...katexBases(tex, false).map((base) => place(base, root, 0, 0, [])), 0);
+  } catch {
+    return 0;
+  }
+}
+
 function layOut(text: string): LabelLayout {
   const layout: LabelLayout = { runs: [], width: 0, height: 0.66, depth: 0 };
   for (const piece of splitRichText(text)) {
@@ -85,7 +94,7 @@ function place(node: KatexNode, from: Inherited, x: number, y: number, runs: Lab
     size: from.size * meaning.scale,
     align: meaning.align ?? from.align,
   };
-  const start = x + em(node.style?.marginLeft) * to.size;
+  const start = x + (em(node.style?.marginLeft) + em(node.style?.paddingLeft)) * to.size;
   const after = em(node.style?.marginRight) * to.size;
   if (node.text !== undefined) return placeSymbol(node, to, start, y, runs) + after;
   if (meaning.role === 'stack') return placeStack(node, to, start, y, runs) + after;
