@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { estimateText } from '@/lib/figures/measure-text';
 import { openFaces } from '@/lib/typeset/face';
 import { layOutTex } from '@/lib/typeset/lay-out-tex';
-import { layOutLabel, measureLabel } from '@/templates/screen/lay-out-label';
+import { layOutLabel, measureLabel, widestPiece } from '@/templates/screen/lay-out-label';
 
 const resolve = createRequire(import.meta.url).resolve;
 const faces = openFaces((name) => readFileSync(resolve(`katex/dist/fonts/${name}.ttf`)));
@@ -46,5 +46,17 @@ describe('labels on screen', () => {
 
   it.each(labels)('are no wider than the estimate that drawings fall back on: %s', (tex) => {
     expect(measureLabel(`$${tex}$`, 10).width).toBeLessThanOrEqual(estimateText(`$${tex}$`, 10).width + 0.6);
+  });
+});
+
+describe('the widest piece of a formula', () => {
+  it('is what KaTeX never breaks: a fraction as a whole, a sum term by term', () => {
+    const fraction = '\\displaystyle\\frac{24.60\\times20.00+5.00\\times14.00}{40.00}';
+    expect(widestPiece(fraction)).toBeCloseTo(layOutTex(fraction, false, faces).width, 1);
+    expect(widestPiece('123.45+123.45+123.45')).toBeLessThan(layOutTex('123.45+123.45', false, faces).width);
+  });
+
+  it('counts the room of a root', () => {
+    expect(widestPiece('\\sqrt{X_1}')).toBeGreaterThan(widestPiece('X_1') + 0.8);
   });
 });

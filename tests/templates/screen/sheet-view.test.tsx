@@ -82,7 +82,7 @@ describe('SheetView', () => {
   });
 
   it('gives every member of a chain its own place to break before, with its equals sign', () => {
-    const links = show().match(/<span class="link">/g);
+    const links = show().match(/<span class="link" style="--piece:[\d.]+">/g);
     expect(links).toHaveLength(4);
     expect(words(show())).toContain('(down)');
   });
