@@ -27,6 +27,8 @@ const kept = new Map<string, LabelLayout>();
 const wordAdvance = 0.56;
 /** Words stand beside mathematics at this share of its size, as everywhere on a sheet. */
 const wordSize = 0.885;
+/** TeX's null delimiter space at either side of a fraction, em. */
+const nullDelimiter = 0.12;
 
 /** Lays out a label with KaTeX's own metrics: letters, scripts and accents, which is all that labels hold. */
 export function layOutLabel(text: string): LabelLayout {
@@ -87,6 +89,7 @@ const root: Inherited = { family: 'Main', bold: false, italic: false, size: 1, a
 function place(node: KatexNode, from: Inherited, x: number, y: number, runs: LabelRun[]): number {
   const meaning = classMeaning(node.classes ?? [], '');
   if (meaning.role === 'nothing') return x;
+  if (meaning.role === 'null-delimiter') return x + nullDelimiter * from.size;
   const to: Inherited = {
     family: meaning.family ?? from.family,
     bold: meaning.bold ?? from.bold,
