@@ -1,5 +1,7 @@
+import type { Member } from '@/lib/model/structure';
 import { addDimensions, type Stations } from './add-dimensions';
 import { addJointNames } from './add-joint-names';
+import { addMemberTexts } from './add-member-texts';
 import { addMembers, addReleases } from './add-members';
 import { addScaleBar } from './add-scale-bar';
 import { addSupports, supportSigns } from './add-supports';
@@ -17,6 +19,8 @@ export interface Show {
   scaleBar?: boolean;
   /** Members as thin lines. */
   thin?: boolean;
+  /** Rich text beside a member: "$2\,EI_0$", a section, its name. */
+  memberText?: (member: Member) => string | undefined;
   /** Redundants with their arrows, where the drawing has any; without them only what is taken out is seen. */
   redundants?: boolean;
 }
@@ -38,6 +42,7 @@ export function addStructure(sheet: Sheet, { frame, axes, signs }: Prepared, sho
   addSupports(sheet, frame, signs);
   addMembers(sheet, frame, axes, show);
   addReleases(sheet, frame, axes);
+  if (show.memberText) addMemberTexts(sheet, axes, show.memberText);
   if (show.names ?? true) addJointNames(sheet, frame, axes, signs);
 }
 

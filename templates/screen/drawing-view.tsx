@@ -30,6 +30,7 @@ export function DrawingView({ drawing, lit, onLight, className }: Props) {
       {...light}
     >
       {createElement(Fragment, null, ...drawn)}
+      {onLight ? createElement(Fragment, null, ...shapes.map(hitArea)) : null}
     </svg>
   );
 }
@@ -56,6 +57,13 @@ function ShapeView({ shape, lit }: { shape: Shape; lit: boolean }) {
     case 'circle':
       return <circle cx={shape.cx} cy={shape.cy} r={shape.r} {...look} />;
   }
+}
+
+/** A member is a thin line: what the pointer meets is a broad one over it, not seen. */
+function hitArea(shape: Shape) {
+  if (shape.kind !== 'line' || shape.ref?.of !== 'member') return null;
+  const { x1, y1, x2, y2, ref } = shape;
+  return createElement('line', { x1, y1, x2, y2, className: 'hit', 'data-of': ref.of, 'data-id': ref.id });
 }
 
 const isLit = (ref: ShapeRef | undefined, lit: ShapeRef | undefined): boolean =>

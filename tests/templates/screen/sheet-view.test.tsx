@@ -109,6 +109,13 @@ describe('SheetView', () => {
     expect(show()).not.toContain(' lit"');
   });
 
+  it('gives a pointer something broad to meet, only where it is listened to', () => {
+    expect(show({ onLight: () => undefined })).toMatch(
+      /<line[^>]*class="hit" data-of="member" data-id="A-B"/,
+    );
+    expect(show()).not.toContain('class="hit"');
+  });
+
   it('washes the line in hand and carries marks, deltas and answers of one line', () => {
     const at = (id: string, text: string) => (block: Block) => (block.id === id ? <i>{text}</i> : undefined);
     const markup = show({
