@@ -86,7 +86,7 @@ const NEUTRAL = new Set(
   delimsizinginner delimcenter op-symbol accent-body accent-full accentunder boxpad cancel-pad cancel-lap x-arrow-pad
   katex-root katex-overline katex-underline katex-smash katex-inner katex-fix katex-base katex-sizing fontsize-ensurer
   fbox leftmost brace-left brace-center brace-right halfarrow-left halfarrow-right overlay katex-overlay vlist-t2
-  vlist-r vlist vlist-s`.split(/\s+/),
+  vlist-r vlist vlist-s nobreak katex-vbox katex-thinbox`.split(/\s+/),
 );
 const SIZE_CLASS = /^(reset-)?size(\d+)$/;
 
@@ -127,7 +127,7 @@ function read(names: ReadonlySet<string>, tex: string): ClassMeaning {
     marginLeft: root ? 0.2777777778 : lap,
     marginRight: root ? -0.5555555556 : lap,
     padding: names.has('boxpad') ? 0.3 : names.has('cancel-pad') ? 0.2 : names.has('x-arrow-pad') ? 0.5 : 0,
-    zeroWidth: names.has('accent-body') && !names.has('accent-full'),
+    zeroWidth: names.has('katex-thinbox') || (names.has('accent-body') && !names.has('accent-full')),
   };
 }
 

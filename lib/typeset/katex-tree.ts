@@ -29,7 +29,8 @@ export function katexBases(tex: string, display: boolean): KatexNode[] {
   const bases: KatexNode[] = [];
   const visit = (node: KatexNode) => {
     if (node.classes?.includes('katex-tag')) throw new TypesetError('\\tag', tex);
-    if (node.classes?.includes('katex-newline')) throw new TypesetError('a line break outside an environment', tex);
+    if (node.classes?.includes('katex-newline'))
+      throw new TypesetError('a line break outside an environment', tex);
     if (node.classes?.includes('katex-base')) bases.push(node);
     else node.children?.forEach(visit);
   };

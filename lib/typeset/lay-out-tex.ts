@@ -40,7 +40,11 @@ function joinRuns(marks: readonly Mark[]): Mark[] {
       continue;
     }
     if (run && continues(run, end, mark)) {
-      run = { ...run, glyphs: [...run.glyphs, ...mark.glyphs], advances: [...run.advances, ...mark.advances] };
+      run = {
+        ...run,
+        glyphs: [...run.glyphs, ...mark.glyphs],
+        advances: [...run.advances, ...mark.advances],
+      };
       joined[place] = run;
     } else {
       run = mark;

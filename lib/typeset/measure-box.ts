@@ -38,11 +38,16 @@ export class BoxMeasurer {
       case 'nothing':
         return undefined;
       case 'line':
-        return { kind: 'line', width: 0, thickness: em(node.style?.borderBottomWidth) * to.size, colour: to.colour };
+        return {
+          kind: 'line',
+          width: 0,
+          thickness: em(node.style?.borderBottomWidth) * to.size,
+          colour: to.colour,
+        };
       case 'rule':
-        return this.rule(node, to, em(node.style?.borderTopWidth), em(node.style?.bottom));
+        return this.rule(node, to, [em(node.style?.borderTopWidth), em(node.style?.bottom)]);
       case 'separator':
-        return this.rule(node, to, em(node.style?.height), em(node.style?.verticalAlign));
+        return this.rule(node, to, [em(node.style?.height), em(node.style?.verticalAlign)]);
       case 'stretch':
         return this.stretch(node, meaning, to);
       case 'stack':
@@ -90,12 +95,14 @@ export class BoxMeasurer {
     throw new TypesetError(`the character "${character}"`, this.tex);
   }
 
-  private rule(node: KatexNode, to: Inherited, height: number, rise: number): Box {
+  private rule(node: KatexNode, to: Inherited, [height, rise]: readonly [number, number]): Box {
     const ruleWidth = em(node.style?.borderRightWidth) * to.size;
-    const left = em(node.style?.marginLeft) * to.size;
+    // A separator's margin is written as one value for both sides, "0 -0.02em".
+    const both = em(node.style?.margin?.split(' ')[1]);
+    const left = (both + em(node.style?.marginLeft)) * to.size;
     return {
       kind: 'rule',
-      width: left + ruleWidth + em(node.style?.marginRight) * to.size,
+      width: left + ruleWidth + (both + em(node.style?.marginRight)) * to.size,
       ruleWidth,
       ruleHeight: height * to.size,
       shiftX: left,
@@ -122,7 +129,13 @@ export class BoxMeasurer {
     const rows = (node.children?.[0]?.children?.[0]?.children ?? []).map((row) => this.stackRow(row, to));
     const inner = Math.max(0, ...rows.map((row) => row.marginLeft + row.width + row.marginRight));
     const left = em(node.style?.marginLeft) * to.size;
-    return { kind: 'stack', inner, width: left + inner + em(node.style?.marginRight) * to.size, rows, shiftX: left };
+    return {
+      kind: 'stack',
+      inner,
+      width: left + inner + em(node.style?.marginRight) * to.size,
+      rows,
+      shiftX: left,
+    };
   }
 
   private stackRow(row: KatexNode, from: Inherited): StackRow {
@@ -192,7 +205,8 @@ function inherit(from: Inherited, meaning: ClassMeaning, node: KatexNode): Inher
 /** The face a browser picks: the family with its weight and slope as far as KaTeX ships them. */
 function faceName({ family, bold, italic }: Inherited): FaceName {
   if (family === 'Math') return bold ? 'KaTeX_Math-BoldItalic' : 'KaTeX_Math-Italic';
-  if (family === 'Main') return `KaTeX_Main-${bold ? (italic ? 'BoldItalic' : 'Bold') : italic ? 'Italic' : 'Regular'}`;
+  if (family === 'Main')
+    return `KaTeX_Main-${bold ? (italic ? 'BoldItalic' : 'Bold') : italic ? 'Italic' : 'Regular'}`;
   if (family === 'SansSerif') return `KaTeX_SansSerif-${bold ? 'Bold' : italic ? 'Italic' : 'Regular'}`;
   if (family === 'Caligraphic' || family === 'Fraktur') return `KaTeX_${family}-${bold ? 'Bold' : 'Regular'}`;
   return `KaTeX_${family}-Regular`;

@@ -18,11 +18,14 @@ const PARTS: readonly (readonly [string, number, number])[] = [
 export function placeBox(box: Box, x: number, y: number, room: number, out: Mark[]): void {
   switch (box.kind) {
     case 'symbol':
-      return placeSymbol(box, x + box.shiftX, y + box.shiftY, out);
+      placeSymbol(box, x + box.shiftX, y + box.shiftY, out);
+      return;
     case 'row':
-      return placeRow(box, x + box.shiftX, y + box.shiftY, room, out);
+      placeRow(box, x + box.shiftX, y + box.shiftY, room, out);
+      return;
     case 'stack':
-      return placeStack(box, x + box.shiftX, y, out);
+      placeStack(box, x + box.shiftX, y, out);
+      return;
     case 'line':
       out.push({ kind: 'rule', x, y, width: room, height: box.thickness, colour: box.colour });
       return;
@@ -37,7 +40,8 @@ export function placeBox(box: Box, x: number, y: number, room: number, out: Mark
       });
       return;
     case 'stretch':
-      return placeStretch(box, x, y, Math.max(room, box.minWidth), out);
+      placeStretch(box, x, y, Math.max(room, box.minWidth), out);
+      return;
     case 'picture':
       stretchPicture(box, { x, y, width: room, height: em(box.node.attributes?.height) * box.size }, out);
   }
@@ -88,7 +92,9 @@ function placeStack(box: Extract<Box, { kind: 'stack' }>, x: number, y: number, 
 /** Whether a box takes its width from the stack it stands in. */
 function fills(box: Box): boolean {
   if (box.kind === 'line' || box.kind === 'stretch' || box.kind === 'picture') return true;
-  return box.kind === 'row' && box.width === 0 && box.children.length === 1 && box.children[0]?.kind === 'picture';
+  return (
+    box.kind === 'row' && box.width === 0 && box.children.length === 1 && box.children[0]?.kind === 'picture'
+  );
 }
 
 function placeStretch(

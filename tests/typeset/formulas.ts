@@ -1,0 +1,63 @@
+/** Formulas of the kinds that structural calculations write: [TeX, display style]. */
+export const FORMULAS: readonly (readonly [string, boolean])[] = [
+  ['EI_0\\,f_{11}=4.20\\times 1+\\frac{7.20}{3\\times 2}=5.400\\unit{m}', true],
+  ['\\delta_{10}=\\int_0^L\\frac{M_0\\,\\bar m_1}{\\EI}\\dd{x}', true],
+  ['\\delta_{10}=\\int_0^L\\tfrac{M_0\\bar m_1}{\\EI}\\dd{x}', false],
+  ['\\sum_{j=1}^{n}f_{ij}X_j+\\delta_{i0}=0', true],
+  ['\\sum_{j=1}^{n}f_{ij}X_j+\\delta_{i0}=0', false],
+  ['\\Sigma M_1\\colon\\quad 40.00\\,R_{4y}-24.60\\times 20.00=0', true],
+  ['R_{1x}^{\\mathrm{D}}=R_{1x,0}^{\\mathrm{D}}+X_1^{\\mathrm{D}}\\bar R_{1x}', true],
+  [
+    '\\begin{bmatrix}f_{11}&f_{12}\\\\f_{21}&f_{22}\\end{bmatrix}\\begin{bmatrix}X_1\\\\X_2\\end{bmatrix}=-\\begin{bmatrix}\\delta_{10}\\\\\\delta_{20}\\end{bmatrix}',
+    true,
+  ],
+  ['\\begin{pmatrix}1&0\\\\0&1\\end{pmatrix}\\begin{vmatrix}a&b\\\\c&d\\end{vmatrix}', true],
+  [
+    '\\begin{pmatrix}f_{11}&f_{12}&f_{13}&f_{14}\\\\f_{21}&f_{22}&f_{23}&f_{24}\\\\f_{31}&f_{32}&f_{33}&f_{34}\\\\f_{41}&f_{42}&f_{43}&f_{44}\\end{pmatrix}',
+    true,
+  ],
+  [
+    '\\left[\\begin{array}{rr|r}5.400&-1.500&33.50\\\\-1.500&4.000&-25.01\\\\\\hline 0&3.583&-15.71\\end{array}\\right]',
+    true,
+  ],
+  [
+    '\\begin{aligned}X_1&=-\\frac{\\delta_{10}}{f_{11}}\\\\&=-\\frac{28\\,177.46}{7\\,209.60}=\\boxed{3.9083\\unit{kip}}\\end{aligned}',
+    true,
+  ],
+  ['\\begin{cases}R_A-wx,&0\\le x<a\\\\R_A-wa-P,&a\\le x\\le L\\end{cases}', true],
+  ['\\boxed{126.8\\unit{kN\\per m}}', true],
+  ['\\sqrt{M_x^2+M_y^2}=\\sqrt{(84.2)^2+(31.7)^2}', true],
+  ['\\sqrt{\\frac{\\frac{a}{b}+\\frac{c}{d}}{\\sum_i^n x_i}}', true],
+  ['\\left(\\frac{\\dfrac{a}{b}}{\\dfrac{c}{d}}\\right)\\left\\{\\frac{w L^4}{8}\\right\\}', true],
+  ['\\hat M+\\bar M_0+\\tilde y+\\vec F+\\dot u+\\overline{AB}+\\underline{x}+\\widehat{abc}', true],
+  [
+    '\\theta_A=\\frac{1}{\\EI}\\left[\\frac12 L\\,M_A\\cdot\\frac23-\\frac23 L\\cdot\\frac{wL^2}{8}\\right]',
+    true,
+  ],
+  ['\\underbrace{\\int_0^{a}\\frac{x^2}{\\EI}\\dd{x}}_{\\text{segment }AB}+\\overbrace{a+b}^{n}', true],
+  ['210\\times 10^6\\unit{kN/m^2}\\times 30.016\\times10^{-6}\\unit{m^4}=6303\\unit{kN\\,m^2}', true],
+  ['(0.8\\le\\mu_2\\le 2.0)', false],
+  ['\\mu_2=\\frac{\\gamma\\,h_s}{s_k}=1.40\\quad\\text{(satisfied)}', true],
+  [
+    '\\alpha\\beta\\gamma\\delta\\varepsilon\\zeta\\eta\\theta\\kappa\\lambda\\mu\\nu\\xi\\pi\\rho\\sigma\\tau\\varphi\\chi\\psi\\omega',
+    false,
+  ],
+  ['\\Gamma\\Delta\\Theta\\Lambda\\Xi\\Pi\\Sigma\\Phi\\Psi\\Omega', false],
+  ['\\mathbf{F}\\mathbf{X}+\\boldsymbol{\\delta}_0=\\mathbf{0}\\Rightarrow\\boldsymbol{-36.272}', true],
+  ['N=V\\sin\\alpha-\\tfrac{9}{41}\\cos\\alpha\\ne 0,\\ M_{\\max}\\ge M_{Ed}', false],
+  ['\\Big|_{0}^{L}\\bigl(\\tfrac{x^3}{3}\\bigr)\\Bigr)', true],
+  [
+    '\\frac{L}{360}=\\frac{6500}{360}=18.1\\unit{mm}\\quad\\therefore\\ 8.41\\unit{mm}\\leq 18.1\\unit{mm}',
+    true,
+  ],
+  ['X_1\\uparrow\\ Y\\downarrow\\ \\to\\ \\leftarrow\\ \\circlearrowleft\\ \\approx\\ \\pm\\ \\infty', false],
+  ['\\cancel{x+y}\\ \\bcancel{\\frac ab}', true],
+  ['\\textcolor{#c00000}{M_B=-45.2}', false],
+  ['\\sqrt[3]{\\frac{\\EI}{kL^3}}', true],
+  [
+    '\\underset{x}{\\max}\\ \\overset{!}{=}\\ \\substack{a\\\\b}\\ \\phantom{xx}\\ \\smash{y}\\ \\rule{1em}{0.4em}',
+    true,
+  ],
+  ['{=}\\;\\mathopen{}-\\frac{4.20}{2}+\\frac{7.20}{6\\times2}', true],
+  ['\\prod_{i=1}^n\\lim_{x\\to0}\\iint_A\\oint\\max_{0\\le x\\le L}', true],
+];
