@@ -4,7 +4,7 @@ import type { Sheet } from './fit-drawing';
 import type { MemberAxis } from './member-axis';
 import type { PathCommand } from './path';
 import type { LabelSpot } from './place-labels';
-import { arcsOf, valueAt } from './polynomial-curve';
+import { arcsOf, valueOn } from './polynomial-curve';
 import type { Ink } from './sketch';
 import { beyond, type Point, scale } from './vector';
 
@@ -30,7 +30,7 @@ export function addDiagram(
     beyond(view.at(axis.at(s)), out, value * ordinates.perValue);
   const commands: PathCommand[] = [['M', tip(0, 0)]];
   for (const piece of curve) {
-    commands.push(['L', tip(piece.from, valueAt(piece, piece.from))]);
+    commands.push(['L', tip(piece.from, valueOn(piece, piece.from))]);
     for (const { from, to, ordinates: o } of arcsOf(piece)) {
       const at = (k: 0 | 1 | 2 | 3) => tip(from + ((to - from) * k) / 3, o[k]);
       commands.push(['C', at(1), at(2), at(3)]);
@@ -43,7 +43,7 @@ export function addDiagram(
   for (let i = 1; i < count; i++) {
     const s = (i * axis.length) / count;
     const piece = curve.find((p) => s <= p.to) ?? curve.at(-1);
-    const value = piece ? valueAt(piece, s) : 0;
+    const value = piece ? valueOn(piece, s) : 0;
     if (Math.abs(value * ordinates.perValue) < 1) continue;
     sketch.line(tip(s, 0), tip(s, value), { stroke: 'ink3', width: 0.35, quiet: true });
   }

@@ -1,4 +1,5 @@
 import type { MemberDiagrams } from '@/lib/engine/diagrams/member-diagrams';
+import { valueAt } from '@/lib/engine/diagrams/piecewise';
 import { say } from './describe-structure';
 import { addStructure, prepare, type Show } from './draw-structure';
 import type { Drawing } from './drawing';
@@ -6,7 +7,7 @@ import { type DrawOptions, fitDrawing, type Sheet } from './fit-drawing';
 import { magnitude } from './magnitude';
 import type { Frame, MemberAxis } from './member-axis';
 import type { PathCommand } from './path';
-import { curveAt, slopeAt } from './polynomial-curve';
+import { slopeOf } from './polynomial-curve';
 import type { Ink } from './sketch';
 import { beyond, size as lengthOf, type Point, scale, unit } from './vector';
 
@@ -63,7 +64,7 @@ export function drawDeflected(frame: Frame, members: Shape, options: DeflectedOp
 }
 
 function moved(axis: MemberAxis, shape: Shape[string], s: number): Point {
-  const [u, v] = [curveAt(shape.along, s), curveAt(shape.across, s)];
+  const [u, v] = [valueAt(shape.along, s, 'left'), valueAt(shape.across, s, 'left')];
   return { x: u * axis.along.x + v * axis.left.x, y: u * axis.along.y + v * axis.left.y };
 }
 
@@ -75,7 +76,10 @@ function addBentMember(
 ): Ink[] {
   const place = (s: number) => view.at(beyond(axis.at(s), moved(axis, shape, s), factor));
   const tangent = (s: number): Point => {
-    const [du, dv] = [slopeAt(shape.along, s) * factor + 1, slopeAt(shape.across, s) * factor];
+    const [du, dv] = [
+      valueAt(shape.along.map(slopeOf), s, 'left') * factor + 1,
+      valueAt(shape.across.map(slopeOf), s, 'left') * factor,
+    ];
     const t = { x: du * axis.along.x + dv * axis.left.x, y: du * axis.along.y + dv * axis.left.y };
     return scale(view.direction(t), view.perUnit);
   };

@@ -1,3 +1,4 @@
+import { valueAt } from '@/lib/engine/diagrams/piecewise';
 import type { MomentPart } from '@/lib/engine/force-method/work';
 import { addDiagram, spotsAt } from './add-diagram';
 import { list, say } from './describe-structure';
@@ -6,12 +7,12 @@ import type { Drawing } from './drawing';
 import { type DrawOptions, fitDrawing, type Sheet } from './fit-drawing';
 import type { Frame } from './member-axis';
 import { partCurve } from './part-curve';
-import { curveAt, greatestOf } from './polynomial-curve';
+import { greatestOf } from './polynomial-curve';
 import { beyond, type Point } from './vector';
 import { decimalsFor, writeNumber } from './write-number';
 
 export interface PartsOptions extends DrawOptions {
-  /** Rich text of a part's label, by its place in `parts`; by default its signed height. */
+  /** Rich text of a part's label, by its place in `parts`; by default its greatest ordinate, signed. */
   label?: (part: MomentPart, index: number) => string;
   decimals?: number;
   show?: Show;
@@ -53,9 +54,9 @@ function addPart(
   const curve = partCurve(part);
   const ref = { of: 'member', id: axis.member.id } as const;
   const { tip, out, ink } = addDiagram(sheet, axis, curve, { perValue, side: -1 }, ref);
-  addCentroid(sheet, tip(part.centroid, curveAt(curve, part.centroid) / 2));
+  addCentroid(sheet, tip(part.centroid, valueAt(curve, part.centroid, 'left') / 2));
   const tall = tallPlace(part);
-  const value = curveAt(curve, tall);
+  const value = valueAt(curve, tall, 'left');
   sheet.sketch.label({
     text,
     size: sheet.size * 0.92,
@@ -66,10 +67,16 @@ function addPart(
   });
 }
 
+/** Where a shape has its greatest ordinate. A cubic ξ − ξ³ has it at ξ = 1/√3. */
 function tallPlace({ tall, from, to, shape, centroid }: MomentPart): number {
+  const length = to - from;
+  if (shape === 'cubic') {
+    const grows = centroid - from > length / 2;
+    return grows ? from + length / Math.sqrt(3) : to - length / Math.sqrt(3);
+  }
   if (tall === 'start') return from;
   if (tall === 'end') return to;
-  return shape === 'triangle' ? from + 3 * (centroid - from) - (to - from) : (from + to) / 2;
+  return shape === 'triangle' ? from + 3 * (centroid - from) - length : (from + to) / 2;
 }
 
 /** The sign of a centroid: a circle with a cross. */

@@ -1,5 +1,5 @@
 import type { PiecewisePolynomial } from '@/lib/engine/diagrams/piecewise-polynomial';
-import { derivative, greatestOf, isConstant, signChanges, valueAt } from './polynomial-curve';
+import { greatestOf, isConstant, rootsInside, slopeOf, valueOn } from './polynomial-curve';
 
 /** A value that a diagram tells. `at`: an end of the member, or inside. */
 export interface MarkedValue {
@@ -20,38 +20,40 @@ export function markedValues(curve: PiecewisePolynomial, greatest: number): Mark
   const same = (a: number, b: number) => Math.abs(a - b) <= 1e-7 * greatest;
   curve.forEach((piece, i) => {
     const [before, after] = [curve[i - 1], curve[i + 1]];
-    const [a, b] = [valueAt(piece, piece.from), valueAt(piece, piece.to)];
+    const [a, b] = [valueOn(piece, piece.from), valueOn(piece, piece.to)];
     if (isConstant(piece) && same(a, b)) {
-      const goesOn = before && isConstant(before) && same(valueAt(before, piece.from), a);
+      const goesOn = before && isConstant(before) && same(valueOn(before, piece.from), a);
       if (!goesOn) put((piece.from + piece.to) / 2, a, 'inside');
       return;
     }
     if (!before) put(piece.from, a, 'start');
-    else if (!same(valueAt(before, piece.from), a)) put(piece.from, a, 'inside');
-    for (const s of signChanges(derivative(piece))) put(s, valueAt(piece, s), 'inside');
+    else if (!same(valueOn(before, piece.from), a)) put(piece.from, a, 'inside');
+    for (const s of rootsInside(slopeOf(piece))) put(s, valueOn(piece, s), 'inside');
     if (!after) put(piece.to, b, 'end');
-    else if (!same(valueAt(after, piece.to), b)) put(piece.to, b, 'inside');
+    else if (!same(valueOn(after, piece.to), b)) put(piece.to, b, 'inside');
     else if (isPeak(curve, i)) put(piece.to, b, 'inside');
   });
   return marks;
 }
 
-/** Whether the diagram turns back, or bends sharply, where piece i meets the next. */
+/** Whether the diagram turns back where piece i meets the next. */
 function isPeak(curve: PiecewisePolynomial, i: number): boolean {
   const [piece, after] = [curve[i], curve[i + 1]];
   if (!piece || !after) return false;
-  const [left, right] = [valueAt(derivative(piece), piece.to), valueAt(derivative(after), after.from)];
+  // A little inside, since a smooth peak has no slope where the pieces meet.
+  const left = valueOn(slopeOf(piece), piece.to - 1e-3 * (piece.to - piece.from));
+  const right = valueOn(slopeOf(after), after.from + 1e-3 * (after.to - after.from));
   return left * right < 0;
 }
 
 /** Where the diagram passes through zero inside the member. */
 export function zerosOf(curve: PiecewisePolynomial): number[] {
   const greatest = greatestOf(curve);
-  const zeros = curve.flatMap(signChanges);
+  const zeros = curve.flatMap(rootsInside);
   curve.slice(1).forEach((piece, i) => {
     const before = curve[i];
     if (!before) return;
-    const [a, b] = [valueAt(before, before.to), valueAt(piece, piece.from)];
+    const [a, b] = [valueOn(before, before.to), valueOn(piece, piece.from)];
     if (Math.max(Math.abs(a), Math.abs(b)) < 1e-9 * greatest && greatest > 0) zeros.push(piece.from);
   });
   return zeros;

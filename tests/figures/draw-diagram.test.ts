@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { PiecewisePolynomial } from '@/lib/engine/diagrams/piecewise-polynomial';
 import { drawDiagram } from '@/lib/figures/draw-diagram';
 import type { Drawing } from '@/lib/figures/drawing';
-import { arcsOf, signChanges, valueAt } from '@/lib/figures/polynomial-curve';
+import { arcsOf, rootsInside, valueOn } from '@/lib/figures/polynomial-curve';
 import { frame, joint, member } from './sample-frames';
 
 const none: PiecewisePolynomial = [{ from: 0, to: 8, c: [0] }];
@@ -95,6 +95,15 @@ describe('drawDiagram', () => {
     ).toEqual(['$+30.00$']);
   });
 
+  it('tells a smooth peak that lies where two pieces meet', () => {
+    const M: PiecewisePolynomial = [
+      { from: 0, to: 4, c: [0, 24, -3] },
+      { from: 4, to: 8, c: [48, 0, -3] },
+    ];
+    const drawing = drawDiagram(simple, { 'A-B': { N: none, V: none, M } }, { which: 'M', width: 426 });
+    expect(labels(drawing)).toEqual(['$+48.00$']);
+  });
+
   it('marks where the moment passes through zero', () => {
     // Fixed at both ends: M = −w l²/12 + w l s/2 − w s²/2, zero at 0.2113 l (AISC Manual, table 3-23, case 15).
     const M: PiecewisePolynomial = [{ from: 0, to: 8, c: [-32, 24, -3] }];
@@ -139,7 +148,7 @@ describe('curves of polynomials', () => {
     const [a, b, c, d] = arc?.ordinates ?? [0, 0, 0, 0];
     for (const t of [0, 0.2, 0.5, 0.9, 1]) {
       const bezier = (1 - t) ** 3 * a + 3 * t * (1 - t) ** 2 * b + 3 * t * t * (1 - t) * c + t ** 3 * d;
-      expect(bezier).toBeCloseTo(valueAt(piece, 1 + 3 * t), 12);
+      expect(bezier).toBeCloseTo(valueOn(piece, 1 + 3 * t), 12);
     }
   });
 
@@ -149,14 +158,14 @@ describe('curves of polynomials', () => {
       const [a, b, c, d] = ordinates;
       for (const t of [0.25, 0.5, 0.75]) {
         const bezier = (1 - t) ** 3 * a + 3 * t * (1 - t) ** 2 * b + 3 * t * t * (1 - t) * c + t ** 3 * d;
-        expect(Math.abs(bezier - valueAt(piece, from + (to - from) * t))).toBeLessThan(0.0135);
+        expect(Math.abs(bezier - valueOn(piece, from + (to - from) * t))).toBeLessThan(0.0135);
       }
     }
   });
 
   it('find every sign change', () => {
     // (s − 1)(s − 2)(s − 3) = s³ − 6s² + 11s − 6
-    const roots = signChanges({ from: 0, to: 4, c: [-6, 11, -6, 1] });
+    const roots = rootsInside({ from: 0, to: 4, c: [-6, 11, -6, 1] });
     expect(roots.map((r) => Math.round(r * 1e9) / 1e9)).toEqual([1, 2, 3]);
   });
 });

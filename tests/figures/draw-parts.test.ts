@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { MomentPart, PartShape } from '@/lib/engine/force-method/work';
 import { drawMomentParts } from '@/lib/figures/draw-moment-parts';
 import { partCurve } from '@/lib/figures/part-curve';
-import { valueAt } from '@/lib/figures/polynomial-curve';
+import { valueOn } from '@/lib/figures/polynomial-curve';
 import { longBeam } from './sample-frames';
 
 /** Factor of the area, and distance of the centroid from the low end, of tables of properties of areas (from memory). */
@@ -46,8 +46,8 @@ function integrals(p: MomentPart): [number, number] {
         [1, 1],
       ] as const) {
         const s = piece.from + (i + k) * h;
-        area += (w * h * valueAt(piece, s)) / 6;
-        moment += (w * h * s * valueAt(piece, s)) / 6;
+        area += (w * h * valueOn(piece, s)) / 6;
+        moment += (w * h * s * valueOn(piece, s)) / 6;
       }
     }
   }
@@ -67,7 +67,7 @@ describe('shapes of moment diagrams by parts', () => {
     const [area, at] = integrals(p);
     expect(area).toBeCloseTo(60, 6);
     expect(at).toBeCloseTo(p.centroid, 6);
-    expect(valueAt(partCurve(p)[1] ?? { from: 0, to: 1, c: [] }, 2.5)).toBeCloseTo(30, 9);
+    expect(valueOn(partCurve(p)[1] ?? { from: 0, to: 1, c: [] }, 2.5)).toBeCloseTo(30, 9);
   });
 });
 
