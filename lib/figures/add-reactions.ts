@@ -24,7 +24,7 @@ export function addReactions(
   decimals?: number,
 ): void {
   const greatest = Math.max(...reactions.map((r) => Math.abs(r.value)), 0);
-  const least = decimals === undefined ? 1e-9 * greatest : 0.5 * 10 ** -decimals;
+  const least = decimals === undefined ? Math.max(1e-9 * greatest, 0.5e-4) : 0.5 * 10 ** -decimals;
   for (const { quantity, value } of reactions) {
     if (quantity.kind !== 'reaction' || Math.abs(value) < least) continue;
     const text = `$${writeNumber(Math.abs(value), decimals ?? exactDecimals([value], 0, 4), ready.frame.units)}$`;

@@ -22,6 +22,7 @@ export interface DeflectedOptions extends DrawOptions {
 type Shape = Readonly<Record<string, Pick<MemberDiagrams, 'across' | 'along'>>>;
 
 const arcs = 12;
+const figures = 3;
 
 /** The deflected shape over the structure at rest (dashed), exaggerated by a round factor that the drawing states. */
 export function drawDeflected(frame: Frame, members: Shape, options: DeflectedOptions): Drawing {
@@ -32,7 +33,7 @@ export function drawDeflected(frame: Frame, members: Shape, options: DeflectedOp
   });
   const greatest = farthest(bent);
   const marks = options.marks ?? (greatest.length > 0 ? [{ member: greatest.member, at: greatest.at }] : []);
-  const amount = magnitude(greatest.length, 'movement', frame.units);
+  const amount = magnitude(greatest.length, 'movement', frame.units, false, figures);
   const alt =
     greatest.length === 0
       ? 'Nothing moves.'
@@ -106,7 +107,7 @@ function addAmount(
   const motion = moved(axis, shape, s);
   const at = view.at(beyond(axis.at(s), motion, factor));
   const away = unit(view.direction(motion));
-  const text = `$${magnitude(lengthOf(motion), 'movement', frame.units)}$`;
+  const text = `$${magnitude(lengthOf(motion), 'movement', frame.units, false, figures)}$`;
   const side = { x: -away.y, y: away.x };
   sketch.circle(at, 1.6, { fill: 'pen' });
   sketch.label({

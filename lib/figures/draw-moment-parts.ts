@@ -30,7 +30,10 @@ export function drawMomentParts(
   const ready = prepare(frame);
   const greatest = Math.max(...parts.map((p) => greatestOf(partCurve(p))), 0);
   const decimals = options.decimals ?? decimalsFor([greatest]);
-  return layersOf(parts).map((layer) => {
+  const seen = parts
+    .map((part, index) => ({ part, index }))
+    .filter(({ part }) => Math.abs(part.height) > 1e-9 * greatest);
+  return layersOf(seen).map((layer) => {
     const told = layer.map(({ part }) => `${part.shape} on ${part.member}, height ${say(part.height)}`);
     return fitDrawing(frame, options, `Moments by parts: ${list(told)}.`, (sheet) => {
       for (const { part, index } of layer) {
@@ -95,9 +98,9 @@ interface Layered {
   index: number;
 }
 
-function layersOf(parts: readonly MomentPart[]): Layered[][] {
+function layersOf(parts: readonly Layered[]): Layered[][] {
   const layers: Layered[][] = [];
-  parts.forEach((part, index) => {
+  parts.forEach(({ part, index }) => {
     const covers = ({ part: other }: Layered) =>
       other.member === part.member && other.from < part.to - 1e-9 && other.to > part.from + 1e-9;
     const free = layers.find((layer) => !layer.some(covers));

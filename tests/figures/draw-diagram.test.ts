@@ -11,7 +11,7 @@ const simple = frame({
   joints: [joint('A', 0, 0, 'pinned'), joint('B', 8, 0, 'roller')],
   members: [member('A', 'B')],
 });
-/** Uniform load w on a simple span l: M = w s (l − s)/2, greatest w l²/8 (AISC Manual, table 3-23, case 1). */
+/** Uniform load w on a simple span l: M = w s (l − s)/2, greatest w l²/8 (AISC Manual, table 3-23, case 1, as recalled). */
 const uniform = (w: number, l: number): PiecewisePolynomial => [
   { from: 0, to: l, c: [0, (w * l) / 2, -w / 2] },
 ];
@@ -105,7 +105,7 @@ describe('drawDiagram', () => {
   });
 
   it('marks where the moment passes through zero', () => {
-    // Fixed at both ends: M = −w l²/12 + w l s/2 − w s²/2, zero at 0.2113 l (AISC Manual, table 3-23, case 15).
+    // Fixed at both ends: M = −w l²/12 + w l s/2 − w s²/2, zero at 0.2113 l (AISC Manual, table 3-23, case 15, as recalled).
     const M: PiecewisePolynomial = [{ from: 0, to: 8, c: [-32, 24, -3] }];
     const drawing = drawDiagram(simple, { 'A-B': { N: none, V: none, M } }, { which: 'M', width: 426 });
     const beam = drawing.shapes.find((s) => s.kind === 'line' && s.ref?.of === 'member');

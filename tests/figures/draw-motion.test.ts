@@ -55,7 +55,7 @@ describe('drawDeflected', () => {
     joints: [joint('A', 0, 0, 'fixed'), joint('B', 3, 0)],
     members: [member('A', 'B')],
   });
-  /** Tip load: v = −P s²(3l − s)/6EI, tip −P l³/3EI (AISC Manual, table 3-23, case 22); here P/EI = 0.001. */
+  /** Tip load: v = −P s²(3l − s)/6EI, tip −P l³/3EI (AISC Manual, table 3-23, case 22, as recalled); here P/EI = 0.001. */
   const bent = {
     'A-B': {
       across: [{ from: 0, to: 3, c: [0, 0, -0.0015, 0.001 / 6] }],
@@ -76,8 +76,8 @@ describe('drawDeflected', () => {
   });
 
   it('writes the greatest displacement, P l³/3EI = 9 mm', () => {
-    expect(drawing.shapes.some((s) => s.kind === 'label' && s.text === '$9.0\\unit{mm}$')).toBe(true);
-    expect(drawing.alt).toContain('9.0 mm');
+    expect(drawing.shapes.some((s) => s.kind === 'label' && s.text === '$9.00\\unit{mm}$')).toBe(true);
+    expect(drawing.alt).toContain('9.00 mm');
   });
 
   it('writes no value where EI0 is not known', () => {
