@@ -1,0 +1,190 @@
+import type { Analysis } from '@/lib/model/analysis';
+import type { Load } from '@/lib/model/load';
+import { type Quantity, quantityKey } from '@/lib/model/quantity';
+import type { Member } from '@/lib/model/structure';
+import { type LocalLoads, localLoads, type MemberAxis, memberAxis } from '../diagrams/local-loads';
+import { loadEndForces } from '../diagrams/member-forces';
+import type { SparseColumn } from './sparse-lu';
+
+/** A member with what statics needs of it. */
+export interface Bar {
+  member: Member;
+  axis: MemberAxis;
+  start: number;
+  end: number;
+}
+
+/**
+ * Joint equilibrium of a structure as a matrix: three rows a joint (x, y, turning), a row more for each shear release,
+ * one column a force quantity. Moment rows and columns are divided by the mean member length, so that all entries are
+ * pure numbers and one tolerance serves every scale.
+ */
+export interface Equilibrium {
+  analysis: Analysis;
+  bars: Bar[];
+  quantities: Quantity[];
+  indexOf: Map<string, number>;
+  columns: SparseColumn[];
+  rowCount: number;
+  /** Rows that no force of the structure can enter: a hinge where nothing could turn. */
+  trivialRows: Set<number>;
+  /** What a moment quantity is divided by: true value = scaled value × scale. */
+  scale: number[];
+  length: number;
+}
+
+const shearAt = (bar: Bar, end: 'start' | 'end') => bar.member.releases?.[end].includes('shear') === true;
+
+/** Builds the matrix; members and supports must refer to joints that exist. */
+export function equilibrium(analysis: Analysis): Equilibrium {
+  const place = new Map(analysis.joints.map((j, i) => [j.id, i]));
+  const bars = analysis.members.map((member): Bar => {
+    const start = place.get(member.start) as number;
+    const end = place.get(member.end) as number;
+    const [a, b] = [analysis.joints[start], analysis.joints[end]];
+    if (!a || !b) throw new Error(`member ${member.id} has no joint`);
+    return { member, axis: memberAxis(a, b), start, end };
+  });
+  const length = bars.reduce((sum, b) => sum + b.axis.L, 0) / bars.length;
+  const releases = bars.flatMap((b) =>
+    (['start', 'end'] as const).filter((e) => shearAt(b, e)).map((e) => ({ b, e })),
+  );
+  const eq: Equilibrium = {
+    analysis,
+    bars,
+    quantities: [],
+    indexOf: new Map(),
+    columns: [],
+    rowCount: 3 * analysis.joints.length + releases.length,
+    trivialRows: new Set(),
+    scale: [],
+    length,
+  };
+  const rowOf = new Map(
+    releases.map(({ b, e }, i) => [`${b.member.id}:${e}`, 3 * analysis.joints.length + i]),
+  );
+  for (const bar of bars) addMember(eq, bar, rowOf);
+  analysis.joints.forEach((joint, j) => {
+    const s = joint.support;
+    if (!s) return;
+    const [c, n] = [Math.cos((s.angle * Math.PI) / 180), Math.sin((s.angle * Math.PI) / 180)];
+    if (s.x !== 'free')
+      push(eq, { kind: 'reaction', joint: joint.id, component: 'x' }, 1, [
+        [3 * j, c],
+        [3 * j + 1, n],
+      ]);
+    if (s.y !== 'free')
+      push(eq, { kind: 'reaction', joint: joint.id, component: 'y' }, 1, [
+        [3 * j, -n],
+        [3 * j + 1, c],
+      ]);
+    if (s.turn !== 'free')
+      push(eq, { kind: 'reaction', joint: joint.id, component: 'turn' }, length, [[3 * j + 2, 1]]);
+  });
+  const used = new Set(eq.columns.flatMap((c) => c.rows));
+  for (let r = 0; r < eq.rowCount; r++) if (!used.has(r)) eq.trivialRows.add(r);
+  return eq;
+}
+
+function push(eq: Equilibrium, quantity: Quantity, scale: number, entries: [number, number][]): void {
+  const kept = entries.filter(([, v]) => Math.abs(v) > 1e-15);
+  eq.indexOf.set(quantityKey(quantity), eq.quantities.length);
+  eq.quantities.push(quantity);
+  eq.scale.push(scale);
+  eq.columns.push({ rows: kept.map(([r]) => r), values: kept.map(([, v]) => v) });
+}
+
+/**
+ * Member forces on its joints. N pulls both joints together; the shear (M1 − M0)/L that end moments bring acts on the
+ * start by −V and on the end by +V across; M0 turns the start by +M0 and M1 the end by −M1.
+ */
+function addMember(eq: Equilibrium, bar: Bar, rowOf: ReadonlyMap<string, number>): void {
+  const { member, axis, start, end } = bar;
+  const { c, s, L } = axis;
+  const released = (at: 'start' | 'end', what: 'moment' | 'axial') =>
+    member.releases?.[at].includes(what) === true;
+  if (!released('start', 'axial') && !released('end', 'axial')) {
+    push(eq, { kind: 'axial', member: member.id }, 1, [
+      [3 * start, c],
+      [3 * start + 1, s],
+      [3 * end, -c],
+      [3 * end + 1, -s],
+    ]);
+  }
+  const shear = eq.length / L;
+  for (const at of ['start', 'end'] as const) {
+    if (released(at, 'moment')) continue;
+    const v = at === 'start' ? -shear : shear;
+    const entries: [number, number][] = [
+      [3 * start, v * s],
+      [3 * start + 1, -v * c],
+      [3 * end, -v * s],
+      [3 * end + 1, v * c],
+      at === 'start' ? [3 * start + 2, 1] : [3 * end + 2, -1],
+    ];
+    for (const e of ['start', 'end'] as const) {
+      const row = rowOf.get(`${member.id}:${e}`);
+      if (row !== undefined) entries.push([row, v]);
+    }
+    push(eq, { kind: 'moment', member: member.id, end: at }, eq.length, entries);
+  }
+}
+
+/** What a set of loads brings to every row (scaled as the rows), and what it does to each member on its own. */
+export interface LoadState {
+  rows: Float64Array;
+  local: LocalLoads[];
+  /** Axial force at the start where a release at the end fixes it. */
+  startAxial: number[];
+}
+
+export function loadState(eq: Equilibrium, loads: readonly Load[]): LoadState {
+  const rows = new Float64Array(eq.rowCount);
+  const put = (r: number, v: number) => {
+    rows[r] = (rows[r] as number) + v;
+  };
+  const byMember = groupLoads(loads);
+  let next = 3 * eq.analysis.joints.length;
+  const startAxial: number[] = [];
+  const local = eq.bars.map((bar) => {
+    const { member, axis, start, end } = bar;
+    const mine = byMember(member.id);
+    const l = localLoads(mine.loads, member, axis);
+    for (const w of [...l.spread, ...l.points]) w.index = mine.places[w.index] as number;
+    const { V0, V1, N1 } = loadEndForces(l, axis.L);
+    const N = member.releases?.end.includes('axial') === true ? -N1 : 0;
+    startAxial.push(N);
+    put(3 * start, -V0 * -axis.s + N * axis.c);
+    put(3 * start + 1, -V0 * axis.c + N * axis.s);
+    put(3 * end, V1 * -axis.s - (N + N1) * axis.c);
+    put(3 * end + 1, V1 * axis.c - (N + N1) * axis.s);
+    if (shearAt(bar, 'start')) put(next++, V0);
+    if (shearAt(bar, 'end')) put(next++, V1);
+    return l;
+  });
+  eq.analysis.joints.forEach((joint, j) => {
+    for (const load of byMember.joints(joint.id)) {
+      put(3 * j, load.x);
+      put(3 * j + 1, load.y);
+      put(3 * j + 2, load.couple / eq.length);
+    }
+  });
+  return { rows, local, startAxial };
+}
+
+/** Loads by the member or joint they stand on, with their places in the case; own weight is everybody's. */
+function groupLoads(loads: readonly Load[]) {
+  const members = new Map<string, number[]>();
+  const joints = new Map<string, Extract<Load, { kind: 'joint' }>[]>();
+  const everybody: number[] = [];
+  loads.forEach((load, i) => {
+    if (load.kind === 'self-weight') everybody.push(i);
+    else if (load.kind === 'joint') joints.set(load.joint, [...(joints.get(load.joint) ?? []), load]);
+    else if (load.kind !== 'settlement') members.set(load.member, [...(members.get(load.member) ?? []), i]);
+  });
+  const find = (id: string) => {
+    const places = [...everybody, ...(members.get(id) ?? [])].sort((a, b) => a - b);
+    return { places, loads: places.map((i) => loads[i] as Load) };
+  };
+  return Object.assign(find, { joints: (id: string) => joints.get(id) ?? [] });
+}

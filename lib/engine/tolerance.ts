@@ -1,0 +1,9 @@
+/** Every tolerance of the engine, by name. All are relative; nothing is compared with zero. */
+export const tolerance = {
+  /** A pivot of the equilibrium matrix, columns scaled to length 1, below which a column adds nothing new. */
+  pivot: 1e-9,
+  /** A self-stress entry, relative to the largest of its state, below which a quantity is fixed by equilibrium. */
+  fixed: 1e-9,
+  /** Agreement of the two ways, joint equilibrium, reciprocity and gaps, relative to the largest value of their kind. */
+  check: 1e-7,
+} as const;
