@@ -1,6 +1,6 @@
 import { MATH_SCALE, type RichItem, type RichStyle } from '@/lib/typeset/rich-line';
-import { splitAtRelations } from '@/lib/typeset/split-at-relations';
 import { type RichPiece, splitRichText } from '@/lib/typeset/split-rich-text';
+import { splitTopLevel } from '@/lib/typeset/split-top-level';
 import type { Typesetter } from '@/lib/typeset/typesetter';
 
 /** An item that a line cannot break within, with `gap` the space before it that a break swallows (points). */
@@ -79,7 +79,7 @@ function setFormula(
   };
   const whole = set(piece.text);
   if (whole.width <= room) return [whole];
-  const parts = splitAtRelations(piece.text);
+  const parts = splitTopLevel(piece.text, 'relations');
   return parts.map((part, index) => ({
     ...set(index === 0 ? part : `{}${part}`),
     broken: index < parts.length - 1,

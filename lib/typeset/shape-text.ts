@@ -9,6 +9,7 @@ export type ShapedText = {
 };
 
 export type ShapedRun = {
+  readonly text: string;
   readonly face: Face;
   readonly x: number;
   readonly glyphs: readonly Glyph[];
@@ -30,6 +31,7 @@ export function shapeText(text: string, name: FaceName, faces: Faces): ShapedTex
     const { glyphs, positions } = face.font.layout(part);
     const advances = positions.map((position) => position.xAdvance / em);
     runs.push({
+      text: part,
       face,
       x,
       glyphs: glyphs.map((glyph) => ({ ...pick(glyph), advance: glyph.advanceWidth / em })),
