@@ -73,7 +73,7 @@ function setFormula(
 ): (Omit<Extract<RichItem, { kind: 'math' }>, 'x'> & { broken?: boolean })[] {
   const size = style.size * MATH_SCALE;
   const set = (source: string) => {
-    const tex = piece.bold && NUMBER.test(source) ? `\\mathbf{${source}}` : source;
+    const tex = piece.bold && NUMBER.test(source) ? `\\boldsymbol{${source}}` : source;
     const laid = typesetter.tex(tex, false);
     return { kind: 'math' as const, size, width: laid.width * size, laid, tex };
   };

@@ -1,3 +1,5 @@
+import { texInWords } from '@/lib/typeset/tex-in-words';
+
 /** A piece of rich text: words, bold words, or TeX; `bold` on TeX tells that it stands within bold words. */
 export type RichPiece = { readonly kind: 'words' | 'tex'; readonly text: string; readonly bold: boolean };
 
@@ -18,9 +20,9 @@ export function splitRichText(text: string): RichPiece[] {
   return pieces;
 }
 
-/** Rich text as plain words, for bookmarks, titles and alternative text; TeX stays as it is written. */
+/** Rich text as plain words, for bookmarks, titles and alternative text. */
 export function plainText(text: string): string {
   return splitRichText(text)
-    .map((piece) => piece.text)
+    .map((piece) => (piece.kind === 'tex' ? texInWords(piece.text) : piece.text))
     .join('');
 }

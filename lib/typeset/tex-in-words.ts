@@ -115,6 +115,10 @@ export function texInWords(tex: string): string {
     .trim();
 }
 
+/** A sign between two terms, as against one before a number. */
+const SUM = /^[-+]$/;
+const TERM = /[\p{L}\p{M}\p{N})\]°²³]\s*$/u;
+
 class Reader {
   private at = 0;
   constructor(private readonly tokens: readonly string[]) {}
@@ -123,7 +127,7 @@ class Reader {
   until(end: string): string {
     let words = '';
     for (let token = this.next(); token !== undefined && token !== end; token = this.next())
-      words += this.word(token);
+      words += SUM.test(token) && TERM.test(words) ? ` ${this.word(token)} ` : this.word(token);
     return words;
   }
 

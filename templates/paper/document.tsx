@@ -20,9 +20,10 @@ export function PaperDocument({ document, geometry, paint }: Props) {
       language={document.language}
     >
       {document.pages.map((page, index) => (
-        <Page key={page.label} size={[width, height]} wrap={false}>
+        <Page key={page.label} size={[width, height]}>
           <Canvas
-            style={{ position: 'absolute', left: 0, top: 0, width, height }}
+            // A point short of the page, or rounding makes the layout try to break it. A canvas does not clip.
+            style={{ position: 'absolute', left: 0, top: 0, width, height: height - 1 }}
             paint={() => {
               paint(page, index);
               return null;

@@ -42,7 +42,7 @@ export function pageGeometry(size: PaperSize): PageGeometry {
     textLeft: textLeft * MM,
     textWidth: (width - textLeft - 16) * MM,
     top: 19 * MM,
-    bottom: (height - 15 - 2) * MM,
+    bottom: (height - 15 - 3.5) * MM,
     runBaseline: 14 * MM,
     footLine: (height - 14.4) * MM,
     footBaseline: (height - 9.2) * MM,

@@ -28,6 +28,9 @@ declare module 'pdfkit' {
     readonly page: { fonts: Record<string, unknown>; readonly width: number; readonly height: number };
     readonly outline: PdfOutline;
     readonly _font: PdfFont;
+    info: Record<string, string | Date | undefined>;
+    /** Writes the XMP packet from `info`; called by end(). */
+    endMetadata(): void;
     readonly _root: { readonly data: Record<string, unknown> };
     on(event: 'data', listener: (chunk: Uint8Array) => void): this;
     on(event: 'end', listener: () => void): this;

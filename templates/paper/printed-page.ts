@@ -6,7 +6,15 @@ export type PrintedPage = {
   /** Page label of the file: "S-03.2", "cover". */
   readonly label: string;
   readonly destinations: readonly { readonly name: string; readonly y: number }[];
-  readonly bookmarks: readonly { readonly title: string; readonly level: 0 | 1; readonly y: number }[];
+  readonly bookmarks: readonly Bookmark[];
+};
+
+/** Level 0 is a sheet or a page of its own, level 1 a section, which the index lists with its rich title. */
+export type Bookmark = {
+  readonly title: string;
+  readonly level: 0 | 1;
+  readonly y: number;
+  readonly section?: { readonly id: string; readonly title: string };
 };
 
 /** A file attached as the machine-readable form of what is printed (ISO 32000-2, 14.13: associated file, Data). */

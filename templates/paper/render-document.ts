@@ -17,7 +17,7 @@ import type { PrintedDocument, PrintedPage } from './printed-page';
  * the pdfkit document, and with it embedded glyphs, alternative text, links, page labels and associated files.
  */
 export async function renderDocument(printed: PrintedDocument): Promise<Uint8Array> {
-  const doc = new PDFDocument({
+  const doc = new PaperFile({
     compress: true,
     pdfVersion: '1.7',
     lang: printed.language,
@@ -53,6 +53,18 @@ export async function renderDocument(printed: PrintedDocument): Promise<Uint8Arr
   }
   renderPDF(doc, await layoutDocument(root, Font));
   return bytes;
+}
+
+/** pdfkit copies `info` into the XMP packet as it stands; XML wants its three signs escaped. */
+class PaperFile extends PDFDocument {
+  override endMetadata(): void {
+    const escaped = (value: string | Date | undefined) =>
+      typeof value === 'string'
+        ? value.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;')
+        : value;
+    this.info = Object.fromEntries(Object.entries(this.info).map(([key, value]) => [key, escaped(value)]));
+    super.endMetadata();
+  }
 }
 
 function collect(doc: PDFDocument): Promise<Uint8Array> {

@@ -19,8 +19,8 @@ export type SheetPrint = {
 /** One sheet by itself, as it is looked at before it goes into a package: PDF bytes and the labels of its pages. */
 export async function renderSheet(print: SheetPrint): Promise<{ bytes: Uint8Array; labels: string[] }> {
   const { sheet, imprint, size } = print;
-  const place = (index: number, count: number) => `${index + 1} of ${count}`;
-  const pages = setSheet(sheet, { size, imprint, place }, typesetter);
+  const flowed = setSheet(sheet, { size }, typesetter);
+  const pages = flowed.frame({ imprint, place: (index) => `${index + 1} of ${flowed.count}` });
   const bytes = await renderDocument({
     title: `${imprint.job} ${sheet.number} ${sheet.title}`,
     author: imprint.office,

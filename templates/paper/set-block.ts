@@ -24,7 +24,10 @@ export type Setting = {
 const BETWEEN = 2.6 * MM;
 /** Space above a section's heading, and the least that must follow it on its page. */
 const ABOVE_HEADING = 7.6 * MM;
-const BELOW_HEADING = 1.2 * MM;
+/** Below a heading that goes on from the last page, where no line's own space follows. */
+const BELOW_AGAIN = 2.2 * MM;
+/** Between the sentence that leads in and the first equation. */
+const BELOW_LEAD = 0.5 * MM;
 /** Room between the ends of two margin notes. */
 const NOTE_GAP = 1.2 * MM;
 
@@ -42,7 +45,7 @@ function body(block: Block, { page, column, typesetter }: Setting): Strip[] {
   const { textWidth } = page;
   switch (block.kind) {
     case 'heading':
-      return [setHeading(block.id, block.text, ' ', page, typesetter)];
+      return [setHeading(block.id, block.text, page, typesetter)];
     case 'paragraph':
       return lineStrips(block.id, setLines(block.text, LOOKS.text, 'ink', textWidth, typesetter), false);
     case 'caution': {
@@ -66,7 +69,9 @@ function body(block: Block, { page, column, typesetter }: Setting): Strip[] {
       const lead =
         block.text === undefined ? [] : setLines(block.text, LOOKS.text, 'ink', textWidth, typesetter);
       const rows = block.rows.map((row) => setEquation(row, block.id, column, textWidth, typesetter));
-      return [...lineStrips(block.id, lead, true), ...rows];
+      const [first, ...more] = rows;
+      if (!first || lead.length === 0) return rows;
+      return [...lineStrips(block.id, lead, true), { ...first, before: BELOW_LEAD }, ...more];
     }
     case 'table':
       return setTable(block, page, typesetter);
@@ -75,21 +80,22 @@ function body(block: Block, { page, column, typesetter }: Setting): Strip[] {
   }
 }
 
-function setHeading(
-  id: string,
-  text: string,
-  extra: string,
-  page: PageGeometry,
-  typesetter: Typesetter,
-): Strip {
+function setHeading(id: string, text: string, page: PageGeometry, typesetter: Typesetter): Strip {
   const bold = (words: string) => `**${words.replaceAll('**', '')}**`;
-  const set = (rich: string, more: Partial<Strip>): Strip => {
+  const set = (rich: string, more: Partial<Strip> = {}): Strip => {
     const { ink, height } = stackLines(setLines(rich, LOOKS.headingAgain, 'ink', page.textWidth, typesetter));
-    return plainStrip(id, height + BELOW_HEADING, ink, { keep: true, ...more });
+    return plainStrip(id, height, ink, { keep: true, ...more });
   };
-  const again = set(`${bold(text)} continued${extra.trim()}`, {});
+  const again = set(`${bold(text)} continued`);
   const note = marginNote({ id, heading: true }, baseline(LOOKS.headingAgain), page, typesetter);
-  return set(bold(text), { again: { ...again, ink: [...again.ink, ...note.ink], noteHeight: note.height } });
+  return set(bold(text), {
+    again: {
+      ...again,
+      height: again.height + BELOW_AGAIN,
+      ink: [...again.ink, ...note.ink],
+      noteHeight: note.height,
+    },
+  });
 }
 
 function withNote(block: Block, marks: LineMarks | undefined, strips: Strip[], setting: Setting): Strip[] {

@@ -16,7 +16,7 @@ export const INDENT = 5 * MM;
 const LONGEST = 7;
 /** The space before a relation, em (TeX's thick space). */
 const THICK = 0.2778;
-const AIR = 0.7 * MM;
+const AIR = 0.85 * MM;
 const LEAST = LOOKS.text.leading;
 /** The sign opens what follows it, so that a minus after it is a sign and not a subtraction. */
 const EQUALS = '{=}\\;\\mathopen{}';

@@ -6,8 +6,8 @@ import { legendInk } from './legend';
 import type { LineMarks } from './margin-note';
 import { frameInk } from './page-frame';
 import { type PaperSize, pageGeometry } from './page-geometry';
-import { paginate } from './paginate';
-import type { PrintedPage } from './printed-page';
+import { type Page, paginate } from './paginate';
+import type { Bookmark, PrintedPage } from './printed-page';
 
 /** A calc sheet as it is printed. */
 export type PrintedSheet = {
@@ -20,47 +20,52 @@ export type PrintedSheet = {
   readonly markedBy?: string;
 };
 
-export type SheetPlace = {
+export type SheetLook = {
   readonly size: PaperSize;
-  readonly imprint: Imprint;
+  /** Keep the margin's foot free for a seal on every page. */
   readonly sealed?: boolean;
-  /** "13 of 31" of the page with this index on the sheet and this count of pages. */
-  readonly place: (index: number, count: number) => string;
 };
 
-/** The sheet's pages, framed. Its first page is the destination named after its number, a line "S-03/7.5". */
-export function setSheet(sheet: PrintedSheet, at: SheetPlace, typesetter: Typesetter): PrintedPage[] {
-  const geometry = pageGeometry(at.size);
-  const legend = legendInk(sheet, geometry, at.sealed ?? false, typesetter);
-  const pages = paginate(
-    sheet.blocks,
-    { size: at.size, marks: sheet.marks, sealed: at.sealed, legend: legend.height },
-    typesetter,
-  );
-  return pages.map((page, index) => {
-    const label = `${sheet.number}.${index + 1}`;
-    const words = {
-      run: `${sheet.number} ${sheet.title}`,
-      label,
-      imprint: at.imprint,
-      place: at.place(index, pages.length),
-    };
-    const headings = page.anchors.filter(({ heading }) => heading !== undefined);
-    return {
-      ink: [...frameInk(words, geometry, typesetter), ...legend.ink, ...page.ink],
-      label,
-      destinations: [
-        ...(index === 0 ? [{ name: sheet.number, y: 0 }] : []),
-        ...page.anchors.map(({ block, y }) => ({ name: `${sheet.number}/${block}`, y })),
-      ],
-      bookmarks: [
-        ...(index === 0 ? [{ title: `${sheet.number} ${sheet.title}`, level: 0 as const, y: 0 }] : []),
-        ...headings.map(({ block, y, heading = '' }) => ({
-          title: `${block} ${plainText(heading)}`,
-          level: 1 as const,
-          y,
-        })),
-      ],
-    };
-  });
+/** Where a sheet's pages stand: what the foot line says, and "13 of 31" of the page with this index. */
+export type SheetPlace = {
+  readonly imprint: Imprint;
+  readonly place: (index: number) => string;
+};
+
+/** A sheet set and broken into pages, but not yet framed: the count is known before the numbers are. */
+export type FlowedSheet = {
+  readonly count: number;
+  frame(at: SheetPlace): PrintedPage[];
+};
+
+/** Sets a sheet. Its first page is the destination named after its number, a line of it "S-03/7.5". */
+export function setSheet(sheet: PrintedSheet, look: SheetLook, typesetter: Typesetter): FlowedSheet {
+  const geometry = pageGeometry(look.size);
+  const legend = legendInk(sheet, geometry, look.sealed ?? false, typesetter);
+  const options = { ...look, marks: sheet.marks, legend: legend.height };
+  const pages = paginate(sheet.blocks, options, typesetter);
+  const frame = ({ imprint, place }: SheetPlace) =>
+    pages.map((page, index): PrintedPage => {
+      const label = `${sheet.number}.${index + 1}`;
+      const words = { run: `${sheet.number} ${sheet.title}`, label, imprint, place: place(index) };
+      return {
+        ink: [...frameInk(words, geometry, typesetter), ...legend.ink, ...page.ink],
+        label,
+        destinations: [
+          ...(index === 0 ? [{ name: sheet.number, y: 0 }] : []),
+          ...page.anchors.map(({ block, y }) => ({ name: `${sheet.number}/${block}`, y })),
+        ],
+        bookmarks: [
+          ...(index === 0 ? [{ title: `${sheet.number} ${sheet.title}`, level: 0 as const, y: 0 }] : []),
+          ...page.anchors.flatMap(sectionBookmark),
+        ],
+      };
+    });
+  return { count: pages.length, frame };
+}
+
+function sectionBookmark({ block, y, heading }: Page['anchors'][number]): Bookmark[] {
+  if (heading === undefined) return [];
+  const section = { id: block, title: heading };
+  return [{ title: `${block} ${plainText(heading)}`, level: 1, y, section }];
 }

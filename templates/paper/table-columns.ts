@@ -15,7 +15,7 @@ export type TableColumns = {
 
 /** Least space between columns, and the most that a loose table spreads them by, points. */
 const GAP = 10;
-const SPREAD = 24;
+const SPREAD = 26;
 /** Type of a table that is too wide for the page at full size. */
 const SCALES = [1, 0.93, 0.86, 0.8];
 
@@ -75,14 +75,15 @@ function share(extents: readonly Extent[], room: number): number[] | undefined {
 
 function place(widths: readonly number[], room: number) {
   const used = widths.reduce((sum, width) => sum + width, 0) + GAP * (widths.length - 1);
-  const spread = Math.max(0, Math.min(SPREAD, (room - used) / Math.max(1, widths.length)));
+  const gaps = Math.max(1, widths.length - 1);
+  const gap = GAP + Math.max(0, Math.min(SPREAD, (room - used) / gaps));
   let x = 0;
-  const columns = widths.map((width, index) => {
-    const own = { x, width: width + (index === widths.length - 1 ? 0 : spread) };
-    x += own.width + GAP;
+  const columns = widths.map((width) => {
+    const own = { x, width };
+    x += width + gap;
     return own;
   });
-  return { columns, width: Math.min(room, x - GAP) };
+  return { columns, width: Math.min(room, x - gap) };
 }
 
 /** Whether a row stands out in bold. */
