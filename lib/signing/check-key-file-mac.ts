@@ -1,7 +1,7 @@
 import * as asn1js from 'asn1js';
 import type { PFX } from 'pkijs';
 import type { Bytes } from './bytes';
-import { type KeyFileEngine, limitIterations } from './key-file-engine';
+import { type KeyFileEngine, limitIterations, mostIterations } from './key-file-engine';
 import { KeyFileError } from './key-file-error';
 import { oid } from './oid';
 
@@ -53,8 +53,9 @@ export async function checkKeyFileMac(pfx: PFX, password: Bytes, engine: KeyFile
     if (!(await pbmac1(engine, mac, content, password))) throw new KeyFileError('wrong-password');
     return;
   }
-  const iterations = data.iterations || 1;
-  limitIterations(new asn1js.Integer({ value: iterations }));
+  const iterations = data.iterations ?? 1;
+  // pkijs reads a count of more than three bytes as 0.
+  if (iterations === 0 || iterations > mostIterations) throw new KeyFileError('unsupported-encryption');
   const hash = engine.getAlgorithmByOID(mac.digestAlgorithm.algorithmId);
   if (!('name' in hash)) throw new KeyFileError('unsupported-encryption');
   const right = await engine.verifyDataStampedWithPassword({

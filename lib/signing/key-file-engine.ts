@@ -4,7 +4,7 @@ import { KeyFileError } from './key-file-error';
 import { oid } from './oid';
 
 /** A key file states its own iteration count; more than this is no honest file but a way to stall the reader. */
-const mostIterations = 5_000_000;
+export const mostIterations = 5_000_000;
 
 /** Refuses absurd iteration counts before any work is done. */
 export function limitIterations(node: unknown): void {
