@@ -1,0 +1,194 @@
+import type { Combination } from '@/lib/model/analysis';
+import { extremes } from '../diagrams/piecewise';
+import { type Context, pureValue } from './context';
+import { dimensions } from './dimensions';
+import { endForcesOf } from './end-forces';
+import { type Expression, number, product, sum, type Value } from './expression';
+import { exactDecimals } from './figure-plan';
+import { reactionValue } from './primary-step';
+import { type Relation, relate } from './relation';
+import { inCase, type SymbolName } from './symbol-name';
+
+/** A quantity in every case and combination. Terms that are factored before they are summed carry a figure more. */
+export interface CombinedRow {
+  symbol: SymbolName;
+  /** By case, by combination; a value missing where the greatest of the cases do not superpose. */
+  cases: Record<string, number>;
+  combinations: Record<string, number>;
+  dimension: Value['dimension'];
+  decimals: number;
+  caseDecimals: number;
+  greatest: string;
+  least: string;
+}
+
+/** Step 14: factored sums of the cases and what governs. */
+export interface CombinationsStep {
+  kind: 'combinations';
+  combinations: readonly Combination[];
+  factorDecimals: number;
+  /** One combination worked in full. */
+  example?: { id: string; lines: Relation[] };
+  reactions: CombinedRow[];
+  ends: CombinedRow[];
+  /** Greatest and least span moments with their combination and place. */
+  spans: { member: string; max: Place; min: Place }[];
+}
+
+export interface Place {
+  by: string;
+  s: number;
+  M: number;
+}
+
+/** Rows of end forces are tabled up to so many members; beyond, the envelope speaks. */
+const most = { members: 40, lines: 6 };
+
+export function deriveCombinations(ctx: Context): CombinationsStep {
+  const { analysis, solution, figures } = ctx;
+  const { combinations } = analysis;
+  const factorDecimals = exactDecimals(
+    combinations.flatMap((c) => Object.values(c.factors)),
+    1,
+    4,
+  );
+  const reactions = combinations.length === 0 ? [] : reactionRows(ctx);
+  const ends = combinations.length === 0 || analysis.members.length > most.members ? [] : endRows(ctx);
+  const spans = spansOf(ctx);
+  const [first] = combinations;
+  const lines =
+    first &&
+    [
+      ...reactions.slice(0, most.lines),
+      ...ends.filter((r) => r.dimension.length === 1).slice(0, most.lines),
+    ].map((row) => combine(row, first, factorDecimals));
+  return {
+    kind: 'combinations',
+    combinations: solution.combinations.length === 0 ? [] : combinations,
+    factorDecimals,
+    example: first && lines ? { id: first.id, lines } : undefined,
+    reactions,
+    ends,
+    spans: figures ? spans : [],
+  };
+}
+
+/** γ_1 E_1 + γ_2 E_2 … of one quantity. */
+function combine(row: CombinedRow, { id, factors }: Combination, factorDecimals: number): Relation {
+  const terms = Object.entries(factors).map(
+    ([name, factor]): Expression =>
+      product(pureValue(factor, factorDecimals), {
+        kind: 'value',
+        symbol: inCase(row.symbol, name),
+        value: row.cases[name] ?? Number.NaN,
+        dimension: row.dimension,
+        decimals: row.caseDecimals,
+      }),
+  );
+  const formula = terms.length === 0 ? number(0) : sum(...terms);
+  return relate(inCase(row.symbol, id), formula, row, row.combinations[id]);
+}
+
+function reactionRows(ctx: Context): CombinedRow[] {
+  const { solution, analysis } = ctx;
+  const sample = solution.combinations[0]?.reactions ?? [];
+  return sample.map((r, k) => {
+    const shown = reactionValue(ctx, r, (s) => s);
+    const cases = Object.fromEntries(
+      analysis.cases.map((c) => [c.id, solution.cases[c.id]?.reactions[k]?.value ?? Number.NaN]),
+    );
+    const combined = Object.fromEntries(
+      solution.combinations.map((c) => [c.id, c.reactions[k]?.value ?? Number.NaN]),
+    );
+    return rowOf(ctx, ctx.names.quantity(r.quantity), cases, combined, shown);
+  });
+}
+
+function endRows(ctx: Context): CombinedRow[] {
+  const { solution, analysis, names } = ctx;
+  const byCase = analysis.cases.map((c) => ({
+    id: c.id,
+    ends: endForcesOf(ctx, solution.cases[c.id]?.members ?? {}),
+  }));
+  const byCombination = solution.combinations.map((c) => ({ id: c.id, ends: endForcesOf(ctx, c.members) }));
+  const seen = new Set<string>();
+  const pick = (list: typeof byCase, k: number, which: 'N' | 'V' | 'M') =>
+    Object.fromEntries(list.map(({ id, ends }) => [id, ends[k]?.[which] ?? Number.NaN]));
+  return (['M', 'V', 'N'] as const).flatMap((which) =>
+    (byCase[0]?.ends ?? []).flatMap((e, k): CombinedRow[] => {
+      const symbol =
+        which === 'M'
+          ? names.moment(e.member, e.end)
+          : which === 'V'
+            ? names.shear(e.member, e.end)
+            : names.axial(e.member, e.end);
+      const key = JSON.stringify(symbol);
+      if (seen.has(key)) return [];
+      seen.add(key);
+      const cases = pick(byCase, k, which);
+      if (Object.values(cases).every((v) => v === 0)) return [];
+      const moment = which === 'M';
+      const figures = {
+        dimension: moment ? dimensions.moment : dimensions.force,
+        decimals: moment ? ctx.figures.moment : ctx.figures.force,
+      };
+      return [rowOf(ctx, symbol, cases, pick(byCombination, k, which), figures)];
+    }),
+  );
+}
+
+function rowOf(
+  ctx: Context,
+  symbol: SymbolName,
+  cases: Record<string, number>,
+  combinations: Record<string, number>,
+  { dimension, decimals }: Pick<Value, 'dimension' | 'decimals'>,
+): CombinedRow {
+  const entries = Object.entries(combinations);
+  const [start = ['', 0] as [string, number]] = entries;
+  const greatest = entries.reduce((a, b) => (b[1] > a[1] ? b : a), start)[0];
+  const least = entries.reduce((a, b) => (b[1] < a[1] ? b : a), start)[0];
+  const caseDecimals = neededDecimals(ctx, cases, decimals);
+  return { symbol, cases, combinations, dimension, decimals, caseDecimals, greatest, least };
+}
+
+/** One figure more where the printed cases, factored and summed, would miss a printed sum by a unit. */
+function neededDecimals(ctx: Context, cases: Record<string, number>, decimals: number): number {
+  const round = (v: number, d: number) => Number(v.toFixed(d));
+  for (let d = decimals; d < decimals + 3; d++) {
+    const misses = ctx.analysis.combinations.some(({ factors }) => {
+      const exact = Object.entries(factors).reduce((t, [id, f]) => t + f * (cases[id] ?? Number.NaN), 0);
+      const printed = Object.entries(factors).reduce(
+        (t, [id, f]) => t + f * round(cases[id] ?? Number.NaN, d),
+        0,
+      );
+      return Math.abs(printed - round(exact, decimals)) > 0.9 * 10 ** -decimals;
+    });
+    if (!misses) return d;
+  }
+  return decimals + 3;
+}
+
+function spansOf(ctx: Context): CombinationsStep['spans'] {
+  const { solution, analysis } = ctx;
+  const strength = new Set(analysis.combinations.filter((c) => c.purpose === 'strength').map((c) => c.id));
+  const mine = solution.combinations.filter((c) => strength.has(c.id));
+  if (mine.length === 0) return [];
+  return analysis.members.map((m) => {
+    const places = mine.flatMap(({ id, members }) => {
+      const M = members[m.id]?.M;
+      if (!M) return [];
+      const { max, min } = extremes(M);
+      return [
+        { by: id, s: max.s, M: max.value },
+        { by: id, s: min.s, M: min.value },
+      ];
+    });
+    const [first = { by: '', s: 0, M: 0 }] = places;
+    return {
+      member: m.id,
+      max: places.reduce((a, b) => (b.M > a.M ? b : a), first),
+      min: places.reduce((a, b) => (b.M < a.M ? b : a), first),
+    };
+  });
+}

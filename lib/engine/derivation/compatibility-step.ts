@@ -1,0 +1,58 @@
+import type { Quantity } from '@/lib/model/quantity';
+import { type Context, redundantSymbol } from './context';
+import { flexibilityDimension, gapDimension } from './dimensions';
+import type { Value } from './expression';
+import type { SymbolName } from './symbol-name';
+import { flexibilitySymbol, gapSymbol } from './work-step';
+
+/** Step 9: one equation for each redundant; the gaps stand as step 8 found them. */
+export interface CompatibilityStep {
+  kind: 'compatibility';
+  redundants: { symbol: SymbolName; quantity: Quantity }[];
+  /** EI0 f_ij, row by row; zero where two unit states act on nothing in common. */
+  matrix: (Value | undefined)[][];
+  cases: { id: string; gaps: Value[]; rightSides: Value[] }[];
+}
+
+export function deriveCompatibility(ctx: Context): CompatibilityStep {
+  const { redundants, work } = ctx.solution;
+  const { figures } = ctx;
+  const matrix = redundants.map((_, i) =>
+    redundants.map((_, j): Value | undefined => {
+      const [a, b] = i >= j ? [i, j] : [j, i];
+      const found = work.flexibility.find((f) => f.i === a && f.j === b);
+      if (!found) return undefined;
+      const [qa, qb] = [redundants[i], redundants[j]];
+      if (!qa || !qb) return undefined;
+      const dimension = flexibilityDimension(qa, qb);
+      return {
+        kind: 'value',
+        symbol: flexibilitySymbol(i, j),
+        value: found.total,
+        dimension,
+        decimals: figures.flexibility,
+      };
+    }),
+  );
+  const cases = ctx.analysis.cases.map(({ id }) => {
+    const of = (i: number) => {
+      const gap = work.gaps.find((g) => g.case === id && g.i === i);
+      const q = redundants[i];
+      if (!gap || !q) throw new Error(`case ${id} has no gap ${i + 1}`);
+      const common = { kind: 'value', dimension: gapDimension(q), decimals: figures.gap } as const;
+      const movement: SymbolName = { letter: 'Δ', sub: [`${i + 1}`], super: id, timesEI0: true };
+      return {
+        gap: { ...common, symbol: gapSymbol(i, id), value: gap.total },
+        right: { ...common, symbol: movement, value: gap.rightSide },
+      };
+    };
+    const rows = redundants.map((_, i) => of(i));
+    return { id, gaps: rows.map((r) => r.gap), rightSides: rows.map((r) => r.right) };
+  });
+  return {
+    kind: 'compatibility',
+    redundants: redundants.map((quantity, i) => ({ symbol: redundantSymbol(i), quantity })),
+    matrix,
+    cases,
+  };
+}

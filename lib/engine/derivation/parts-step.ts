@@ -1,0 +1,91 @@
+import type { MomentPart } from '../force-method/work';
+import { type Context, lengthValue, placedMember } from './context';
+import { dimensions } from './dimensions';
+import type { Value } from './expression';
+import { heightFormula } from './part-height';
+import { fitColumns } from './precision';
+import { type Relation, relate } from './relation';
+import type { SymbolName } from './symbol-name';
+
+/** One shape of the primary moment diagram, with its name on the sheet. */
+export interface NamedPart {
+  name: string;
+  case: string;
+  part: MomentPart;
+  length: Value;
+}
+
+/** Step 6: the primary moments of every case as named shapes. */
+export interface PartsStep {
+  kind: 'parts';
+  cases: { id: string; parts: NamedPart[]; heights: Relation[] }[];
+  /** Decimals of the columns of all tables of parts. */
+  decimals: { length: number; height: number; area: number; centroid: number };
+}
+
+export function deriveParts(ctx: Context): PartsStep {
+  const cases = ctx.analysis.cases.map(({ id }) => {
+    const parts = namedParts(ctx, id);
+    return { id, parts };
+  });
+  const all = cases.flatMap((c) => c.parts);
+  const rows = all.map(({ part }) => ({
+    length: part.to - part.from,
+    height: part.height,
+    area: part.area,
+    centroid: part.centroid,
+    factor: part.factor.n / part.factor.d,
+  }));
+  const { figures } = ctx;
+  const start = {
+    length: Math.max(...all.map((p) => p.length.decimals), figures.length),
+    height: figures.moment,
+    area: figures.area,
+    centroid: figures.length + 1,
+    factor: 12,
+  };
+  const fitted = fitColumns<keyof typeof start>(rows, start, [
+    {
+      column: 'area',
+      from: ['factor', 'length', 'height'],
+      work: (r) => r.factor * r.length * r.height,
+    },
+  ]);
+  const decimals = {
+    length: fitted.length,
+    height: fitted.height,
+    area: fitted.area,
+    centroid: fitted.centroid,
+  };
+  return {
+    kind: 'parts',
+    decimals,
+    cases: cases.map(({ id, parts }) => ({
+      id,
+      parts,
+      heights: parts.flatMap((p) => heightOf(ctx, p, decimals.height)),
+    })),
+  };
+}
+
+/** The parts of one case: D1, D2 … */
+export function namedParts(ctx: Context, id: string): NamedPart[] {
+  const parts = ctx.solution.work.parts[id] ?? [];
+  return parts.map((part, i) => {
+    const { L } = placedMember(ctx, part.member);
+    const l = part.to - part.from;
+    const symbol = Math.abs(l - L) <= 1e-9 * L ? ctx.names.length(part.member) : undefined;
+    const divider = /\d$/.test(id) ? '.' : '';
+    return { name: `${id}${divider}${i + 1}`, case: id, part, length: lengthValue(ctx, symbol, l) };
+  });
+}
+
+/** The height of a part, M with a hat. */
+export const heightSymbol = (name: string): SymbolName => ({ letter: 'M', mark: 'hat', sub: [name] });
+
+function heightOf(ctx: Context, named: NamedPart, decimals: number): Relation[] {
+  const formula = heightFormula(ctx, named.case, named.part);
+  if (!formula) return [];
+  const figures = { dimension: dimensions.moment, decimals };
+  return [relate(heightSymbol(named.name), formula, figures, named.part.height)];
+}

@@ -1,0 +1,78 @@
+import { type Quantity, quantityKey } from '@/lib/model/quantity';
+import { type Context, redundantSymbol } from './context';
+import { dimensionOf } from './dimensions';
+import { type EndForces, endForcesOf } from './end-forces';
+import type { Value } from './expression';
+import { type StaticsStep, writeSteps } from './statics';
+import { inCase, onPrimary, type SymbolName } from './symbol-name';
+
+/** Step 5: the determinate structure left when the redundants are released, and its forces. */
+export interface PrimaryStep {
+  kind: 'primary';
+  released: { symbol: SymbolName; is: SymbolName; quantity: Quantity }[];
+  pieces: readonly (readonly string[])[];
+  cases: {
+    id: string;
+    /** One unknown at a time. Empty when no such order exists: then the tables stand alone. */
+    steps: StaticsStep[];
+    reactions: Value[];
+    ends: EndForces[];
+  }[];
+}
+
+export function derivePrimary(ctx: Context): PrimaryStep {
+  const { solution, analysis, names } = ctx;
+  const released = new Set(solution.redundants.map(quantityKey));
+  return {
+    kind: 'primary',
+    released: solution.redundants.map((quantity, i) => ({
+      symbol: redundantSymbol(i),
+      is: names.quantity(quantity),
+      quantity,
+    })),
+    pieces: solution.primary.pieces,
+    cases: analysis.cases.flatMap(({ id }) => {
+      const state = solution.primary.loaded[id];
+      if (!state) return [];
+      return [
+        {
+          id,
+          steps: writeSteps(ctx, usedLines(state.lines), { kind: 'case', id }),
+          reactions: state.reactions
+            .filter((r) => !released.has(quantityKey(r.quantity)))
+            .map((r) => reactionValue(ctx, r, (s) => inCase(onPrimary(s), id))),
+          ends: endForcesOf(ctx, state.members),
+        },
+      ];
+    }),
+  };
+}
+
+/** A reaction with its symbol and the decimals of its kind. */
+export function reactionValue(
+  ctx: Context,
+  { quantity, value }: { quantity: Quantity; value: number },
+  name: (s: SymbolName) => SymbolName,
+): Value {
+  const dimension = dimensionOf(quantity);
+  const decimals = dimension.length === 1 ? ctx.figures.moment : ctx.figures.force;
+  return { kind: 'value', symbol: name(ctx.names.quantity(quantity)), value, dimension, decimals };
+}
+
+type Lines = Context['solution']['primary']['units'][number]['lines'];
+
+/** Forces at hinges are written only where a reaction found after them needs them. */
+export function usedLines(lines: Lines): Lines {
+  const keyOf = (of: { kind: string }) => JSON.stringify(of);
+  const needed = new Set<string>();
+  const kept: Lines[number][] = [];
+  for (const line of [...lines].reverse()) {
+    const own =
+      line.kind === 'equation' && line.unknown.kind === 'interface' ? keyOf(line.unknown) : undefined;
+    if (own !== undefined && !needed.has(own)) continue;
+    kept.unshift(line);
+    if (line.kind !== 'equation') continue;
+    for (const t of line.terms) if (t.of.kind === 'interface') needed.add(keyOf(t.of));
+  }
+  return kept;
+}

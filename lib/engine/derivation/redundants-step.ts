@@ -1,0 +1,110 @@
+import { type Quantity, quantityKey } from '@/lib/model/quantity';
+import type { Mechanism } from '@/lib/model/refusal';
+import { choose } from '../force-method/choose';
+import { type Context, redundantSymbol } from './context';
+import { dimensionOf } from './dimensions';
+import type { Value } from './expression';
+import type { SymbolName } from './symbol-name';
+
+/** Step 4: what may be released, what may not, and what is. */
+export interface RedundantsStep {
+  kind: 'redundants';
+  /** Quantities with the same value whatever the redundants; zero in every case ones apart. */
+  fixed: { symbol: SymbolName; quantity: Quantity; values: Value[] }[];
+  fixedZero: { symbol: SymbolName; quantity: Quantity }[];
+  /** Sets that differ from the chosen one in one place and leave a mechanism, by what moves. */
+  refused: RefusedSets[];
+  redundants: { symbol: SymbolName; is: SymbolName; quantity: Quantity }[];
+  /** Pairs of redundants that act on nothing in common: f_ij = 0. */
+  uncoupled: number;
+  condition: number;
+  proposed: boolean;
+}
+
+export interface RefusedSets {
+  message: string;
+  sets: readonly Quantity[][];
+  mechanism?: Mechanism;
+}
+
+/** Trials are made on structures that a person would look over by eye. */
+const most = { members: 8, redundants: 3, trials: 40 };
+
+export function deriveRedundants(ctx: Context): RedundantsStep {
+  const { solution, names, analysis } = ctx;
+  const fixed = solution.fixed.map(({ quantity, values }) => {
+    const symbol = names.quantity(quantity);
+    const decimals = dimensionOf(quantity).length === 1 ? ctx.figures.moment : ctx.figures.force;
+    const list = analysis.cases.map(
+      (c): Value => ({
+        kind: 'value',
+        symbol: { ...symbol, super: c.id },
+        value: values[c.id] ?? Number.NaN,
+        dimension: dimensionOf(quantity),
+        decimals,
+      }),
+    );
+    return { symbol, quantity, values: list };
+  });
+  const largest = Math.max(...fixed.flatMap((f) => f.values.map((v) => Math.abs(v.value))), 0);
+  const isZero = (f: (typeof fixed)[number]) => f.values.every((v) => Math.abs(v.value) <= 1e-9 * largest);
+  const n = solution.redundants.length;
+  const coupled = solution.work.flexibility.filter((f) => f.i !== f.j && f.total !== 0).length;
+  return {
+    kind: 'redundants',
+    fixed: fixed.filter((f) => !isZero(f)),
+    fixedZero: fixed.filter(isZero).map(({ symbol, quantity }) => ({ symbol, quantity })),
+    refused: refusedExchanges(ctx),
+    redundants: solution.redundants.map((quantity, i) => ({
+      symbol: redundantSymbol(i),
+      is: names.quantity(quantity),
+      quantity,
+    })),
+    uncoupled: (n * (n - 1)) / 2 - coupled,
+    condition: solution.condition,
+    proposed: solution.proposed,
+  };
+}
+
+function refusedExchanges({ solution, analysis, names }: Context): RefusedSets[] {
+  const { redundants } = solution;
+  const n = redundants.length;
+  if (n === 0 || n > most.redundants || analysis.members.length > most.members) return [];
+  const barred = new Set([...redundants, ...solution.fixed.map((f) => f.quantity)].map(quantityKey));
+  const seen = new Set<string>();
+  const others = [...reactionsOf(analysis.joints), ...momentsOf(analysis.members)].filter((q) => {
+    const name = JSON.stringify(names.quantity(q));
+    if (barred.has(quantityKey(q)) || seen.has(name)) return false;
+    seen.add(name);
+    return true;
+  });
+  const byMotion = new Map<string, RefusedSets & { sets: Quantity[][] }>();
+  let trials = 0;
+  for (let i = 0; i < n; i++) {
+    for (const other of others) {
+      if (++trials > most.trials) break;
+      const set = redundants.map((q, k) => (k === i ? other : q));
+      const choice = choose(analysis, set);
+      if (choice.good || !choice.mechanism) continue;
+      const known = byMotion.get(choice.message);
+      if (known) known.sets.push(set);
+      else
+        byMotion.set(choice.message, { message: choice.message, sets: [set], mechanism: choice.mechanism });
+    }
+  }
+  return [...byMotion.values()];
+}
+
+function reactionsOf(joints: Context['analysis']['joints']): Quantity[] {
+  return joints.flatMap(({ id, support }) =>
+    (['x', 'y', 'turn'] as const).flatMap((component): Quantity[] =>
+      support && support[component] !== 'free' ? [{ kind: 'reaction', joint: id, component }] : [],
+    ),
+  );
+}
+
+function momentsOf(members: Context['analysis']['members']): Quantity[] {
+  return members.flatMap((m) =>
+    (['start', 'end'] as const).map((end): Quantity => ({ kind: 'moment', member: m.id, end })),
+  );
+}

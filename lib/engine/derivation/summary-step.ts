@@ -1,0 +1,97 @@
+import type { MemberDiagrams } from '../diagrams/member-diagrams';
+import { extremes } from '../diagrams/piecewise';
+import type { Context } from './context';
+import type { Value } from './expression';
+import { reactionValue } from './primary-step';
+
+/** The greatest of a kind in one member, and the case or combination that gives it. */
+export interface Demand {
+  value: number;
+  by: string;
+}
+
+/** Step 16: what the design of members and foundations takes from this sheet. */
+export interface SummaryStep {
+  kind: 'summary';
+  /** Demands come from combinations where the sheet has any for strength, else from single cases. */
+  from: 'combinations' | 'cases';
+  members: {
+    member: string;
+    compression?: Demand;
+    tension?: Demand;
+    V: Demand;
+    positive?: Demand;
+    negative?: Demand;
+  }[];
+  /** Forces of the structure on its supports, opposite to the reactions. */
+  supports: { reaction: Value; cases: Record<string, number>; combinations: Record<string, number> }[];
+  /** Supports that are pulled up under some combination (or case). */
+  uplift: { joint: string; by: string }[];
+}
+
+export function deriveSummary(ctx: Context): SummaryStep {
+  const { analysis, solution } = ctx;
+  const strength = new Set(analysis.combinations.filter((c) => c.purpose === 'strength').map((c) => c.id));
+  const combined = solution.combinations.filter((c) => strength.has(c.id));
+  const from = combined.length > 0 ? 'combinations' : 'cases';
+  const states =
+    from === 'combinations'
+      ? combined
+      : analysis.cases.flatMap(({ id }) => {
+          const c = solution.cases[id];
+          return c ? [{ id, members: c.members, reactions: c.reactions }] : [];
+        });
+  const members = analysis.members.map((m) => {
+    const list = states.flatMap((s) => {
+      const d = s.members[m.id];
+      return d ? [{ by: s.id, d }] : [];
+    });
+    return { member: m.id, ...demandsOf(list) };
+  });
+  const supports = (states[0]?.reactions ?? []).map((r, k) => ({
+    reaction: reactionValue(ctx, r, (s) => s),
+    cases: Object.fromEntries(
+      analysis.cases.map((c) => [c.id, -(solution.cases[c.id]?.reactions[k]?.value ?? Number.NaN)]),
+    ),
+    combinations: Object.fromEntries(combined.map((c) => [c.id, -(c.reactions[k]?.value ?? Number.NaN)])),
+  }));
+  const uplift = states.flatMap((s) =>
+    s.reactions.flatMap(({ quantity: q, value }) =>
+      q.kind === 'reaction' && q.component === 'y' && value < -1e-9 ? [{ joint: q.joint, by: s.id }] : [],
+    ),
+  );
+  return { kind: 'summary', from, members, supports, uplift };
+}
+
+type Three = Pick<MemberDiagrams, 'N' | 'V' | 'M'>;
+
+function demandsOf(list: readonly { by: string; d: Three }[]) {
+  const all = (which: 'N' | 'V' | 'M') =>
+    list.flatMap(({ by, d }) => {
+      const { max, min } = extremes(d[which]);
+      return [
+        { by, value: max.value },
+        { by, value: min.value },
+      ];
+    });
+  const pick = (values: Demand[], better: (a: Demand, b: Demand) => boolean): Demand =>
+    values.reduce((a, b) => (better(b, a) ? b : a), values[0] ?? { by: '', value: 0 });
+  const size = Math.max(...all('M').map((d) => Math.abs(d.value)), 1e-300);
+  const force = Math.max(...all('N').map((d) => Math.abs(d.value)), 1e-300);
+  const kept = (d: Demand, sign: number, scale: number) => (sign * d.value > 1e-9 * scale ? d : undefined);
+  const [least, greatest] = [
+    pick(all('N'), (a, b) => a.value < b.value),
+    pick(all('N'), (a, b) => a.value > b.value),
+  ];
+  const [low, high] = [
+    pick(all('M'), (a, b) => a.value < b.value),
+    pick(all('M'), (a, b) => a.value > b.value),
+  ];
+  return {
+    compression: kept(least, -1, force),
+    tension: kept(greatest, 1, force),
+    V: pick(all('V'), (a, b) => Math.abs(a.value) > Math.abs(b.value)),
+    positive: kept(high, 1, size),
+    negative: kept(low, -1, size),
+  };
+}

@@ -1,0 +1,82 @@
+import type { Value } from '@/lib/engine/derivation/expression';
+import type { Relation } from '@/lib/engine/derivation/relation';
+import type { StaticsStep } from '@/lib/engine/derivation/statics';
+import type { SymbolName } from '@/lib/engine/derivation/symbol-name';
+import type { UnitSet } from '@/lib/model/analysis';
+import { quantityNumber, quantityTex } from '@/lib/typeset/quantity-tex';
+import { formulaTex, substitutionTex } from '@/lib/typeset/write-expression';
+import { symbolTex } from '@/lib/typeset/write-symbol';
+import type { EquationRow } from '../block';
+import { listWords, memberWords, plain } from './words';
+import type { Placed } from '@/lib/engine/derivation/geometry';
+
+/** symbol = formula = figures = result; members that would only repeat their neighbour are left out. */
+export function relationRow(r: Relation, units: UnitSet, note?: string): EquationRow {
+  const chain = [
+    formulaTex(r.formula, units),
+    substitutionTex(r.formula, units),
+    quantityTex(r.result, units),
+    ...(r.again ? [quantityTex(r.again, units)] : []),
+  ];
+  const distinct = chain.filter((tex, i) => tex !== chain[i - 1]);
+  return { lhs: symbolTex(r.symbol), chain: distinct, boxed: r.boxed, note };
+}
+
+/** A number of a table: `$3.908$`. A missing value is a dash. */
+export function cell(value: number | undefined, decimals: number, units: UnitSet): string {
+  if (value === undefined) return '–';
+  return `$${quantityNumber({ value, decimals, dimension: { force: 0, length: 0, temperature: 0 } }, units)}$`;
+}
+
+/** A value of a table without its unit, which the head has. */
+export const valueCell = (v: Value, units: UnitSet): string => `$${quantityNumber(v, units)}$`;
+
+/** A symbol inside a sentence or a cell. */
+export const inline = (s: SymbolName): string => `$${symbolTex(s)}$`;
+
+/** A value with its unit inside a sentence. */
+export const inlineValue = (v: Value, units: UnitSet): string => `$${quantityTex(v, units)}$`;
+
+/** An equilibrium equation, then the unknown that it gives. */
+export function staticsRows(step: StaticsStep, units: UnitSet): EquationRow[] {
+  const head = sumTex(step.sum);
+  if (step.check) {
+    const terms = substitutionTex(step.check.formula, units);
+    return [{ lhs: `${head}\\;${terms}=${quantityTex(step.check.result, units)}`, chain: [] }];
+  }
+  if (!step.relation) return [];
+  const own = relationRow(step.relation, units);
+  if (step.relation.formula.kind === 'number') return [own];
+  return [{ lhs: `${head}\\;${formulaTex(step.equation, units)}=0`, chain: [] }, own];
+}
+
+/** ΣM_A:, ΣF_x:, ΣF_y: */
+export function sumTex(sum: StaticsStep['sum']): string {
+  if (sum.kind === 'moment') return `\\textstyle\\sum ${symbolTex({ letter: 'M', sub: [sum.joint ?? 'O'] })}:`;
+  return `\\textstyle\\sum ${symbolTex({ letter: 'F', sub: [Math.abs(sum.x) > Math.abs(sum.y) ? 'x' : 'y'] })}:`;
+}
+
+/** Why the equation has one unknown: "Moments about A, where R_Ax and R_Ay meet". */
+export function staticsWords(step: StaticsStep, placed: ReadonlyMap<string, Placed>, units: UnitSet): string {
+  const piece = step.piece ? pieceWords(step.piece, placed) : '';
+  const start = piece === '' ? '' : `On ${piece}: `;
+  const said = (text: string) => (start === '' ? text.charAt(0).toUpperCase() + text.slice(1) : `${start}${text}`);
+  const arms = step.arms.map((a) => `${a.symbol ? inline(a.symbol) : ''} $= ${quantityTex(a, units)}$`);
+  const armed = arms.length === 0 ? '' : `, with the arm${arms.length > 1 ? 's' : ''} ${listWords(arms)}`;
+  const unused = step.check ? ', not used yet, as a check' : '';
+  if (step.sum.kind === 'force') {
+    return `${said(Math.abs(step.sum.x) > Math.abs(step.sum.y) ? 'horizontal forces' : 'vertical forces')}${armed}${unused}:`;
+  }
+  const [a, b] = step.passing;
+  const why =
+    a && b ? `, where ${inline(a)} and ${inline(b)} meet` : a ? `, through which ${inline(a)} passes` : '';
+  return `${said(`moments about ${plain(step.sum.joint ?? 'O')}`)}${step.check ? '' : why}${armed}${unused}:`;
+}
+
+function pieceWords(piece: readonly string[], placed: ReadonlyMap<string, Placed>): string {
+  const names = piece.map((id) => {
+    const p = placed.get(id);
+    return p ? memberWords(p) : plain(id);
+  });
+  return `the piece of ${listWords(names)}`;
+}
