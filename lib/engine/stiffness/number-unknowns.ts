@@ -1,97 +1,76 @@
 import type { Analysis } from '@/lib/model/analysis';
-import type { BeamElement } from './beam-element';
+import type { Element } from './element';
+import { orderJoints } from './order-joints';
 
-interface Element {
-  a: number;
-  b: number;
-  e: BeamElement;
-}
-
-export interface SupportUnknown {
-  component: 'x' | 'y' | 'turn';
+/** A reaction component with its direction in x, y and turning, positive as a force on the structure. */
+export interface ReactionUnknown {
   index: number;
-  /** Its direction in x, y and turning. */
-  axis: [number, number, number];
+  component: 'x' | 'y' | 'turn';
+  axis: readonly [number, number, number];
   spring?: number;
 }
 
-/**
- * Numbers joint displacements, member axial forces and reactions so that what belongs together stands together: joints
- * in breadth-first order (Cuthill and McKee, 1969), each followed by its reactions and the members that it completes.
- */
-export function numberUnknowns(analysis: Analysis, elements: readonly Element[]) {
-  const n = analysis.joints.length;
-  const neighbours = Array.from({ length: n }, (): number[] => []);
-  for (const { a, b } of elements) {
-    neighbours[a]?.push(b);
-    neighbours[b]?.push(a);
-  }
-  const order = breadthFirst(neighbours);
-  const rank = new Array<number>(n);
-  order.forEach((j, i) => {
-    rank[j] = i;
-  });
-  const completed = Array.from({ length: n }, (): number[] => []);
-  elements.forEach(({ a, b, e }, i) => {
-    if (e.hasAxial) completed[(rank[a] as number) > (rank[b] as number) ? a : b]?.push(i);
-  });
-  let count = 0;
-  const first = new Array<number>(n);
-  const axial = new Map<number, number>();
-  const reactions = Array.from({ length: n }, (): SupportUnknown[] => []);
-  for (const j of order) {
-    first[j] = count;
-    count += 3;
-    const s = analysis.joints[j]?.support;
-    if (s) {
-      const [c, t] = [Math.cos((s.angle * Math.PI) / 180), Math.sin((s.angle * Math.PI) / 180)];
-      const axes = { x: [c, t, 0], y: [-t, c, 0], turn: [0, 0, 1] } as const;
-      for (const component of ['x', 'y', 'turn'] as const) {
-        const r = s[component];
-        if (r === 'free') continue;
-        reactions[j]?.push({
-          component,
-          index: count++,
-          axis: [...axes[component]],
-          spring: r === 'held' ? undefined : r.spring,
-        });
-      }
-    }
-    for (const i of completed[j] as number[]) axial.set(i, count++);
-  }
-  const turned = new Set(
-    elements.flatMap(({ a, b, e }) => [
-      ...(e.modes.some((m) => m[0] !== 0) ? [a] : []),
-      ...(e.modes.some((m) => m[1] !== 0) ? [b] : []),
-    ]),
-  );
-  const held = (j: number) => reactions[j]?.some((r) => r.component === 'turn') === true;
-  return {
-    count,
-    joint: (j: number, i: number) => (first[j] as number) + i,
-    axial: (i: number) => axial.get(i),
-    reactions: (j: number) => reactions[j] as SupportUnknown[],
-    /** Rotations of joints that nothing could turn: they stay zero. */
-    unused: () => order.filter((j) => !turned.has(j) && !held(j)).map((j) => (first[j] as number) + 2),
-  };
+export interface Numbering {
+  count: number;
+  /** Unknowns of joint j: displacement x and y, and its turning where something could turn it. */
+  joints: { x: number; y: number; turn?: number }[];
+  reactions: ReactionUnknown[][];
+  /** Unknown of every mode of every element. */
+  modes: number[][];
+  /** Marks displacements among the unknowns; the others are forces. */
+  moves: Uint8Array;
 }
 
-function breadthFirst(neighbours: readonly number[][]): number[] {
-  const seen = new Set<number>();
-  const order: number[] = [];
-  for (let start = 0; start < neighbours.length; start++) {
-    if (seen.has(start)) continue;
-    const queue = [start];
-    seen.add(start);
-    for (let head = 0; head < queue.length; head++) {
-      const j = queue[head] as number;
-      order.push(j);
-      const next = (neighbours[j] as number[]).filter((k) => !seen.has(k));
-      for (const k of new Set(next)) {
-        seen.add(k);
-        queue.push(k);
-      }
-    }
+/**
+ * Numbers joint displacements, member forces and reactions in the order of elimination: of each joint first the forces
+ * of its members that are not numbered yet, then its displacements and reactions.
+ */
+export function numberUnknowns(analysis: Analysis, elements: readonly Element[]): Numbering {
+  const n = analysis.joints.length;
+  const at = Array.from({ length: n }, (): number[] => []);
+  const turned = new Set<number>();
+  elements.forEach((e, i) => {
+    const [a, b] = e.joints;
+    at[a]?.push(i);
+    at[b]?.push(i);
+    if (e.modes.some((m) => m[1] !== 0)) turned.add(a);
+    if (e.modes.some((m) => m[2] !== 0)) turned.add(b);
+  });
+  const order = orderJoints(
+    n,
+    elements.map((e) => e.joints),
+  );
+  let count = 0;
+  const moves: number[] = [];
+  const move = () => {
+    moves.push(count);
+    return count++;
+  };
+  const joints = new Array<Numbering['joints'][number]>(n);
+  const reactions = new Array<ReactionUnknown[]>(n);
+  const modes = new Array<number[] | undefined>(elements.length);
+  for (const j of order) {
+    for (const i of at[j] as number[]) modes[i] ??= (elements[i] as Element).modes.map(() => count++);
+    const held = supportAxes(analysis, j);
+    const turns = turned.has(j) || held.some((r) => r.component === 'turn');
+    joints[j] = { x: move(), y: move(), turn: turns ? move() : undefined };
+    reactions[j] = held.map((r) => ({ ...r, index: count++ }));
   }
-  return order;
+  const marks = new Uint8Array(count);
+  for (const i of moves) marks[i] = 1;
+  return { count, joints, reactions, modes: modes.map((m) => m ?? []), moves: marks };
+}
+
+function supportAxes(analysis: Analysis, j: number): Omit<ReactionUnknown, 'index'>[] {
+  const support = analysis.joints[j]?.support;
+  if (!support) return [];
+  const angle = (support.angle * Math.PI) / 180;
+  const [c, s] = [Math.cos(angle), Math.sin(angle)];
+  const axes = { x: [c, s, 0], y: [-s, c, 0], turn: [0, 0, 1] } as const;
+  return (['x', 'y', 'turn'] as const).flatMap((component) => {
+    const restraint = support[component];
+    if (restraint === 'free') return [];
+    const spring = restraint === 'held' ? undefined : restraint.spring;
+    return [{ component, axis: axes[component], spring }];
+  });
 }
