@@ -79,7 +79,9 @@ function setFormula(
   };
   const whole = set(piece.text);
   if (whole.width <= room) return [whole];
-  const parts = splitTopLevel(piece.text, 'relations');
+  const parts = splitTopLevel(piece.text, 'relations').flatMap((part) =>
+    set(part).width <= room ? [part] : splitTopLevel(part, 'terms'),
+  );
   return parts.map((part, index) => ({
     ...set(index === 0 ? part : `{}${part}`),
     broken: index < parts.length - 1,

@@ -150,6 +150,8 @@ class Reader {
     if (token === '=' || token === '<' || token === '>') return ` ${token} `;
     if (token === '&' || token === '~') return ' ';
     if (!token.startsWith('\\')) return token;
+    // TeX drops the space that ends a command's name.
+    if (/^\\[a-zA-Z]/.test(token)) while (this.tokens[this.at] === ' ') this.at++;
     return this.command(token.slice(1));
   }
 

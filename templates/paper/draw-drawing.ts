@@ -11,12 +11,14 @@ const HALO = 1;
 /** Draws a figure with its upper left corner at (x, y). A label's size is that of its mathematics. */
 export function drawDrawing(drawing: Drawing, x: number, y: number, scale: number, pen: PaperPen): void {
   const { doc } = pen;
+  doc.markContent('Span', { alt: drawing.alt });
   doc.save().transform(scale, 0, 0, scale, x, y);
   for (const shape of drawing.shapes) {
     if (shape.kind === 'label') drawLabel(shape, pen);
     else drawShape(shape, pen);
   }
   doc.restore();
+  doc.endMarkedContent();
 }
 
 function drawShape(shape: Exclude<Shape, LabelShape>, { doc }: PaperPen): void {

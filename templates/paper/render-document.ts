@@ -36,15 +36,14 @@ export async function renderDocument(printed: PrintedDocument): Promise<Uint8Arr
   });
   const bytes = collect(doc);
   const pen = new PaperPen(doc, typesetter);
-  const outline = new Bookmarks(doc.outline);
+  const geometry = pageGeometry(printed.size);
+  const outline = new Bookmarks(doc.outline, geometry.width);
   const paint = (page: PrintedPage, index: number) => {
     drawInk(page.ink, pen);
     for (const { name, y } of page.destinations) doc.addNamedDestination(name, 'XYZ', 0, y, null);
     for (const bookmark of page.bookmarks) outline.add(bookmark, index);
   };
-  const root = await reconcile(
-    PaperDocument({ document: printed, geometry: pageGeometry(printed.size), paint }),
-  );
+  const root = await reconcile(PaperDocument({ document: printed, geometry, paint }));
   labelPages(doc, printed.pages);
   if (printed.data) {
     const { name, description, bytes: data } = printed.data;
@@ -91,11 +90,15 @@ function labelPages(doc: PDFDocument, pages: readonly PrintedPage[]): void {
 
 class Bookmarks {
   private section: PdfOutline | undefined;
-  constructor(private readonly root: PdfOutline) {}
+  constructor(
+    private readonly root: PdfOutline,
+    private readonly pageWidth: number,
+  ) {}
 
   add({ title, level, y }: PrintedPage['bookmarks'][number], pageNumber: number): void {
     const parent = level === 0 ? this.root : (this.section ?? this.root);
-    const item = parent.addItem(title, { pageNumber, top: y, left: 0 });
+    // pdfkit takes `left` from the right edge of the page; its width leads to the left edge.
+    const item = parent.addItem(title, { pageNumber, top: y, left: this.pageWidth });
     if (level === 0) this.section = item;
   }
 }

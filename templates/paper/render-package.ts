@@ -118,7 +118,7 @@ function flowPart(sheet: PrintedSheet, imprint: Imprint, print: PackagePrint, is
 function closingPart(print: PackagePrint): Part {
   const blocks: Block[] = [...(print.closing ?? []), ...cautionBlocks(print.mode)];
   const title = print.closing?.length ? 'Governing results, assumptions and cautions' : 'Cautions';
-  return flowPart({ number: 'end', title, blocks }, packageImprint(print), print);
+  return flowPart({ number: 'cautions', unnumbered: true, title, blocks }, packageImprint(print), print);
 }
 
 function indexEntries(parts: readonly Part[], first: number, of: number): IndexEntry[] {

@@ -11,8 +11,10 @@ import type { Bookmark, PrintedPage } from './printed-page';
 
 /** A calc sheet as it is printed. */
 export type PrintedSheet = {
-  /** "S-03". */
+  /** "S-03"; of the package's own last pages their name. */
   readonly number: string;
+  /** Not a sheet of the job: its title stands alone, and its only page bears the bare name. */
+  readonly unnumbered?: boolean;
   readonly title: string;
   readonly blocks: readonly Block[];
   readonly marks?: Readonly<Record<string, LineMarks>>;
@@ -44,10 +46,11 @@ export function setSheet(sheet: PrintedSheet, look: SheetLook, typesetter: Types
   const legend = legendInk(sheet, geometry, look.sealed ?? false, typesetter);
   const options = { ...look, marks: sheet.marks, legend: legend.height };
   const pages = paginate(sheet.blocks, options, typesetter);
+  const name = sheet.unnumbered ? sheet.title : `${sheet.number} ${sheet.title}`;
   const frame = ({ imprint, place }: SheetPlace) =>
     pages.map((page, index): PrintedPage => {
-      const label = `${sheet.number}.${index + 1}`;
-      const words = { run: `${sheet.number} ${sheet.title}`, label, imprint, place: place(index) };
+      const label = sheet.unnumbered && index === 0 ? sheet.number : `${sheet.number}.${index + 1}`;
+      const words = { run: name, label, imprint, place: place(index) };
       return {
         ink: [...frameInk(words, geometry, typesetter), ...legend.ink, ...page.ink],
         label,
@@ -56,7 +59,7 @@ export function setSheet(sheet: PrintedSheet, look: SheetLook, typesetter: Types
           ...page.anchors.map(({ block, y }) => ({ name: `${sheet.number}/${block}`, y })),
         ],
         bookmarks: [
-          ...(index === 0 ? [{ title: `${sheet.number} ${sheet.title}`, level: 0 as const, y: 0 }] : []),
+          ...(index === 0 ? [{ title: name, level: 0 as const, y: 0 }] : []),
           ...page.anchors.flatMap(sectionBookmark),
         ],
       };
