@@ -1,0 +1,20 @@
+// server only
+import knex, { type Knex } from 'knex';
+import { env } from '@/lib/env';
+
+const place = globalThis as { fairhandDatabase?: Knex };
+
+/** Settings of a connection to MariaDB: numbers above 2^53 arrive as text, times are UTC. */
+export function connectionSettings(url: string): Knex.Config {
+  return {
+    client: 'mysql2',
+    connection: { uri: url, supportBigNumbers: true, timezone: 'Z' } as Knex.MySql2ConnectionConfig,
+    pool: { min: 0, max: 10 },
+  };
+}
+
+/** The pool of this process; development reloads keep it. */
+export function database(): Knex {
+  place.fairhandDatabase ??= knex(connectionSettings(env().databaseUrl));
+  return place.fairhandDatabase;
+}

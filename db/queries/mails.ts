@@ -1,0 +1,69 @@
+// server only
+import { randomUUID } from 'node:crypto';
+import type { Knex } from 'knex';
+
+export interface MailRow {
+  id: string;
+  office_id: string;
+  submittal_id: string | null;
+  recipient: string;
+  subject: string;
+  body: string;
+  state: 'queued' | 'sending' | 'accepted' | 'refused';
+  attempts: number;
+  server_words: string;
+  next_try: Date;
+  claimed_at: Date | null;
+}
+
+export async function queueMail(
+  trx: Knex,
+  m: { officeId: string; submittalId?: string; recipient: string; subject: string; body: string },
+): Promise<void> {
+  await trx('mails').insert({
+    id: randomUUID(),
+    office_id: m.officeId,
+    submittal_id: m.submittalId ?? null,
+    recipient: m.recipient,
+    subject: m.subject,
+    body: m.body,
+    state: 'queued',
+    next_try: new Date(),
+  });
+}
+
+/** Claims one mail that is due, or one whose sender vanished; of several servers each gets its own. */
+export async function claimMail(db: Knex, now: Date, abandoned: Date): Promise<MailRow | undefined> {
+  return db.transaction(async (trx) => {
+    const row: MailRow | undefined = await trx('mails')
+      .where((q) => q.where({ state: 'queued' }).where('next_try', '<=', now))
+      .orWhere((q) => q.where({ state: 'sending' }).where('claimed_at', '<', abandoned))
+      .orderBy('next_try')
+      .forUpdate()
+      .skipLocked()
+      .first();
+    if (!row) return undefined;
+    await trx('mails')
+      .where({ id: row.id })
+      .update({ state: 'sending', claimed_at: now, attempts: row.attempts + 1 });
+    return { ...row, attempts: row.attempts + 1 };
+  });
+}
+
+export async function settleMail(
+  db: Knex,
+  id: string,
+  outcome: { state: 'accepted' | 'refused' | 'queued'; words: string; nextTry?: Date },
+): Promise<void> {
+  await db('mails')
+    .where({ id })
+    .update({
+      state: outcome.state,
+      server_words: outcome.words.slice(0, 500),
+      ...(outcome.nextTry ? { next_try: outcome.nextTry } : {}),
+    });
+}
+
+export async function mailsOfSubmittal(db: Knex, officeId: string, submittalId: string): Promise<MailRow[]> {
+  return db('mails').where({ office_id: officeId, submittal_id: submittalId }).orderBy('next_try');
+}

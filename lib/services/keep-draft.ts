@@ -1,0 +1,56 @@
+// server only
+import { z } from 'zod';
+import { insertDraft, newestDraft, renameSheet, sheetById } from '@/db/queries/sheets';
+import { type Draft, draft as draftSchema } from '@/lib/model/draft';
+import type { Actor } from './actor';
+import { inTransaction } from './in-transaction';
+import { makers, requireRole } from './require-role';
+import { NotFound } from './service-error';
+import { sheetName } from './sheet-state';
+
+const input = z.object({ sheetId: z.string().max(36), version: z.number().int().min(0), draft: draftSchema });
+
+export type KeptDraft =
+  | { ok: true; version: number; keptAt: Date }
+  | { ok: false; version: number; draft: unknown; by: string; at: Date };
+
+/** Keeps a draft on top of the version it was made from. When another version stands there by now, nothing is written. */
+export async function keepDraft(
+  actor: Actor,
+  raw: { sheetId: string; version: number; draft: Draft },
+): Promise<KeptDraft> {
+  requireRole(actor, ...makers);
+  const { sheetId, version, draft } = input.parse(raw);
+  return inTransaction(
+    { officeId: actor.officeId, person: actor.name },
+    async (trx, record): Promise<KeptDraft> => {
+      const newest = await newestDraft(trx, actor.officeId, sheetId, true);
+      const sheet = await sheetById(trx, actor.officeId, sheetId);
+      if (!newest || !sheet) throw new NotFound(`sheet ${sheetId}`);
+      const name = `${sheetName(sheet.number)} draft`;
+      if (newest.version !== version) {
+        await record('met another version', name);
+        return {
+          ok: false,
+          version: newest.version,
+          draft: newest.body,
+          by: newest.name,
+          at: newest.kept_at,
+        };
+      }
+      const at = new Date();
+      await insertDraft(trx, {
+        sheetId,
+        officeId: actor.officeId,
+        version: version + 1,
+        body: draft,
+        by: actor.personId,
+        at,
+      });
+      if (draft.title !== sheet.title && draft.title.trim() !== '')
+        await renameSheet(trx, actor.officeId, sheetId, draft.title);
+      await record('kept', `${name} ${version + 1}`);
+      return { ok: true, version: version + 1, keptAt: at };
+    },
+  );
+}

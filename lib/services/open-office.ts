@@ -1,0 +1,34 @@
+// server only
+import { database } from '@/db/connection';
+import { authoritiesOf } from '@/db/queries/jobs';
+import { licencesOf, peopleOf } from '@/db/queries/people';
+import { type Actor, role } from './actor';
+import { everyone, requireRole } from './require-role';
+
+/** The office's people with their licences, and the authorities it submits to. */
+export async function openOffice(actor: Actor) {
+  requireRole(actor, ...everyone);
+  const db = database();
+  const [people, licences, authorities] = await Promise.all([
+    peopleOf(db, actor.officeId),
+    licencesOf(db, actor.officeId),
+    authoritiesOf(db, actor.officeId),
+  ]);
+  return {
+    people: people.map((p) => ({
+      id: p.id,
+      name: p.name,
+      email: p.email,
+      initials: p.initials,
+      roles: role.array().parse(p.roles),
+      licences: licences
+        .filter((l) => l.person_id === p.id)
+        .map((l) => ({
+          jurisdiction: l.jurisdiction,
+          number: l.number,
+          expires: l.expires.toISOString().slice(0, 10),
+        })),
+    })),
+    authorities: authorities.map((a) => ({ id: a.id, name: a.name, decisions: a.decisions })),
+  };
+}

@@ -1,0 +1,72 @@
+// server only
+import { database } from '@/db/connection';
+import { authorityById, jobById } from '@/db/queries/jobs';
+import { commentsOf, decisionOf, noteOpened, type ReviewLinkRow, reviewLink } from '@/db/queries/reviews';
+import { revisionsOfSubmittal } from '@/db/queries/revisions';
+import { fileOf, submittalById } from '@/db/queries/submittals';
+import { blocks } from '@/templates/block';
+import { inTransaction } from './in-transaction';
+import { allowAttempt } from './limit-attempts';
+import { NotFound } from './service-error';
+import { sheetName } from './sheet-state';
+import { tokenHash } from './token';
+
+export type ReviewDoor =
+  | { open: true; link: ReviewLinkRow }
+  | { open: false; why: 'unknown' | 'expired' | 'revoked' | 'too-often' };
+
+const perQuarterHour = 600;
+
+/** Whether a review link lets its holder in. */
+export async function reviewDoor(token: string, from: string): Promise<ReviewDoor> {
+  if (!(await allowAttempt(`review:${from}`, perQuarterHour))) return { open: false, why: 'too-often' };
+  const link = await reviewLink(database(), tokenHash(token));
+  if (!link) return { open: false, why: 'unknown' };
+  if (link.revoked_at) return { open: false, why: 'revoked' };
+  if (link.expires_at < new Date()) return { open: false, why: 'expired' };
+  return { open: true, link };
+}
+
+/** What the reviewer reads. The first opening is recorded. */
+export async function openReview(link: ReviewLinkRow) {
+  const db = database();
+  const submittal = await submittalById(db, link.office_id, link.submittal_id);
+  const job = submittal && (await jobById(db, link.office_id, submittal.job_id));
+  if (!submittal || !job) throw new NotFound('submittal of a link');
+  if (!link.opened_at) {
+    await inTransaction({ officeId: link.office_id, person: link.reviewer }, async (trx, record) => {
+      await noteOpened(trx, link.id, new Date());
+      await record('opened the review', `${job.number} submittal ${submittal.number}`);
+    });
+  }
+  const authority = job.authority_id ? await authorityById(db, link.office_id, job.authority_id) : undefined;
+  const revisions = await revisionsOfSubmittal(db, link.office_id, link.submittal_id);
+  const file = await fileOf(db, link.office_id, link.submittal_id, 'sealed');
+  return {
+    job: { number: job.number, title: job.title },
+    submittal: {
+      number: submittal.number,
+      purpose: submittal.purpose,
+      remarks: submittal.remarks,
+      pages: submittal.pages,
+    },
+    sealed: file && { by: file.signed_by, at: file.made_at, sha256: file.sha256 },
+    sheets: revisions.map((r) => ({
+      revisionId: r.id,
+      number: sheetName(r.sheet_number),
+      title: r.title,
+      revision: r.number,
+      blocks: blocks.parse(r.blocks),
+    })),
+    comments: await commentsOf(db, link.office_id, link.submittal_id),
+    decisions: authority?.decisions ?? ['Approved', 'Approved as Noted', 'Revise and Resubmit'],
+    decision: await decisionOf(db, link.office_id, link.submittal_id),
+  };
+}
+
+/** The sealed file, for the holder of a link. */
+export async function readReviewFile(link: ReviewLinkRow): Promise<Buffer> {
+  const file = await fileOf(database(), link.office_id, link.submittal_id, 'sealed');
+  if (!file) throw new NotFound('sealed file');
+  return file.bytes;
+}

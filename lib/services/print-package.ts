@@ -1,0 +1,82 @@
+// server only
+import { createHash } from 'node:crypto';
+import type { JobRow } from '@/db/queries/jobs';
+import type { RevisionLine } from '@/db/queries/revisions';
+import { blocks } from '@/templates/block';
+import type { PrintedPackage } from '@/templates/paper/package-print';
+import { renderPackage } from '@/templates/paper/render-package';
+import { sheetName } from './sheet-state';
+
+export interface PackageRequest {
+  office: string;
+  job: JobRow & { authority: string | null };
+  purpose: string;
+  submittal: number;
+  date: Date;
+  engineer: { name: string; initials: string };
+  originators: { name: string; initials: string }[];
+  checkers: { name: string; initials: string }[];
+}
+
+const day = (date: Date) => date.toISOString().slice(0, 10);
+
+/** Prints frozen revisions as one package. Inputs, results and digests ride inside as a file, so that it can be proved. */
+export async function printPackage(
+  request: PackageRequest,
+  revisions: readonly RevisionLine[],
+): Promise<PrintedPackage> {
+  const { office, job, purpose, submittal, date } = request;
+  const data = {
+    form: 'fairhand.package/1',
+    job: { number: job.number, title: job.title },
+    submittal,
+    sheets: revisions.map((r) => ({
+      sheet: sheetName(r.sheet_number),
+      title: r.title,
+      revision: r.number,
+      digest: r.digest,
+      engine: r.engine,
+      inputs: r.inputs,
+      results: r.results,
+    })),
+  };
+  const bytes = new TextEncoder().encode(JSON.stringify(data));
+  const digest = createHash('sha256')
+    .update(revisions.map((r) => r.digest).join('\n'))
+    .digest('hex');
+  return renderPackage({
+    office,
+    job: {
+      number: job.number,
+      title: job.title,
+      place: job.place,
+      authority: job.authority ?? undefined,
+      codes: job.codes.split('\n').filter((line) => line.trim() !== ''),
+    },
+    purpose: `Submittal ${submittal}, ${purpose}`,
+    submittal,
+    mode: 'final',
+    size: job.page_size,
+    language: job.units === 'US' ? 'en-US' : 'en-GB',
+    date,
+    digest: shortDigest(digest),
+    people: { originators: request.originators, checkers: request.checkers, engineer: request.engineer },
+    sheets: revisions.map((r) => ({
+      kind: 'calculated' as const,
+      number: sheetName(r.sheet_number),
+      title: r.title,
+      blocks: blocks.parse(r.blocks),
+      revision: r.number,
+      originator: { initials: r.originator, date: day(r.frozen_at) },
+      checker: r.checker && r.checked_at ? { initials: r.checker, date: day(r.checked_at) } : undefined,
+      digest: shortDigest(r.digest),
+    })),
+    seal: { on: 'cover', covers: revisions.map((r) => sheetName(r.sheet_number)).join(', ') },
+    data: { name: 'calculations.json', description: 'Inputs and results of every sheet', bytes },
+  });
+}
+
+/** "5e1f 90c7": enough of a digest to tell two revisions apart on paper. */
+export function shortDigest(digest: string): string {
+  return `${digest.slice(0, 4)} ${digest.slice(4, 8)}`;
+}

@@ -1,0 +1,25 @@
+import type { FieldError } from '@/lib/model/field-reader';
+import type { Solution } from '@/lib/engine/solution';
+import { combine } from '@/lib/engine/combinations/combine';
+import { solve } from '@/lib/engine/solve';
+import { analysis as analysisSchema } from '@/lib/model/analysis';
+import type { Draft } from '@/lib/model/draft';
+import { readDraft } from '@/lib/model/read-draft';
+import type { Refusal } from '@/lib/model/refusal';
+import type { Block } from '@/templates/block';
+import { compose } from '@/templates/compose';
+
+export type SolvedDraft =
+  | { ok: true; solution: Solution; blocks: Block[] }
+  | { ok: false; errors: FieldError[]; refusal?: Refusal };
+
+/** Reads a draft, adds the combinations of its published set, solves it and writes it out. */
+export function solveDraft(draft: Draft): SolvedDraft {
+  const read = readDraft(draft);
+  if (!read.ok) return { ok: false, errors: read.errors };
+  const analysis = analysisSchema.parse(read.analysis);
+  const published = draft.combinationSet === '' ? [] : combine(analysis.cases, draft.combinationSet);
+  const solved = solve({ ...analysis, combinations: [...published, ...analysis.combinations] });
+  if (!solved.ok) return { ok: false, errors: [], refusal: solved.refusal };
+  return { ok: true, solution: solved.value, blocks: compose(solved.value, { title: draft.title, basis: draft.basis }) };
+}

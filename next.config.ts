@@ -1,0 +1,9 @@
+import type { NextConfig } from 'next';
+
+const config: NextConfig = {
+  serverExternalPackages: ['knex', 'mysql2', '@node-rs/argon2', '@react-pdf/renderer', 'fontkit', 'pino', 'nodemailer', 'node-forge'],
+  experimental: { authInterrupts: true, serverActions: { bodySizeLimit: '4mb' } },
+  poweredByHeader: false,
+};
+
+export default config;
