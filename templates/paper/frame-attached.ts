@@ -26,15 +26,16 @@ export async function frameAttached(
   const room = { width: geometry.textWidth, height: geometry.bottom - geometry.top };
   for (const { file, firstPage } of attached) {
     const source = await PDFDocument.load(file, { throwOnInvalidObject: true, updateMetadata: false });
-    const pages = await target.embedPages(source.getPages());
-    pages.forEach((page, index) => {
+    // A blank page has no contents; its frame alone is its copy.
+    const shown = [...source.getPages().entries()].filter(([, page]) => page.node.Contents());
+    const embedded = await target.embedPages(shown.map(([, page]) => page));
+    embedded.forEach((page, at) => {
       const scale = Math.min(1, room.width / page.width, room.height / page.height);
       const width = page.width * scale;
       const height = page.height * scale;
-      const top = geometry.height - geometry.top;
-      target
-        .getPage(firstPage + index)
-        .drawPage(page, { x: geometry.textLeft, y: top - height, width, height });
+      const y = geometry.height - geometry.top - height;
+      const index = firstPage + (shown[at]?.[0] ?? at);
+      target.getPage(index).drawPage(page, { x: geometry.textLeft, y, width, height });
     });
   }
   return target.save({ useObjectStreams: false, updateFieldAppearances: false });

@@ -33,13 +33,14 @@ export async function renderPackage(print: PackagePrint): Promise<PrintedPackage
     ...print.sheets.map((sheet) => sheetPart(sheet, print)),
     closingPart(print),
   ]);
-  const indexPages = setIndex(indexEntries(parts, 0, 1), geometry, typesetter).length;
+  const sealed = print.seal?.on === 'every-page';
+  const indexPages = setIndex(indexEntries(parts, 0, 1), geometry, typesetter, sealed).length;
   const first = 1 + indexPages;
   const of = parts.reduce((sum, part) => sum + part.count, first);
   const entries = indexEntries(parts, first, of);
   const front = [
     coverPage(setCover(print, entries, geometry, typesetter), print, geometry, of),
-    ...setIndex(entries, geometry, typesetter).map((ink, index) =>
+    ...setIndex(entries, geometry, typesetter, sealed).map((ink, index) =>
       indexPage(ink, index, print, geometry, of),
     ),
   ];

@@ -20,12 +20,14 @@ export type IndexEntry = CoverEntry & {
 const LOOK = { ...LOOKS.text, size: 8.4, leading: 11.6 };
 const HEADING = 12 * MM;
 
-/** The index, page by page; how many there are does not depend on the numbers they print. */
+/** The index, page by page, ending above a seal; how many pages there are does not depend on the numbers they print. */
 export function setIndex(
   entries: readonly IndexEntry[],
   page: PageGeometry,
   typesetter: Typesetter,
+  sealed: boolean,
 ): Ink[][] {
+  const bottom = sealed ? page.marginSeal.y - 2 * MM : page.bottom;
   const pages: Ink[][] = [];
   let y = Number.POSITIVE_INFINITY;
   const turn = () => {
@@ -37,11 +39,11 @@ export function setIndex(
   };
   for (const entry of entries) {
     // A sheet's row stays with its first sections.
-    if (y + LIST_ROW + Math.min(2, entry.sections.length) * LOOK.leading > page.bottom) turn();
+    if (y + LIST_ROW + Math.min(2, entry.sections.length) * LOOK.leading > bottom) turn();
     pages.at(-1)?.push(...listRow(entry, page, y, typesetter));
     y += LIST_ROW + (entry.sections.length > 0 ? 1 * MM : 0);
     for (const section of entry.sections) {
-      if (y + LOOK.leading > page.bottom) turn();
+      if (y + LOOK.leading > bottom) turn();
       pages.at(-1)?.push(...sectionInk(section, page, y, typesetter));
       y += LOOK.leading;
     }

@@ -40,3 +40,12 @@ export function fontsOf(bytes: Uint8Array): { name: string; embedded: boolean }[
 export const infoOf = (bytes: Uint8Array): string => run(bytes, 'pdfinfo', ['@']);
 export const destinationsOf = (bytes: Uint8Array): string => run(bytes, 'pdfinfo', ['-dests', '@']);
 export const attachmentsOf = (bytes: Uint8Array): string => run(bytes, 'pdfdetach', ['-list', '@']);
+
+/** Words of a page with where they end, points from its top. */
+export function wordsOf(bytes: Uint8Array, page: number): { text: string; bottom: number }[] {
+  const boxes = run(bytes, 'pdftotext', ['-bbox', '-f', `${page}`, '-l', `${page}`, '@', '-']);
+  return [...boxes.matchAll(/yMax="([\d.]+)">([^<]*)<\/word>/g)].map(([, bottom, text = '']) => ({
+    text,
+    bottom: Number(bottom),
+  }));
+}

@@ -2,7 +2,7 @@ import { PDFDict, PDFDocument, PDFName } from '@cantoo/pdf-lib';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { PackagePrint, PrintedPackage } from '@/templates/paper/package-print';
 import { renderPackage } from '@/templates/paper/render-package';
-import { attachmentsOf, checkFile, destinationsOf, fontsOf, textOf } from './read-pdf';
+import { attachmentsOf, checkFile, destinationsOf, fontsOf, textOf, wordsOf } from './read-pdf';
 import { samplePackage } from './sample-package';
 
 /** A one-page file such as a client sends, with words to find again. */
@@ -75,6 +75,21 @@ describe('a printed package', () => {
     const file = await PDFDocument.load(printed.bytes, { updateMetadata: false });
     const links = file.getPage(1).node.Annots()?.size() ?? 0;
     expect(links).toBeGreaterThan(print.sheets.length);
+  });
+
+  it('keeps the sheets of a long index above the seal in the margin', async () => {
+    const sheets = Array.from({ length: 18 }, (_, i) => ({
+      ...samplePackage.sheets[i % 3],
+      number: `S-${i + 10}`,
+    }));
+    const long = await renderPackage({ ...samplePackage, sheets: sheets as PackagePrint['sheets'] });
+    const indexes = long.pages.flatMap(({ label }, index) => (label.startsWith('index') ? [index + 1] : []));
+    expect(indexes.length).toBeGreaterThan(2);
+    // The seal's upper edge: 24.5 mm and 29.6 mm above the foot of a page 279.4 mm high.
+    const edge = ((279.4 - 24.5 - 29.6) / 25.4) * 72;
+    for (const { text, bottom } of indexes.flatMap((number) => wordsOf(long.bytes, number))) {
+      if (/^S-\d+$/.test(text)) expect(bottom).toBeLessThan(edge);
+    }
   });
 
   it('frames an attached document inside the rule, under its own sheet number', () => {
