@@ -1,7 +1,19 @@
 import type { NextConfig } from 'next';
 
 const config: NextConfig = {
-  serverExternalPackages: ['knex', 'mysql2', '@node-rs/argon2', '@react-pdf/renderer', 'fontkit', 'pino', 'nodemailer', 'node-forge'],
+  serverExternalPackages: [
+    'knex',
+    'mysql2',
+    '@node-rs/argon2',
+    '@react-pdf/renderer',
+    '@react-pdf/layout',
+    '@react-pdf/render',
+    'pdfkit',
+    'fontkit',
+    'pino',
+    'nodemailer',
+    'node-forge',
+  ],
   experimental: { authInterrupts: true, serverActions: { bodySizeLimit: '4mb' } },
   poweredByHeader: false,
 };

@@ -1,9 +1,9 @@
-import type { FieldError } from '@/lib/model/field-reader';
-import type { Solution } from '@/lib/engine/solution';
 import { combine } from '@/lib/engine/combinations/combine';
+import type { Solution } from '@/lib/engine/solution';
 import { solve } from '@/lib/engine/solve';
 import { analysis as analysisSchema } from '@/lib/model/analysis';
 import type { Draft } from '@/lib/model/draft';
+import type { FieldError } from '@/lib/model/field-reader';
 import { readDraft } from '@/lib/model/read-draft';
 import type { Refusal } from '@/lib/model/refusal';
 import type { Block } from '@/templates/block';
@@ -21,5 +21,9 @@ export function solveDraft(draft: Draft): SolvedDraft {
   const published = draft.combinationSet === '' ? [] : combine(analysis.cases, draft.combinationSet);
   const solved = solve({ ...analysis, combinations: [...published, ...analysis.combinations] });
   if (!solved.ok) return { ok: false, errors: [], refusal: solved.refusal };
-  return { ok: true, solution: solved.value, blocks: compose(solved.value, { title: draft.title, basis: draft.basis }) };
+  return {
+    ok: true,
+    solution: solved.value,
+    blocks: compose(solved.value, { title: draft.title, basis: draft.basis }),
+  };
 }

@@ -7,6 +7,7 @@ import { analysisForm, analysis as analysisSchema } from '@/lib/model/analysis';
 import type { Draft } from '@/lib/model/draft';
 import { readDraft } from '@/lib/model/read-draft';
 import { DrawingView } from '@/templates/screen/drawing-view';
+import { measureLabel } from '@/templates/screen/lay-out-label';
 import { useDesk } from './desk-context';
 
 /** The structure to scale as far as it can be read, with the loads of the case in hand. */
@@ -40,5 +41,7 @@ function drawDraft(draft: Draft, caseIndex: number | undefined, width: number): 
   );
   if (!parsed.success || parsed.data.members.length > 400) return undefined;
   const chosen = caseIndex === undefined ? undefined : parsed.data.cases[caseIndex];
-  return chosen ? drawLoads(parsed.data, chosen, { width }) : drawStructure(parsed.data, { width });
+  return chosen
+    ? drawLoads(parsed.data, chosen, { width, measure: measureLabel })
+    : drawStructure(parsed.data, { width, measure: measureLabel });
 }

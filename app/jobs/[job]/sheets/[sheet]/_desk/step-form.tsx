@@ -56,7 +56,7 @@ export function StepForm({ step, writing, pages, sets, tryOut }: Props) {
       <div className="formhead">
         <h1>{deskSteps.find((s) => s.key === step)?.title}</h1>
       </div>
-      {drawn ? <LiveDrawing caseIndex={step === 'loads' ? caseIndex : undefined} width={460} /> : null}
+      {drawn ? <LiveDrawing caseIndex={step === 'loads' ? caseIndex : undefined} width={418} /> : null}
       {form()}
     </>
   );

@@ -1,0 +1,58 @@
+'use server';
+
+import { orRefuse, requireActor } from '@/app/session';
+import type { Draft } from '@/lib/model/draft';
+import { draft as draftSchema } from '@/lib/model/draft';
+import { type Quantity, quantity as quantitySchema } from '@/lib/model/quantity';
+import { freezeSheet as freeze } from '@/lib/services/freeze-sheet';
+import { keepDraft as keep } from '@/lib/services/keep-draft';
+import type { Keeping, Trial, Writing } from './_desk/writing';
+import { describeTrial } from './describe-trial';
+import { describeWriting } from './describe-writing';
+
+/** Keeps a draft on top of the version it was made from. */
+export async function keepDraft(sheetId: string, version: number, draft: Draft): Promise<Keeping> {
+  const actor = await requireActor();
+  const kept = await orRefuse(keep(actor, { sheetId, version, draft }));
+  return kept.ok
+    ? { ok: true, version: kept.version, keptAt: kept.keptAt.toISOString() }
+    : {
+        ok: false,
+        reason: 'conflict',
+        version: kept.version,
+        draft: kept.draft,
+        by: kept.by,
+        at: kept.at.toISOString(),
+      };
+}
+
+/** Solves and writes a draft for the live page. Nothing is stored. */
+export async function writeCalculation(draft: Draft): Promise<Writing> {
+  await requireActor();
+  const parsed = draftSchema.safeParse(draft);
+  if (!parsed.success) {
+    return {
+      state: 'incomplete',
+      errors: parsed.error.issues.map((i) => ({ path: i.path.join('.'), message: i.message })),
+    };
+  }
+  return describeWriting(parsed.data);
+}
+
+/** Tries another set of redundants on a draft. */
+export async function tryRedundants(draft: Draft, quantities: Quantity[]): Promise<Trial> {
+  await requireActor();
+  return describeTrial(draftSchema.parse(draft), quantitySchema.array().max(2_000).parse(quantities));
+}
+
+/** Freezes the sheet; answers where the revision can be read. */
+export async function freezeSheet(
+  sheetId: string,
+  reason: string,
+): Promise<{ ok: true; to: string } | { ok: false; message: string }> {
+  const actor = await requireActor();
+  const frozen = await orRefuse(freeze(actor, { sheetId, reason }));
+  return frozen.ok
+    ? { ok: true, to: `/jobs/${frozen.value.jobId}/revisions/${frozen.value.revisionId}` }
+    : { ok: false, message: frozen.errors[0]?.message ?? 'The sheet could not be frozen.' };
+}
