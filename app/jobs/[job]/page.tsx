@@ -1,0 +1,85 @@
+import type { Metadata } from 'next';
+import Link from 'next/link';
+import { openJob } from '@/lib/services/open-job';
+import { Empty } from '../../components/empty';
+import { Hung } from '../../components/ledger';
+import { Page } from '../../components/page';
+import { orRefuse, requireActor } from '../../session';
+import { SheetLedger } from './sheet-ledger';
+import { SubmittalList } from './submittal-list';
+
+interface JobPageProps {
+  params: Promise<{ job: string }>;
+}
+
+export const metadata: Metadata = { title: 'Job' };
+
+export default async function JobPage({ params }: JobPageProps) {
+  const actor = await requireActor();
+  const { job, sheets, submittals } = await orRefuse(openJob(actor, (await params).job));
+  const mayMake = actor.roles.some((r) => r === 'engineer' || r === 'engineer-of-record');
+  const units = job.units === 'US' ? 'kip, ft, in' : 'kN, m, mm';
+  return (
+    <Page
+      wide
+      path={[{ label: 'Jobs', href: '/jobs' }, { label: `${job.number} ${job.title}` }]}
+      actor={actor}
+      foot={[
+        <span key="office">
+          <b>{actor.officeName}</b>
+        </span>,
+        job.number,
+        job.pageSize,
+        units,
+        sheets.length === 1 ? '1 sheet' : `${sheets.length} sheets`,
+        <span key="zone" className="end">{`Times in ${actor.zone}`}</span>,
+      ]}
+    >
+      <Hung at="top" number={job.number}>
+        <div className="titlerow">
+          <h1>{job.title}</h1>
+          <span className="sp" />
+          {mayMake ? (
+            <>
+              {sheets.some((s) => s.revisionId) ? (
+                <Link className="btn" href={`/jobs/${job.id}/submittals/new`}>
+                  New submittal
+                </Link>
+              ) : null}
+              <Link className="btn p" href={`/jobs/${job.id}/sheets/new`}>
+                New sheet
+              </Link>
+            </>
+          ) : null}
+        </div>
+        <p className="facts">
+          {[job.place, job.jurisdiction, job.authority, job.codes, units, job.pageSize]
+            .filter(Boolean)
+            .map((fact) => (
+              <span key={fact}>{fact}</span>
+            ))}
+        </p>
+      </Hung>
+      {sheets.length === 0 ? (
+        <Hung at="section">
+          <Empty title="No sheets yet.">
+            A calc sheet is one structure, solved and written out.
+            {mayMake
+              ? ' Make the first one from a starting sheet.'
+              : ' An engineer of the office makes the first.'}
+          </Empty>
+        </Hung>
+      ) : (
+        <SheetLedger jobId={job.id} sheets={sheets} zone={actor.zone} mayMake={mayMake} />
+      )}
+      <Hung at="section">
+        <h2>Submittals</h2>
+        {submittals.length === 0 ? (
+          <p className="i2">None yet. A submittal takes frozen and checked revisions to the plan reviewer.</p>
+        ) : (
+          <SubmittalList jobId={job.id} submittals={submittals} zone={actor.zone} />
+        )}
+      </Hung>
+    </Page>
+  );
+}
