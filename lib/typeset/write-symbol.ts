@@ -11,6 +11,7 @@ const letters: Record<string, string> = {
   ℓ: '\\ell',
   cosα: '\\cos\\alpha',
   sinα: '\\sin\\alpha',
+  ΔT: '\\Delta T',
   EI0: 'EI_0',
 };
 

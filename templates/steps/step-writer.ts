@@ -1,5 +1,5 @@
-import type { UnitSet } from '@/lib/model/analysis';
 import type { Drawing } from '@/lib/figures/drawing';
+import type { UnitSet } from '@/lib/model/analysis';
 import type { Block, EquationRow, TableColumn, TableRow } from '../block';
 
 /** What a table is made of; its number is that of its line. */
@@ -48,7 +48,15 @@ export class StepWriter {
   table({ caption, columns, rows, note, source }: TableInput): void {
     if (rows.length === 0) return;
     const id = this.take();
-    this.blocks.push({ kind: 'table', id, caption: `**Table ${id}.** ${caption}`, columns, rows, note, source });
+    this.blocks.push({
+      kind: 'table',
+      id,
+      caption: `**Table ${id}.** ${caption}`,
+      columns,
+      rows,
+      note,
+      source,
+    });
   }
 
   figure(caption: string, drawings: Drawing[], narrow?: Drawing[]): void {

@@ -1,6 +1,6 @@
+import type { Placed } from '@/lib/engine/derivation/geometry';
 import type { Analysis, UnitSet } from '@/lib/model/analysis';
 import type { Quantity } from '@/lib/model/quantity';
-import type { Placed } from '@/lib/engine/derivation/geometry';
 
 /** A name typed by a person, safe inside rich text. */
 export const plain = (text: string): string => text.replaceAll('$', '\\$').replaceAll('*', '∗');
@@ -14,7 +14,21 @@ export function listWords(items: readonly string[]): string {
   return `${items.slice(0, -1).join(', ')} and ${items.at(-1)}`;
 }
 
-const spoken = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
+const spoken = [
+  'no',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+];
 
 /** Small numbers in words. */
 export const countWords = (n: number): string => spoken[n] ?? `${n}`;
@@ -28,7 +42,12 @@ export const unitNames = (units: UnitSet): { force: string; length: string; smal
   units === 'US' ? { force: 'kip', length: 'ft', small: 'in.' } : { force: 'kN', length: 'm', small: 'mm' };
 
 /** What a force quantity is and when it is positive. */
-export function quantityWords(q: Quantity, analysis: Analysis, placed: ReadonlyMap<string, Placed>, beam: boolean): string {
+export function quantityWords(
+  q: Quantity,
+  analysis: Analysis,
+  placed: ReadonlyMap<string, Placed>,
+  beam: boolean,
+): string {
   switch (q.kind) {
     case 'reaction': {
       const joint = plain(q.joint);
@@ -50,7 +69,12 @@ export function quantityWords(q: Quantity, analysis: Analysis, placed: ReadonlyM
 }
 
 /** What is done to release a quantity: an order. */
-export function releaseWords(q: Quantity, analysis: Analysis, placed: ReadonlyMap<string, Placed>, beam: boolean): string {
+export function releaseWords(
+  q: Quantity,
+  analysis: Analysis,
+  placed: ReadonlyMap<string, Placed>,
+  beam: boolean,
+): string {
   switch (q.kind) {
     case 'reaction': {
       const joint = plain(q.joint);
@@ -58,14 +82,17 @@ export function releaseWords(q: Quantity, analysis: Analysis, placed: ReadonlyMa
       if (q.component === 'turn') return `put a hinge at support ${joint}`;
       const other = q.component === 'x' ? support?.y : support?.x;
       const held = other !== undefined && other !== 'free';
-      if (held) return `put support ${joint} on a roller that moves ${q.component === 'x' ? 'sideways' : 'up and down'}`;
+      if (held)
+        return `put support ${joint} on a roller that moves ${q.component === 'x' ? 'sideways' : 'up and down'}`;
       return `take away support ${joint}`;
     }
     case 'axial':
       return `cut ${memberOf(q.member, placed)} so that it passes no axial force`;
     case 'moment': {
       const joint = endJoint(q.member, q.end, placed);
-      return beam ? `put a hinge over ${joint}` : `put a hinge at end ${joint} of ${memberOf(q.member, placed)}`;
+      return beam
+        ? `put a hinge over ${joint}`
+        : `put a hinge at end ${joint} of ${memberOf(q.member, placed)}`;
     }
   }
 }

@@ -1,4 +1,5 @@
 import type { Value } from '@/lib/engine/derivation/expression';
+import type { Placed } from '@/lib/engine/derivation/geometry';
 import type { Relation } from '@/lib/engine/derivation/relation';
 import type { StaticsStep } from '@/lib/engine/derivation/statics';
 import type { SymbolName } from '@/lib/engine/derivation/symbol-name';
@@ -8,7 +9,6 @@ import { formulaTex, substitutionTex } from '@/lib/typeset/write-expression';
 import { symbolTex } from '@/lib/typeset/write-symbol';
 import type { EquationRow } from '../block';
 import { listWords, memberWords, plain } from './words';
-import type { Placed } from '@/lib/engine/derivation/geometry';
 
 /** symbol = formula = figures = result; members that would only repeat their neighbour are left out. */
 export function relationRow(r: Relation, units: UnitSet, note?: string): EquationRow {
@@ -52,7 +52,8 @@ export function staticsRows(step: StaticsStep, units: UnitSet): EquationRow[] {
 
 /** ΣM_A:, ΣF_x:, ΣF_y: */
 export function sumTex(sum: StaticsStep['sum']): string {
-  if (sum.kind === 'moment') return `\\textstyle\\sum ${symbolTex({ letter: 'M', sub: [sum.joint ?? 'O'] })}:`;
+  if (sum.kind === 'moment')
+    return `\\textstyle\\sum ${symbolTex({ letter: 'M', sub: [sum.joint ?? 'O'] })}:`;
   return `\\textstyle\\sum ${symbolTex({ letter: 'F', sub: [Math.abs(sum.x) > Math.abs(sum.y) ? 'x' : 'y'] })}:`;
 }
 
@@ -60,7 +61,8 @@ export function sumTex(sum: StaticsStep['sum']): string {
 export function staticsWords(step: StaticsStep, placed: ReadonlyMap<string, Placed>, units: UnitSet): string {
   const piece = step.piece ? pieceWords(step.piece, placed) : '';
   const start = piece === '' ? '' : `On ${piece}: `;
-  const said = (text: string) => (start === '' ? text.charAt(0).toUpperCase() + text.slice(1) : `${start}${text}`);
+  const said = (text: string) =>
+    start === '' ? text.charAt(0).toUpperCase() + text.slice(1) : `${start}${text}`;
   const arms = step.arms.map((a) => `${a.symbol ? inline(a.symbol) : ''} $= ${quantityTex(a, units)}$`);
   const armed = arms.length === 0 ? '' : `, with the arm${arms.length > 1 ? 's' : ''} ${listWords(arms)}`;
   const unused = step.check ? ', not used yet, as a check' : '';

@@ -55,6 +55,10 @@ export function planFigures(solution: Solution): FigurePlan {
   const force = decimalsFor(forces, 5, 0, 3);
   const moment = decimalsFor(ends('M'), 5, 0, 2);
   const unit = solution.primary.units.flatMap((u) => Object.values(u.members).flatMap((m) => endsOf(m.M)));
+  const unitForces = solution.primary.units.flatMap((u) => [
+    ...u.reactions.map((r) => r.value),
+    ...Object.values(u.members).flatMap((m) => [...endsOf(m.N), ...endsOf(m.V)]),
+  ]);
   const parts = Object.values(solution.work.parts).flat();
   return {
     length: exactDecimals(lengthsOf(analysis), 2, 4),
@@ -63,8 +67,8 @@ export function planFigures(solution: Solution): FigurePlan {
     redundantForce: force + 1,
     redundantMoment: moment + 1,
     ratio: exactDecimals(ratiosOf(analysis), 2, 4),
-    unitForce: 4,
-    unitMoment: exactDecimals(unit, 2, 4),
+    unitForce: exactDecimals(unitForces, 4, supporting(solution, force)),
+    unitMoment: exactDecimals(unit, 2, Math.max(4, supporting(solution, moment))),
     area: decimalsFor(
       parts.map((p) => p.area),
       6,
@@ -86,6 +90,13 @@ export function planFigures(solution: Solution): FigurePlan {
     deflection: 2,
     load: 2,
   };
+}
+
+/** Decimals of a factor of the redundants, so that Σ X times it keeps its place: what it may miss is X times its rounding. */
+function supporting(solution: Solution, decimals: number): number {
+  const sums = Object.values(solution.X).map((X) => X.reduce((t, x) => t + Math.abs(x), 0));
+  const largest = Math.max(1, ...sums);
+  return Math.min(9, Math.max(4, Math.ceil(decimals + Math.log10(largest / 0.4))));
 }
 
 const endsOf = (f: PiecewisePolynomial): number[] => {

@@ -24,7 +24,14 @@ export interface SummaryStep {
     negative?: Demand;
   }[];
   /** Forces of the structure on its supports, opposite to the reactions. */
-  supports: { reaction: Value; cases: Record<string, number>; combinations: Record<string, number> }[];
+  supports: {
+    joint: string;
+    component: 'x' | 'y' | 'turn';
+    reaction: Value;
+    /** Opposite to the reaction, except that vertical forces are counted downward: what the foundation bears. */
+    cases: Record<string, number>;
+    combinations: Record<string, number>;
+  }[];
   /** Supports that are pulled up under some combination (or case). */
   uplift: { joint: string; by: string }[];
 }
@@ -48,13 +55,22 @@ export function deriveSummary(ctx: Context): SummaryStep {
     });
     return { member: m.id, ...demandsOf(list) };
   });
-  const supports = (states[0]?.reactions ?? []).map((r, k) => ({
-    reaction: reactionValue(ctx, r, (s) => s),
-    cases: Object.fromEntries(
-      analysis.cases.map((c) => [c.id, -(solution.cases[c.id]?.reactions[k]?.value ?? Number.NaN)]),
-    ),
-    combinations: Object.fromEntries(combined.map((c) => [c.id, -(c.reactions[k]?.value ?? Number.NaN)])),
-  }));
+  const supports = (states[0]?.reactions ?? []).flatMap((r, k) => {
+    const { quantity: q } = r;
+    if (q.kind !== 'reaction') return [];
+    // Down on the foundation is up on the structure: the reaction itself; other components turn their sign.
+    const sign = q.component === 'y' ? 1 : -1;
+    const of = (list: readonly { value: number }[] | undefined) => sign * (list?.[k]?.value ?? Number.NaN);
+    return [
+      {
+        joint: q.joint,
+        component: q.component,
+        reaction: reactionValue(ctx, r, (s) => s),
+        cases: Object.fromEntries(analysis.cases.map((c) => [c.id, of(solution.cases[c.id]?.reactions)])),
+        combinations: Object.fromEntries(combined.map((c) => [c.id, of(c.reactions)])),
+      },
+    ];
+  });
   const uplift = states.flatMap((s) =>
     s.reactions.flatMap(({ quantity: q, value }) =>
       q.kind === 'reaction' && q.component === 'y' && value < -1e-9 ? [{ joint: q.joint, by: s.id }] : [],
