@@ -1,5 +1,5 @@
 import Link from 'next/link';
-import { Page } from './components/page';
+import { Page } from './components/page-layout';
 import { currentActor } from './session';
 
 export default async function NotFoundPage() {

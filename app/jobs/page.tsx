@@ -5,7 +5,7 @@ import { listJobs } from '@/lib/services/list-jobs';
 import { myWork } from '@/lib/services/my-work';
 import { Empty } from '../components/empty';
 import { Hung, Ledger, LedgerRow } from '../components/ledger';
-import { Page } from '../components/page';
+import { Page } from '../components/page-layout';
 import { sayMoment, sayToday } from '../components/say-date';
 import { SheetStates } from '../components/sheet-states';
 import { orRefuse, requireActor } from '../session';

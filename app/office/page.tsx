@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { openOffice } from '@/lib/services/open-office';
 import { Hung, Ledger, LedgerRow } from '../components/ledger';
-import { Page } from '../components/page';
+import { Page } from '../components/page-layout';
 import { orRefuse, requireActor } from '../session';
 import { InviteForm } from './invite-form';
 import { roleWords } from './role-words';

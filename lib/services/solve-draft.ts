@@ -1,4 +1,5 @@
 import { combine } from '@/lib/engine/combinations/combine';
+import { findSet } from '@/lib/engine/combinations/published-sets';
 import type { Solution } from '@/lib/engine/solution';
 import { solve } from '@/lib/engine/solve';
 import { analysis as analysisSchema } from '@/lib/model/analysis';
@@ -18,7 +19,8 @@ export function solveDraft(draft: Draft): SolvedDraft {
   const read = readDraft(draft);
   if (!read.ok) return { ok: false, errors: read.errors };
   const analysis = analysisSchema.parse(read.analysis);
-  const published = draft.combinationSet === '' ? [] : combine(analysis.cases, draft.combinationSet);
+  const set = draft.combinationSet === '' ? undefined : findSet(draft.combinationSet);
+  const published = set ? combine(analysis.cases, set) : [];
   const solved = solve({ ...analysis, combinations: [...published, ...analysis.combinations] });
   if (!solved.ok) return { ok: false, errors: [], refusal: solved.refusal };
   return {

@@ -4,7 +4,7 @@ import { env } from '@/lib/env';
 import { readDemoMail } from '@/lib/services/read-demo-mail';
 import { Empty } from '../../components/empty';
 import { Hung, Ledger, LedgerRow } from '../../components/ledger';
-import { Page } from '../../components/page';
+import { Page } from '../../components/page-layout';
 import { sayMoment } from '../../components/say-date';
 import { currentActor, orRefuse } from '../../session';
 

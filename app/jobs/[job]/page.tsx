@@ -3,7 +3,7 @@ import Link from 'next/link';
 import { openJob } from '@/lib/services/open-job';
 import { Empty } from '../../components/empty';
 import { Hung } from '../../components/ledger';
-import { Page } from '../../components/page';
+import { Page } from '../../components/page-layout';
 import { orRefuse, requireActor } from '../../session';
 import { SheetLedger } from './sheet-ledger';
 import { SubmittalList } from './submittal-list';

@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { openOffice } from '@/lib/services/open-office';
-import { Page } from '../../components/page';
+import { Page } from '../../components/page-layout';
 import { orRefuse, requireActor } from '../../session';
 import { JobForm } from './job-form';
 

@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { openJob } from '@/lib/services/open-job';
-import { Page } from '../../../../components/page';
+import { Page } from '../../../../components/page-layout';
 import { orRefuse, requireActor } from '../../../../session';
 import { SheetForm } from './sheet-form';
 
