@@ -31,7 +31,7 @@ export async function findJobs(
       .leftJoin('authorities as a', 'a.id', 'j.authority_id')
       .where({ 'j.office_id': officeId, 'j.state': ask.state })
       .where((q) => {
-        for (const c of ['j.number', 'j.title', 'j.place', 'a.name']) q.orWhereLike(c, like);
+        for (const c of ['j.number', 'j.title', 'j.place', 'a.name']) q.orWhere(c, 'like', like);
       });
   const count = await matching().count({ n: '*' }).first();
   const rows = await matching()
