@@ -1,7 +1,13 @@
 // server only
 import { createHash, createVerify } from 'node:crypto';
 import * as asn1js from 'asn1js';
-import { AlgorithmIdentifier, type Certificate, GeneralName, type SignerInfo } from 'pkijs';
+import {
+  AlgorithmIdentifier,
+  type Certificate,
+  GeneralName,
+  IssuerAndSerialNumber,
+  type SignerInfo,
+} from 'pkijs';
 import { type Bytes, compareBytes } from './bytes';
 import { hashOid, oid, signatureOid } from './oid';
 import type { ParsedCms } from './parse-cms';
@@ -107,9 +113,11 @@ function verify(signerInfo: SignerInfo, certificate: Certificate, hash: string):
 export function checkSignerInfo(cms: ParsedCms, content: Uint8Array, contentType: string): Certificate {
   const { signerInfo, certificates } = cms;
   const hash = hashOf(signerInfo);
+  // Byte for byte: pkijs compares names without regard to case, and nobody signs this one.
+  const sid = encoded(signerInfo.sid);
   const own = certificates.filter(
-    (one) =>
-      one.issuer.isEqual(signerInfo.sid.issuer) && one.serialNumber.isEqual(signerInfo.sid.serialNumber),
+    ({ issuer, serialNumber }) =>
+      compareBytes(sid, encoded(new IssuerAndSerialNumber({ issuer, serialNumber }))) === 0,
   );
   const certificate = own[0];
   if (!certificate || own.length > 1) refuse('certificate-missing', `${own.length} fit`);

@@ -43,7 +43,7 @@ function circle(x: number, y: number, r: number): string {
 }
 
 /** The largest size up to `wanted` at which text keeps within `width`. */
-function fit(font: fontkit.FontkitFont, text: string, wanted: number, width: number): number {
+function fittingSize(font: fontkit.FontkitFont, text: string, wanted: number, width: number): number {
   return Math.min(wanted, (wanted * width) / textWidth(font, text, wanted));
 }
 
@@ -62,7 +62,7 @@ export function drawSeal(text: SealText, fonts: SealFonts): (width: number, heig
   }
   // Half the ring at most, so that the two texts never meet.
   const arc = (words: string, wanted: number, radius: number, at: 'top' | 'foot') => {
-    const size = fit(
+    const size = fittingSize(
       medium,
       words,
       wanted,
@@ -71,7 +71,7 @@ export function drawSeal(text: SealText, fonts: SealFonts): (width: number, heig
     return outlineArc(medium, words, size, { x: middle, y: middle, radius, side: at, spacing: 1.6 });
   };
   const line = (font: fontkit.FontkitFont, words: string, down: number, wanted: number, width: number) =>
-    outlineLine(font, words, middle, side - down, fit(font, words, wanted, width));
+    outlineLine(font, words, middle, side - down, fittingSize(font, words, wanted, width));
   const parts = [
     `${red} rg ${red} RG`,
     `2.2 w ${circle(middle, middle, 97)} S`,

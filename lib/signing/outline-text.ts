@@ -31,7 +31,7 @@ function outline(commands: readonly FontkitPathCommand[], scale: number, turn: T
         const first = at(fromX + (2 / 3) * (a - fromX), fromY + (2 / 3) * (b - fromY));
         return `${first} ${at(c + (2 / 3) * (a - c), d + (2 / 3) * (b - d))} ${at(c, d)} c`;
       }
-      case 'closePath':
+      default:
         return 'h';
     }
   });

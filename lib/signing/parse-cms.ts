@@ -19,10 +19,13 @@ function refuse(detail: string, cause?: unknown): never {
 function decode(bytes: Bytes): SignedData {
   const { offset, result } = asn1js.fromBER(bytes);
   if (offset !== bytes.length || result.error) refuse('not one ASN.1 structure');
-  if (compareBytes(new Uint8Array(result.toBER()), bytes) !== 0) refuse('not in the one encoding DER allows');
-  const info = new ContentInfo({ schema: result });
-  if (info.contentType !== oid.signedData) refuse(`content type ${info.contentType}`);
-  return new SignedData({ schema: info.content });
+  const { contentType, content } = new ContentInfo({ schema: result });
+  if (contentType !== oid.signedData) refuse(`content type ${contentType}`);
+  const data = new SignedData({ schema: content });
+  // Written out again it must be the same: nothing unread inside, and the one encoding DER allows.
+  const again = new ContentInfo({ contentType, content: data.toSchema() }).toSchema().toBER();
+  if (compareBytes(new Uint8Array(again), bytes) !== 0) refuse('not in the one encoding DER allows');
+  return data;
 }
 
 /**

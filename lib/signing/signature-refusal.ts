@@ -19,6 +19,7 @@ const sentences = {
   'time-stamp-wrong':
     'The time stamp does not belong to this signature, or is not from a service trusted here.',
   'time-stamp-missing': 'The signature carries no time stamp.',
+  'signature-too-long': 'The signature with its certificates is longer than the room kept for it.',
   'byte-range': 'The signature does not cover the whole file as it stood when it was signed.',
 } as const;
 

@@ -1,17 +1,16 @@
 import { PDFDocument, StandardFonts } from '@cantoo/pdf-lib';
 import { buildCms } from '@/lib/signing/build-cms';
 import type { Bytes } from '@/lib/signing/bytes';
-import { checkCms, type Person } from '@/lib/signing/check-cms';
+import type { Person } from '@/lib/signing/check-cms';
 import type { Trust } from '@/lib/signing/check-signature';
+import { completeSignature } from '@/lib/signing/complete-signature';
 import { type DemoAuthority, type DemoEngineer, makeDemoAuthority } from '@/lib/signing/demo-authority';
-import { insertSignature } from '@/lib/signing/insert-signature';
 import { type LocalTimeStampServer, startLocalTimeStampServer } from '@/lib/signing/local-time-stamp-server';
 import { openKeyFile } from '@/lib/signing/open-key-file';
 import { type FieldPlace, placeSignatureFields } from '@/lib/signing/place-signature-fields';
 import { type PreparedFile, prepareSignature } from '@/lib/signing/prepare-signature';
 import { signedPart } from '@/lib/signing/signed-part';
 import type { Signer } from '@/lib/signing/signer';
-import { stampSignature } from '@/lib/signing/time-stamp';
 
 /** An invented office with its authority, its engineers and a time-stamping service of its own, for these tests. */
 export interface Office {
@@ -72,7 +71,7 @@ export async function sign({ bytes, hole }: PreparedFile, signer: Signer): Promi
   return buildCms(new Uint8Array(await crypto.subtle.digest(signer.hash, signedPart(bytes, hole))), signer);
 }
 
-/** The whole way: prepare, sign, check, stamp, insert. */
+/** The whole way, from an empty field to a sealed file. */
 export async function seal(
   office: Office,
   pdf: Uint8Array,
@@ -81,8 +80,7 @@ export async function seal(
   field?: string,
 ): Promise<Bytes> {
   const prepared = await prepare(pdf, person, field);
+  const { trust, stamps } = office;
   const cms = await sign(prepared, signer);
-  await checkCms(cms, signedPart(prepared.bytes, prepared.hole), person, office.trust, new Date());
-  const service = { url: office.stamps.url, anchors: office.trust.stampAnchors };
-  return insertSignature(prepared, (await stampSignature(cms, service)).cms);
+  return (await completeSignature(prepared, cms, person, { trust, timeStampUrl: stamps.url })).pdf;
 }
