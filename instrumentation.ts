@@ -1,8 +1,8 @@
-import { env } from './lib/env';
-
 /** Starts the mail worker with the server; several servers may run it at once. */
 export async function register(): Promise<void> {
-  if (env().edge) return;
-  const { startMailWorker } = await import('./lib/services/mail-worker');
-  startMailWorker();
+  // Next.js writes this name out while building and so drops the import where there is no Node.
+  if (process.env.NEXT_RUNTIME === 'nodejs') {
+    const { startMailWorker } = await import('./lib/services/mail-worker');
+    startMailWorker();
+  }
 }

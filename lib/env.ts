@@ -13,8 +13,6 @@ const schema = z.object({
   DEMO_FOLDER: z.string().optional(),
   LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent']).default('info'),
   NODE_ENV: z.string().default('development'),
-  /** Set by Next.js: which runtime a module was loaded in. */
-  NEXT_RUNTIME: z.string().optional(),
 });
 
 export interface Env {
@@ -28,7 +26,6 @@ export interface Env {
   demo: boolean;
   logLevel: string;
   production: boolean;
-  edge: boolean;
 }
 
 let read: Env | undefined;
@@ -53,7 +50,6 @@ export function env(): Env {
     demo: e.DEMO_FOLDER !== undefined,
     logLevel: e.LOG_LEVEL,
     production: e.NODE_ENV === 'production',
-    edge: e.NEXT_RUNTIME === 'edge',
   };
   return read;
 }
