@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { openJob } from '@/lib/services/open-job';
+import { makers } from '@/lib/services/require-role';
 import { Empty } from '../../components/empty';
 import { Hung } from '../../components/ledger';
 import { Page } from '../../components/page-layout';
@@ -17,8 +18,13 @@ export const metadata: Metadata = { title: 'Job' };
 export default async function JobPage({ params }: JobPageProps) {
   const actor = await requireActor();
   const { job, sheets, submittals } = await orRefuse(openJob(actor, (await params).job));
-  const mayMake = actor.roles.some((r) => r === 'engineer' || r === 'engineer-of-record');
+  const mayMake = actor.roles.some((r) => makers.includes(r));
   const units = job.units === 'US' ? 'kip, ft, in' : 'kN, m, mm';
+  const facts = new Set(
+    [job.place, job.jurisdiction, job.authority, ...job.codes.split('\n'), units, job.pageSize].filter(
+      Boolean,
+    ),
+  );
   return (
     <Page
       wide
@@ -53,11 +59,9 @@ export default async function JobPage({ params }: JobPageProps) {
           ) : null}
         </div>
         <p className="facts">
-          {[job.place, job.jurisdiction, job.authority, job.codes, units, job.pageSize]
-            .filter(Boolean)
-            .map((fact) => (
-              <span key={fact}>{fact}</span>
-            ))}
+          {[...facts].map((fact) => (
+            <span key={fact}>{fact}</span>
+          ))}
         </p>
       </Hung>
       {sheets.length === 0 ? (

@@ -26,7 +26,7 @@ export function SheetLedger({ jobId, sheets, zone, mayMake }: SheetLedgerProps) 
           <span>Originator</span>
           <span>Checker</span>
           <span className="cch">Changed</span>
-          <span className="cch" />
+          <span />
         </div>
       </Hung>
       <Ledger kind="sheetsl">
@@ -52,7 +52,7 @@ export function SheetLedger({ jobId, sheets, zone, mayMake }: SheetLedgerProps) 
               <StatusMark mark={sheet.state} />
               <span className="crev">{sheet.revision ?? '–'}</span>
               <span>{sheet.originator}</span>
-              <span>
+              <span className="cchk">
                 {sheet.checkId ? (
                   <Link className="t" href={`/jobs/${jobId}/checks/${sheet.checkId}`}>
                     {sheet.checker ?? 'check'}
@@ -62,7 +62,7 @@ export function SheetLedger({ jobId, sheets, zone, mayMake }: SheetLedgerProps) 
                 )}
               </span>
               <span className="cch i2 s">{sayMoment(sheet.changedAt, zone)}</span>
-              <span className="cch">{mayMake ? <CopyForm sheet={sheet} jobId={jobId} /> : null}</span>
+              <span>{mayMake ? <CopyForm sheet={sheet} jobId={jobId} /> : null}</span>
             </div>
           </LedgerRow>
         ))}

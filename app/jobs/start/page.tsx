@@ -1,5 +1,7 @@
 import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
 import { openOffice } from '@/lib/services/open-office';
+import { makers } from '@/lib/services/require-role';
 import { Page } from '../../components/page-layout';
 import { orRefuse, requireActor } from '../../session';
 import { JobForm } from './job-form';
@@ -8,6 +10,7 @@ export const metadata: Metadata = { title: 'Start a job' };
 
 export default async function StartJobPage() {
   const actor = await requireActor();
+  if (!actor.roles.some((r) => r === 'administrator' || makers.includes(r))) forbidden();
   const { authorities } = await orRefuse(openOffice(actor));
   return (
     <Page

@@ -1,5 +1,7 @@
 import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
 import { openJob } from '@/lib/services/open-job';
+import { makers } from '@/lib/services/require-role';
 import { Page } from '../../../../components/page-layout';
 import { orRefuse, requireActor } from '../../../../session';
 import { SheetForm } from './sheet-form';
@@ -8,6 +10,7 @@ export const metadata: Metadata = { title: 'New sheet' };
 
 export default async function NewSheetPage({ params }: { params: Promise<{ job: string }> }) {
   const actor = await requireActor();
+  if (!actor.roles.some((r) => makers.includes(r))) forbidden();
   const { job } = await orRefuse(openJob(actor, (await params).job));
   return (
     <Page
