@@ -1,6 +1,7 @@
 // server only
 import { X509Certificate } from 'node:crypto';
 import { type Certificate, CertificateChainValidationEngine, type CertificateRevocationList } from 'pkijs';
+import { compareBytes } from './bytes';
 import { encoded } from './check-signer-info';
 import { oid, signatureOid } from './oid';
 import { extension, isAuthority, keyPurposes, maySeal, maySignData } from './read-certificate';
@@ -115,7 +116,10 @@ export async function checkChain(
     checkDate: at,
   });
   const { result, resultMessage, certificatePath: path } = await engine.verify();
-  if (!result || !path) refuse('certificate-unknown', resultMessage);
+  const [first] = path ?? [];
+  if (!result || !path || !first || compareBytes(encoded(first), encoded(certificate)) !== 0) {
+    refuse('certificate-unknown', resultMessage);
+  }
   const used = new Set(
     [...path, ...check.anchors].map((one) => Buffer.from(encoded(one)).toString('latin1')),
   );

@@ -45,8 +45,8 @@ async function check(
   if (cms.inner) throw new SignatureRefusal('not-a-signature', 'brings its own content');
   const certificate = checkSignerInfo(cms, content, oid.data);
   const token = stampToken(cms);
-  const stamp = token && (await checkTimeStamp(token, signatureValue(cms), trust.stampAnchors));
-  const { anchors, crls } = trust;
+  const { anchors, stampAnchors, crls } = trust;
+  const stamp = token && (await checkTimeStamp(token, signatureValue(cms), stampAnchors, crls));
   const chain = { purpose: 'sealing', anchors, crls, currentList } as const;
   await checkChain(certificate, cms.certificates, stamp?.time ?? now, chain);
   return { ...readCertificate(certificate), ...(stamp ? { stamp } : {}) };

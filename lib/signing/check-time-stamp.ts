@@ -1,6 +1,6 @@
 // server only
 import { createHash } from 'node:crypto';
-import { type Certificate, TSTInfo } from 'pkijs';
+import { type Certificate, type CertificateRevocationList, TSTInfo } from 'pkijs';
 import { type Bytes, compareBytes, toHex } from './bytes';
 import { checkChain } from './check-chain';
 import { checkSignerInfo } from './check-signer-info';
@@ -34,6 +34,7 @@ export async function checkTimeStamp(
   token: Bytes,
   stamped: Uint8Array,
   anchors: readonly Certificate[],
+  crls: readonly CertificateRevocationList[] = [],
 ): Promise<TimeStamp> {
   const cms = parseCms(token, oid.timeStampInfo);
   const info = readInfo(cms.inner);
@@ -47,7 +48,7 @@ export async function checkTimeStamp(
   if (cms.signerInfo.unsignedAttrs)
     throw new SignatureRefusal('time-stamp-wrong', 'attributes nobody signed');
   const certificate = checkSignerInfo(cms, cms.inner as Bytes, oid.timeStampInfo);
-  await checkChain(certificate, cms.certificates, info.genTime, { purpose: 'time-stamping', anchors });
+  await checkChain(certificate, cms.certificates, info.genTime, { purpose: 'time-stamping', anchors, crls });
   return {
     time: info.genTime,
     authority: readCertificate(certificate).holder.name,

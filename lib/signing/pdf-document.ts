@@ -14,6 +14,7 @@ interface Place {
 export class PdfDocument {
   readonly trailer: PdfDict;
   readonly places = new Map<number, Place | null>();
+  private readonly reading = new Set<string>();
   private readonly read = new Map<string, { value: PdfValue; span: Span }>();
 
   constructor(
@@ -34,6 +35,8 @@ export class PdfDocument {
     if (!place || place.gen !== ref.gen) return undefined;
     const known = this.read.get(ref.key);
     if (known) return known;
+    if (this.reading.has(ref.key)) throw new NotUnderstood('a stream length that leads round in a circle');
+    this.reading.add(ref.key);
     const scan = new PdfScanner(this.file.bytes, place.offset, place.limit, (length) => {
       const value = this.object(length)?.value;
       if (typeof value !== 'number') throw new NotUnderstood('stream length');
@@ -41,7 +44,15 @@ export class PdfDocument {
     });
     const object = scan.object(ref.num, ref.gen);
     this.read.set(ref.key, object);
+    this.reading.delete(ref.key);
     return object;
+  }
+
+  /** Every object there is. Throws NotUnderstood when one of them cannot be read. */
+  *objects(): Generator<PdfValue> {
+    for (const [num, place] of this.places) {
+      if (place) yield this.object(new PdfRef(num, place.gen))?.value ?? null;
+    }
   }
 
   /** A value with its reference followed; a reference to nowhere is null (ISO 32000-2, 7.3.10). */

@@ -6,7 +6,7 @@ export class NotUnderstood extends Error {}
 
 const blanks = new Set([0, 9, 10, 12, 13, 32]);
 const delimiters = new Set([...'()<>[]{}/%'].map((character) => character.charCodeAt(0)));
-const escapes: Record<string, number> = { n: 10, r: 13, t: 9, b: 8, f: 12, '(': 40, ')': 41, '\\': 92 };
+const escapes: Record<string, number> = { n: 10, r: 13, t: 9, b: 8, f: 12 };
 const deepest = 60;
 
 /**
@@ -134,10 +134,10 @@ export class PdfScanner {
     const from = ++this.at;
     const to = this.bytes.indexOf(0x3e, from);
     if (to < 0 || to >= this.end) this.fail('string');
-    const digits = this.bytes.toString('latin1', from, to);
-    if (!/^([0-9a-fA-F]{2})*$/.test(digits)) this.fail('hexadecimal string');
+    const digits = this.bytes.toString('latin1', from, to).replace(/[\0\t\n\f\r ]/g, '');
+    if (!/^[0-9a-fA-F]*$/.test(digits)) this.fail('hexadecimal string');
     this.at = to + 1;
-    return new PdfString(digits.toLowerCase());
+    return new PdfString((digits.length % 2 === 0 ? digits : `${digits}0`).toLowerCase());
   }
 
   private literal(): PdfString {
@@ -164,10 +164,11 @@ export class PdfScanner {
       this.at += octal[0].length;
       return [parseInt(octal[0], 8) & 255];
     }
-    const meant = escapes[String.fromCharCode(this.byte())];
-    if (meant === undefined) this.fail('escape in a string');
+    const byte = this.byte();
     this.at++;
-    return [meant];
+    if (byte === 13 && this.sees('\n')) this.at++;
+    // A line end after a backslash is left out; before any other character the backslash is (ISO 32000-2, 7.3.4.2).
+    return byte === 13 || byte === 10 ? [] : [escapes[String.fromCharCode(byte)] ?? byte];
   }
 
   private stream(dict: PdfDict): PdfStream {

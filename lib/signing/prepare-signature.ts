@@ -79,8 +79,9 @@ function setByteRange(bytes: Bytes, from: number): Hole {
  */
 export async function prepareSignature(pdf: Uint8Array, request: SignatureRequest): Promise<PreparedFile> {
   const file = readPdf(pdf);
-  const fields = readSignatureFields(new PdfDocument(file, file.revisions.length - 1));
-  const found = fields.find(({ name }) => name === request.field);
+  const current = new PdfDocument(file, file.revisions.length - 1);
+  Array.from(current.objects()); // reads every object, as verification will
+  const found = readSignatureFields(current).find(({ name }) => name === request.field);
   if (!found) throw new Error(`no signature field is called ${request.field}`);
   if (found.signed) throw new Error(`the field ${request.field} is signed already`);
   const document = await openForUpdate(pdf);

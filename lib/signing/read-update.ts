@@ -1,7 +1,7 @@
 // server only
 import { PdfDocument } from './pdf-document';
 import { NotUnderstood } from './pdf-scanner';
-import { dictOf, PdfRef, PdfStream, refsIn, type Span, sameValue } from './pdf-value';
+import { PdfRef, PdfStream, refsIn, type Span, sameValue } from './pdf-value';
 import type { PdfFile, Revision } from './read-pdf';
 
 /** What an update did, object by object. Objects rewritten to say the same are left out. */
@@ -31,10 +31,8 @@ function checkTiling(file: PdfFile, revision: Revision, spans: Span[]): void {
 
 function earlierReferenceFilled(before: PdfDocument, fresh: Iterable<PdfRef>): boolean {
   const numbers = new Set([...fresh].map(({ num }) => num));
-  for (const [num, place] of before.places) {
-    if (!place) continue;
-    const value = before.object(new PdfRef(num, place.gen))?.value;
-    for (const ref of refsIn(dictOf(value) ?? value)) if (numbers.has(ref.num)) return true;
+  for (const value of before.objects()) {
+    for (const ref of refsIn(value)) if (numbers.has(ref.num)) return true;
   }
   return false;
 }
