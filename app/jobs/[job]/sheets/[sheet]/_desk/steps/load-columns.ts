@@ -81,7 +81,7 @@ export function loadColumns(
     {
       key: 'kind',
       head: 'Load',
-      width: '98px',
+      width: '96px',
       field: 'kind',
       options: loadKinds,
       read: (row) => row.kind,
@@ -90,7 +90,7 @@ export function loadColumns(
     {
       key: 'on',
       head: 'On',
-      width: '64px',
+      width: '60px',
       field: 'on',
       options: (row) =>
         atJoint(row)
@@ -104,23 +104,23 @@ export function loadColumns(
     {
       key: 'direction',
       head: 'Sense',
-      width: '88px',
+      width: '98px',
       field: 'direction',
       options: directionsOf,
       used: directed,
       read: (row) => row.direction,
       write: (row, direction) => ({ ...row, direction: direction as DraftLoad['direction'] }),
     },
-    text('first', 'value', '84px', {
+    text('first', 'value', '88px', {
       kind: (row) => loadFieldKinds(row).first ?? 'number',
       used: (row) => loadFieldKinds(row).first !== undefined,
     }),
-    text('second', 'to value', '76px', {
+    text('second', 'to value', '70px', {
       kind: (row) => loadFieldKinds(row).second ?? 'number',
       used: (row) => loadFieldKinds(row).second !== undefined,
     }),
-    text('from', 'from', '60px', { kind: 'length', used: placed, L: spanOf }),
-    text('to', 'to', '60px', { kind: 'length', used: spread, L: spanOf }),
+    text('from', 'from', '54px', { kind: 'length', used: placed, L: spanOf }),
+    text('to', 'to', '54px', { kind: 'length', used: spread, L: spanOf }),
     {
       key: 'source',
       head: 'Source',
