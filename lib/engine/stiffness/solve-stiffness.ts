@@ -1,10 +1,10 @@
 import type { Analysis } from '@/lib/model/analysis';
 import type { Load } from '@/lib/model/load';
-import { deformationRow, dot, type Element, type EndTriple, elementOf, times } from './element';
+import { deformationRow, dot, type Element, type EndTriple, times } from './element';
 import { type ElementLoad, elementLoad } from './element-load';
 import { loadsByMember } from './loads-by-member';
-import { type Numbering, numberUnknowns } from './number-unknowns';
-import { SymmetricSystem } from './symmetric-system';
+import type { Numbering } from './number-unknowns';
+import { placesOf, stiffnessModel } from './stiffness-model';
 
 /** One case. Member forces stand just inside the joints, in the order of the members; signs as in Solution. */
 export interface StiffnessCase {
@@ -24,10 +24,9 @@ export interface StiffnessCase {
  * EI0 displacements come out times EI0. Undefined when the structure moves freely or no finite forces could answer.
  */
 export function solveStiffness(analysis: Analysis): Map<string, StiffnessCase> | undefined {
-  const elements = elementsOf(analysis);
-  if (!elements) return undefined;
-  const numbering = numberUnknowns(analysis, elements);
-  const system = assemble(elements, numbering);
+  const model = stiffnessModel(analysis);
+  if (!model) return undefined;
+  const { elements, numbering, system } = model;
   const loads = analysis.cases.map((c) => {
     const mine = loadsByMember(c.loads);
     return elements.map((e) => elementLoad(e, mine(e.member.id)));
@@ -45,52 +44,6 @@ export function solveStiffness(analysis: Analysis): Map<string, StiffnessCase> |
       return [c.id, { ...resultOf(analysis, elements, loads[k] as ElementLoad[], numbering, x), open }];
     }),
   );
-}
-
-function elementsOf(analysis: Analysis): Element[] | undefined {
-  const place = new Map(analysis.joints.map((j, i) => [j.id, i]));
-  const elements = analysis.members.map((m) => {
-    const [a, b] = [place.get(m.start), place.get(m.end)];
-    const [p, q] = [analysis.joints[a ?? -1], analysis.joints[b ?? -1]];
-    if (a === undefined || b === undefined || !p || !q) throw new Error(`member ${m.id} has no joint`);
-    return elementOf(m, [a, b], p, q);
-  });
-  return elements.every((e) => e !== undefined) ? elements : undefined;
-}
-
-/** Unknowns of the six end displacements; absent where a joint has no turning. */
-function placesOf(e: Element, { joints }: Numbering): (number | undefined)[] {
-  return e.joints.flatMap((j) => [joints[j]?.x, joints[j]?.y, joints[j]?.turn]);
-}
-
-/** −F f + B d = e for the members, Bᵀ f − R = P for the joints, −d − R/k = −Δ at the supports. */
-function assemble(elements: readonly Element[], numbering: Numbering): SymmetricSystem {
-  const system = new SymmetricSystem(numbering.count);
-  elements.forEach((e, i) => {
-    const unknowns = numbering.modes[i] as number[];
-    const places = placesOf(e, numbering);
-    e.modes.forEach((mode, m) => {
-      const row = unknowns[m] as number;
-      deformationRow(e, mode).forEach((v, k) => {
-        const place = places[k];
-        if (place !== undefined) system.add(row, place, v);
-      });
-      const deformed = times(e.flexibility, mode);
-      for (let other = m; other < e.modes.length; other++) {
-        system.add(row, unknowns[other] as number, -dot(e.modes[other] as EndTriple, deformed));
-      }
-    });
-  });
-  numbering.reactions.forEach((list, j) => {
-    const { x, y, turn } = numbering.joints[j] as Numbering['joints'][number];
-    for (const { index, axis, spring } of list) {
-      [x, y, turn].forEach((place, k) => {
-        if (place !== undefined) system.add(index, place, -(axis[k] as number));
-      });
-      if (spring !== undefined) system.add(index, index, -1 / spring);
-    }
-  });
-  return system;
 }
 
 /** Undefined for a couple on a joint that nothing keeps from turning. */
