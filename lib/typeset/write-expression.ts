@@ -38,10 +38,8 @@ function write(e: Expression, mode: Mode): Piece {
     }
     case 'root':
       return { tex: `\\sqrt{${write(e.of, mode).tex}}`, binds: 2 };
-    case 'negative': {
-      const of = write(e.of, mode);
-      return { tex: `-${of.binds === 0 || of.tex.startsWith('-') ? bracket(of.tex) : of.tex}`, binds: 1 };
-    }
+    case 'negative':
+      return { tex: `-${negated(e.of, mode)}`, binds: 1 };
   }
 }
 
@@ -55,10 +53,17 @@ function joinTerms(terms: readonly string[]): string {
   return terms.map((t, i) => (i === 0 ? t : t.startsWith('-') ? `-${t.slice(1)}` : `+${t}`)).join('');
 }
 
-function joinFactors(factors: readonly Expression[], mode: Mode): string {
+/** What stands behind a minus sign: a negative first factor goes in brackets by itself. */
+function negated(e: Expression, mode: Mode): string {
+  if (e.kind === 'product') return joinFactors(e.factors, mode, true);
+  const { tex, binds } = write(e, mode);
+  return binds === 0 || tex.startsWith('-') ? bracket(tex) : tex;
+}
+
+function joinFactors(factors: readonly Expression[], mode: Mode, first = false): string {
   const pieces = factors.map((f, i) => {
     const { tex, binds } = write(f, mode);
-    return binds === 0 || (i > 0 && tex.startsWith('-')) ? bracket(tex) : tex;
+    return binds === 0 || ((first || i > 0) && tex.startsWith('-')) ? bracket(tex) : tex;
   });
   return pieces.join(mode.figures ? '\\times ' : '\\,');
 }

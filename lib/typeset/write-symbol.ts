@@ -29,6 +29,8 @@ export function symbolTex(s: SymbolName): string {
 
 /** The name of a load case or combination, upright. */
 export function caseTex(id: string): string {
+  // A bare figure above a symbol would read as a power.
+  if (/^\d+$/.test(id)) return `\\mathrm{(${id})}`;
   const name = nameInTex(id);
   return name.startsWith('\\mathrm') ? name : `\\mathrm{${name}}`;
 }

@@ -7,6 +7,7 @@ import { countWords, listWords, plain, turning, unitNames } from './words';
 /** Step 1: assumptions, signs, units, figures, sources. */
 export function composeBasis(step: BasisStep, out: StepWriter, scene: Scene): void {
   out.heading('Basis');
+  out.paragraph(opening(step));
   out.paragraph(`**Assumptions.** ${assumptions(step)}`);
   if (scene.basis && scene.basis.trim() !== '') out.paragraph(plain(scene.basis.trim()));
   out.paragraph(`**Signs.** ${signs(step)}`);
@@ -21,6 +22,19 @@ export function composeBasis(step: BasisStep, out: StepWriter, scene: Scene): vo
       `**Sources** stand in this margin. Those of the loads, limits and combinations: ${sources.join('; ')}.`,
     );
   }
+}
+
+function opening(s: BasisStep): string {
+  const what = ['Forces', 'reactions'];
+  if (s.displacements > 0)
+    what.push(`${countWords(s.displacements)} displacement${s.displacements > 1 ? 's' : ''}`);
+  const method = s.degree > 0 ? 'by consistent deformations' : 'by equilibrium';
+  const cases = s.cases.slice(0, 8).map((c) => `${plain(c.title)} (${plain(c.id)})`);
+  const more = s.cases.length > 8 ? ` and ${s.cases.length - 8} more` : '';
+  const n = s.combinations.length;
+  const sums = n > 0 ? `, and ${countWords(n)} combination${n > 1 ? 's' : ''} of them` : '';
+  const under = s.cases.length > 0 ? `, under ${listWords(cases)}${more}${sums}` : '';
+  return `${listWords(what)} ${method}${under}. Step 16 gives the demands.`;
 }
 
 function assumptions(s: BasisStep): string {

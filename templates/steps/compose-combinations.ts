@@ -31,7 +31,13 @@ export function composeCombinations(step: CombinationsStep, out: StepWriter, sce
     'Every end force and reaction is linear in the cases, so each combination is one line from the columns of the cases. Greatest values within a span do not superpose, since their place moves; they are taken from the summed diagrams.',
   );
   rows('Reactions in the combinations.', step.reactions, step, out, scene);
-  rows('End forces in the combinations.', step.ends, step, out, scene);
+  rows(
+    'End forces in the combinations. What is the same at both ends of a member stands once.',
+    step.ends,
+    step,
+    out,
+    scene,
+  );
   spans(step, out, scene);
   if (scene.figures) figures(step, out, scene);
 }

@@ -1,4 +1,4 @@
-import { heightSymbol, type NamedPart, type PartsStep } from '@/lib/engine/derivation/parts-step';
+import type { NamedPart, PartDecimals, PartsStep } from '@/lib/engine/derivation/parts-step';
 import type { MomentPart, PartShape } from '@/lib/engine/force-method/work';
 import { drawMomentParts } from '@/lib/figures/draw-moment-parts';
 import { fractionTex } from '@/lib/typeset/number';
@@ -6,7 +6,7 @@ import { unitHead } from '@/lib/typeset/write-unit';
 import { narrow, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { memberWords, plain } from './words';
-import { cell, inline, relationRow } from './write-lines';
+import { cell, relationRow } from './write-lines';
 
 /** Step 6: the primary moments as named shapes with their areas and centroids. */
 export function composeParts(step: PartsStep, out: StepWriter, scene: Scene): void {
@@ -28,7 +28,7 @@ export function composeParts(step: PartsStep, out: StepWriter, scene: Scene): vo
       c.heights.map((r) => relationRow(r, units)),
     );
     if (scene.figures) figure(c.id, c.parts, out, scene);
-    table(c.id, c.parts, step.decimals, out, scene);
+    table(c.id, c.parts, c.decimals, out, scene);
   }
 }
 
@@ -66,7 +66,7 @@ function figure(id: string, parts: readonly NamedPart[], out: StepWriter, scene:
 function table(
   id: string,
   parts: readonly NamedPart[],
-  decimals: PartsStep['decimals'],
+  decimals: PartDecimals,
   out: StepWriter,
   scene: Scene,
 ): void {
@@ -103,7 +103,7 @@ function table(
         ],
       };
     }),
-    note: `The centroid is measured along the member from its first joint. ${parts.length > 0 ? `${inline(heightSymbol('i'))} of a part is its $\\hat{M}$.` : ''}`,
+    note: 'The centroid is measured along the member from its first joint.',
   });
 }
 

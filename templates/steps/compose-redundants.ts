@@ -105,7 +105,12 @@ function refusals(step: RedundantsStep, out: StepWriter, scene: Scene): void {
   if (!scene.figures) return;
   const shown = step.refused
     .slice(0, 2)
-    .flatMap((r) => (r.mechanism && r.sets[0] ? [{ set: r.sets[0], mechanism: r.mechanism }] : []));
+    .flatMap((r) =>
+      r.mechanism && r.mechanism.pieces.length > 0 && r.sets[0]
+        ? [{ set: r.sets[0], mechanism: r.mechanism }]
+        : [],
+    )
+    .slice(0, 2);
   const draw = (width: number) =>
     shown.map((s) => drawMechanism(analysis, s.set, s.mechanism, { width: width / shown.length }));
   if (shown.length > 0) {

@@ -24,11 +24,11 @@ export function composeSolution(step: SolutionStep, out: StepWriter, scene: Scen
     );
   else if (step.elimination) {
     out.equations(
-      '**Elimination.** Row $i$ less $\\mu_{ij}$ times row $j$ takes $X_j$ out of row $i$. Multipliers:',
+      '**Elimination.** Row $i$ less $\\mu_{ij}$ times row $j$ takes $X_j$ out of row $i$. Multipliers, with $f_{ji}=f_{ij}$:',
       step.elimination.multipliers.map((r) => relationRow(r, units)),
     );
     out.equations(
-      'Entries that change; those that are not named stay as they are:',
+      'The matrix stays symmetric, so only entries on and right of the diagonal are written. Those that change:',
       step.elimination.entries.map((r) => relationRow(r, units)),
     );
     const ids = step.values.map((v) => v.id);

@@ -28,8 +28,8 @@ function members(step: SummaryStep, out: StepWriter, scene: Scene): void {
   const moment = unitHead({ force: 1, length: 1, temperature: 0 }, units);
   const right = (head: string, unit: string | undefined): TableColumn => ({ head, unit, align: 'right' });
   const by: TableColumn = { head: 'by', align: 'left' };
-  const positive = names.beam ? 'greatest $M$, tension below' : 'greatest $M$, tension right of the walk';
-  const negative = names.beam ? 'greatest $-M$, tension above' : 'greatest $-M$, tension left of the walk';
+  const positive = names.beam ? '$|M|$, tension below' : '$|M|$, tension right of the walk';
+  const negative = names.beam ? '$|M|$, tension above' : '$|M|$, tension left of the walk';
   const pair = (d: Demand | undefined, decimals: number, sign = 1) => [
     d ? cell(sign * d.value, decimals, units) : '–',
     d ? plain(d.by) : '',
@@ -91,7 +91,7 @@ function supports(step: SummaryStep, out: StepWriter, scene: Scene): void {
     caption: 'Forces of the structure on its supports, cases unfactored, combinations factored.',
     columns,
     rows: step.supports.map((s) => {
-      const q = s.reaction;
+      const q = s;
       const values = Object.values(s.combinations);
       const tail = side
         ? combinations.map((id) => cell(s.combinations[id], q.decimals, units))

@@ -18,6 +18,8 @@ export function relationRow(r: Relation, units: UnitSet, note?: string): Equatio
     quantityTex(r.result, units),
     ...(r.again ? [quantityTex(r.again, units)] : []),
   ];
+  if (r.formula.kind === 'number' && r.formula.n === 0)
+    return { lhs: symbolTex(r.symbol), chain: ['0'], note };
   const distinct = chain.filter((tex, i) => tex !== chain[i - 1]);
   return { lhs: symbolTex(r.symbol), chain: distinct, boxed: r.boxed, note };
 }
@@ -72,7 +74,16 @@ export function staticsWords(step: StaticsStep, placed: ReadonlyMap<string, Plac
   const [a, b] = step.passing;
   const why =
     a && b ? `, where ${inline(a)} and ${inline(b)} meet` : a ? `, through which ${inline(a)} passes` : '';
-  return `${said(`moments about ${plain(step.sum.joint ?? 'O')}`)}${step.check ? '' : why}${armed}${unused}:`;
+  const joint = plain(step.sum.joint ?? 'O');
+  const about = step.passing.length === 0 && atHinge(step, placed) ? `the hinge at ${joint}` : joint;
+  return `${said(`moments about ${about}`)}${step.check ? '' : why}${armed}${unused}:`;
+}
+
+/** The point of a moment sum is where the piece ends and others go on. */
+function atHinge({ sum, piece }: StaticsStep, placed: ReadonlyMap<string, Placed>): boolean {
+  if (sum.kind !== 'moment' || !piece) return false;
+  const meets = (p: Placed) => p.start.id === sum.joint || p.end.id === sum.joint;
+  return [...placed.values()].some((p) => meets(p) && !piece.includes(p.member.id));
 }
 
 function pieceWords(piece: readonly string[], placed: ReadonlyMap<string, Placed>): string {

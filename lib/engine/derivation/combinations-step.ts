@@ -55,7 +55,10 @@ export function deriveCombinations(ctx: Context): CombinationsStep {
   const reactions = combinations.length === 0 ? [] : reactionRows(ctx);
   const ends = combinations.length === 0 || analysis.members.length > most.members ? [] : endRows(ctx);
   const spans = spansOf(ctx);
-  const [first] = combinations;
+  const first = combinations.reduce<Combination | undefined>(
+    (a, b) => (a && Object.keys(a.factors).length >= Object.keys(b.factors).length ? a : b),
+    undefined,
+  );
   const lines =
     first &&
     [
@@ -126,6 +129,8 @@ function endRows(ctx: Context): CombinedRow[] {
       if (seen.has(key)) return [];
       seen.add(key);
       const cases = pick(byCase, k, which);
+      // The same at both ends of a member: the first end stands for both.
+      if (e.end === 'end' && sameAs(cases, pick(byCase, k - 1, which))) return [];
       if (Object.values(cases).every((v) => v === 0)) return [];
       const moment = which === 'M';
       const figures = {
@@ -136,6 +141,9 @@ function endRows(ctx: Context): CombinedRow[] {
     }),
   );
 }
+
+const sameAs = (a: Record<string, number>, b: Record<string, number>): boolean =>
+  Object.keys(a).every((id) => Math.abs((a[id] ?? 0) - (b[id] ?? 0)) <= 1e-12 * Math.abs(a[id] ?? 0));
 
 function rowOf(
   ctx: Context,

@@ -49,9 +49,9 @@ export function deriveDeflections(ctx: Context): DeflectionsStep {
       };
     });
     const scale = turn ? undefined : smallScale(ctx);
-    const shown = (v: number): Value => ({
+    const shown = (v: number, id?: string): Value => ({
       kind: 'value',
-      symbol,
+      symbol: id === undefined ? undefined : { ...symbol, super: id },
       value: v,
       dimension: turn ? dimensions.pure : dimensions.length,
       decimals: turn ? 6 : ctx.figures.deflection,
@@ -63,7 +63,7 @@ export function deriveDeflections(ctx: Context): DeflectionsStep {
         : [
             {
               id,
-              value: shown(v),
+              value: shown(v, id),
               ratio:
                 ratio === undefined
                   ? undefined
@@ -105,6 +105,14 @@ function resultOf(
   return { ...line, again, boxed: true };
 }
 
+/** EI0 v keeps one figure more than the printed v needs; without a value of EI0, six significant figures. */
+function totalDecimals(ctx: Context, total: number, turn: boolean): number {
+  const EI0 = ctx.solution.reference.value;
+  if (EI0 === undefined || turn) return decimalsFor([total], 6, 0, 4);
+  const unit = (EI0 * 10 ** -ctx.figures.deflection) / smallScale(ctx);
+  return Math.max(0, Math.min(6, 1 - Math.floor(Math.log10(unit))));
+}
+
 function tableOf(
   ctx: Context,
   unit: Readonly<Record<string, Pick<MemberDiagrams, 'M'>>>,
@@ -134,6 +142,6 @@ function tableOf(
       },
     ],
     { dimension: { force: 1, length: turn ? 2 : 3, temperature: 0 }, area: height, ordinate },
-    decimalsFor([found.total], 6, 0, 4),
+    totalDecimals(ctx, found.total, turn),
   );
 }

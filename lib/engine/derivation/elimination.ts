@@ -61,9 +61,10 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
     const pivot = entries[j]?.[j];
     if (!pivot) continue;
     for (let i = j + 1; i < n; i++) {
-      const below = entries[i]?.[j];
-      if (!below || below.value.value === 0) continue;
-      const multiplier = multiplierOf(below.value, pivot.value, i, j);
+      // The matrix stays symmetric: the entry below the pivot is the one to its right.
+      const beside = entries[j]?.[i];
+      if (!beside || beside.value.value === 0) continue;
+      const multiplier = multiplierOf(beside.value, pivot.value, i, j);
       multipliers.push(multiplier);
       changed.push(...reduceRow(ctx, entries, i, j, multiplier.result));
       const [mine, theirs] = [right[i], right[j]];
@@ -99,11 +100,11 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
 
 const plain = (i: number): SymbolName => ({ letter: 'X', sub: [`${i + 1}`] });
 
-function multiplierOf(below: Value, pivot: Value, i: number, j: number): Relation {
+function multiplierOf(beside: Value, pivot: Value, i: number, j: number): Relation {
   const symbol = { letter: 'μ', sub: i > 8 || j > 8 ? [`${i + 1}`, ',', `${j + 1}`] : [`${i + 1}${j + 1}`] };
-  const value = below.value / pivot.value;
-  const dimension = per(below.dimension, pivot.dimension);
-  return relate(symbol, quotient(below, pivot), {
+  const value = beside.value / pivot.value;
+  const dimension = per(beside.dimension, pivot.dimension);
+  return relate(symbol, quotient(beside, pivot), {
     dimension,
     decimals: decimalsFor([value], multiplierFigures, 0, 10),
   });
@@ -119,8 +120,7 @@ function reduceRow(
   const changed: Relation[] = [];
   const [mine, theirs] = [entries[i], entries[j]];
   if (!mine || !theirs) return changed;
-  mine[j] = undefined;
-  for (let k = j + 1; k < mine.length; k++) {
+  for (let k = i; k < mine.length; k++) {
     const above = theirs[k];
     if (!above || above.value.value === 0) continue;
     const before = mine[k]?.value ?? {

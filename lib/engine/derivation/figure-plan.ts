@@ -59,6 +59,8 @@ export function planFigures(solution: Solution): FigurePlan {
     ...u.reactions.map((r) => r.value),
     ...Object.values(u.members).flatMap((m) => [...endsOf(m.N), ...endsOf(m.V)]),
   ]);
+  const gaps = solution.work.gaps.map((g) => g.total);
+  const flexibilities = solution.work.flexibility.map((f) => f.total);
   const parts = Object.values(solution.work.parts).flat();
   return {
     length: exactDecimals(lengthsOf(analysis), 2, 4),
@@ -75,22 +77,16 @@ export function planFigures(solution: Solution): FigurePlan {
       0,
       3,
     ),
-    gap: decimalsFor(
-      solution.work.gaps.map((g) => g.total),
-      7,
-      0,
-      4,
-    ),
-    flexibility: decimalsFor(
-      solution.work.flexibility.map((f) => f.total),
-      6,
-      0,
-      4,
-    ),
+    gap: noMoreThan(gaps, decimalsFor(gaps, 7, 0, 4)),
+    flexibility: noMoreThan(flexibilities, decimalsFor(flexibilities, 6, 0, 4)),
     deflection: 2,
     load: 2,
   };
 }
+
+/** Fewer decimals where fewer print every value as it is. */
+const noMoreThan = (values: readonly number[], most: number): number =>
+  exactDecimals(values, Math.min(2, most), most);
 
 /** Decimals of a factor of the redundants, so that Σ X times it keeps its place: what it may miss is X times its rounding. */
 function supporting(solution: Solution, decimals: number): number {

@@ -2,6 +2,7 @@ import type { MomentPart } from '../force-method/work';
 import { type Context, lengthValue, placedMember } from './context';
 import { dimensions } from './dimensions';
 import type { Value } from './expression';
+import { exactDecimals } from './figure-plan';
 import { heightFormula } from './part-height';
 import { fitColumns } from './precision';
 import { type Relation, relate } from './relation';
@@ -15,57 +16,51 @@ export interface NamedPart {
   length: Value;
 }
 
+/** Decimals of the columns of one table of parts. */
+export interface PartDecimals {
+  length: number;
+  height: number;
+  area: number;
+  centroid: number;
+}
+
 /** Step 6: the primary moments of every case as named shapes. */
 export interface PartsStep {
   kind: 'parts';
-  cases: { id: string; parts: NamedPart[]; heights: Relation[] }[];
-  /** Decimals of the columns of all tables of parts. */
-  decimals: { length: number; height: number; area: number; centroid: number };
+  cases: { id: string; parts: NamedPart[]; heights: Relation[]; decimals: PartDecimals }[];
 }
 
 export function deriveParts(ctx: Context): PartsStep {
   const cases = ctx.analysis.cases.map(({ id }) => {
     const parts = namedParts(ctx, id);
-    return { id, parts };
+    const decimals = decimalsOf(ctx, parts);
+    return { id, parts, heights: parts.flatMap((p) => heightOf(ctx, p, decimals.height)), decimals };
   });
-  const all = cases.flatMap((c) => c.parts);
-  const rows = all.map(({ part }) => ({
+  return { kind: 'parts', cases };
+}
+
+function decimalsOf(ctx: Context, parts: readonly NamedPart[]): PartDecimals {
+  const rows = parts.map(({ part }) => ({
     length: part.to - part.from,
     height: part.height,
     area: part.area,
-    centroid: part.centroid,
     factor: part.factor.n / part.factor.d,
   }));
   const { figures } = ctx;
   const start = {
-    length: Math.max(...all.map((p) => p.length.decimals), figures.length),
+    length: Math.max(figures.length, ...parts.map((p) => p.length.decimals)),
     height: figures.moment,
-    area: figures.area,
-    centroid: figures.length + 1,
+    area: exactDecimals(
+      rows.map((r) => r.area),
+      2,
+      figures.area,
+    ),
     factor: 12,
   };
-  const fitted = fitColumns<keyof typeof start>(rows, start, [
-    {
-      column: 'area',
-      from: ['factor', 'length', 'height'],
-      work: (r) => r.factor * r.length * r.height,
-    },
+  const { length, height, area } = fitColumns<keyof typeof start>(rows, start, [
+    { column: 'area', from: ['factor', 'length', 'height'], work: (r) => r.factor * r.length * r.height },
   ]);
-  const decimals = {
-    length: fitted.length,
-    height: fitted.height,
-    area: fitted.area,
-    centroid: fitted.centroid,
-  };
-  return {
-    kind: 'parts',
-    decimals,
-    cases: cases.map(({ id, parts }) => ({
-      id,
-      parts,
-      heights: parts.flatMap((p) => heightOf(ctx, p, decimals.height)),
-    })),
-  };
+  return { length, height, area, centroid: figures.length + 1 };
 }
 
 /** The parts of one case: D1, D2 … */

@@ -1,7 +1,7 @@
 import type { Joint } from '@/lib/model/structure';
 import type { StaticsLine, StaticsTerm } from '../statics/statics-line';
 import { type Context, lengthValue, loadValue, placedMember, pureValue, redundantSymbol } from './context';
-import { dimensionOf, dimensions } from './dimensions';
+import { dimensionOf, dimensions, per } from './dimensions';
 import { type Axis, jointDistance, placeDistance } from './distance';
 import { type Expression, evaluate, negative, number, product, quotient, sum } from './expression';
 import { resultantOf } from './load-place';
@@ -183,6 +183,18 @@ function placesOf(ctx: Context, term: StaticsTerm, acting: Acting): { place: Pla
       });
     }
   }
+}
+
+/** How the zero of a sum is printed. */
+export function sumFigures(ctx: Context, kind: 'moment' | 'force', acting: Acting) {
+  const moment = kind === 'moment';
+  const own = moment ? dimensions.moment : dimensions.force;
+  if (acting.kind !== 'unit') {
+    return { dimension: own, decimals: moment ? ctx.figures.moment : ctx.figures.force };
+  }
+  const q = ctx.solution.redundants[acting.index];
+  const dimension = per(own, q ? dimensionOf(q) : dimensions.force);
+  return { dimension, decimals: moment ? ctx.figures.unitMoment : ctx.figures.unitForce };
 }
 
 export function symbolOf(ctx: Context, of: StaticsTerm['of'], acting: Acting): SymbolName {

@@ -1,10 +1,9 @@
 import { quantityKey } from '@/lib/model/quantity';
 import type { StaticsLine, StaticsTerm } from '../statics/statics-line';
 import type { Context } from './context';
-import { dimensions } from './dimensions';
 import { type Expression, negative, number, quotient, sum, type Value } from './expression';
 import { type Relation, relate } from './relation';
-import { type Acting, figuresOf, type SignedTerm, signedTerm, symbolOf } from './statics-terms';
+import { type Acting, figuresOf, type SignedTerm, signedTerm, sumFigures, symbolOf } from './statics-terms';
 import type { SymbolName } from './symbol-name';
 
 /** One equilibrium equation as it is written: which sum, its terms in symbols, and the unknown it gives. */
@@ -26,8 +25,16 @@ export interface StaticsStep {
 
 /** The lines of one state of the primary structure; simultaneous systems and structures without an order give none. */
 export function writeSteps(ctx: Context, lines: readonly StaticsLine[], acting: Acting): StaticsStep[] {
-  return lines.flatMap((line) => (line.kind === 'simultaneous' ? [] : [writeStep(ctx, line, acting)]));
+  return lines.flatMap((line) => {
+    if (line.kind === 'simultaneous') return [];
+    const step = writeStep(ctx, line, acting);
+    const empty = line.kind === 'check' && step.equation.kind === 'number';
+    return empty ? [] : [step];
+  });
 }
+
+/** Rounding beside the largest force of an equation. */
+const negligible = 1e-12;
 
 function writeStep(
   ctx: Context,
@@ -35,7 +42,13 @@ function writeStep(
   acting: Acting,
 ): StaticsStep {
   const before = ctx.arms.count;
-  const terms = line.terms.map((t) => ({ term: t, ...signedTerm(ctx, line.sum, t, acting) }));
+  const sought = line.kind === 'equation' ? line.unknown : undefined;
+  const size = Math.max(...line.terms.map((t) => Math.abs(t.value)), 0);
+  // Forces found to be zero before drop out of the equations after them.
+  const kept = line.terms.filter(
+    (t) => (sought !== undefined && sameForce(t.of, sought)) || Math.abs(t.value) > negligible * size,
+  );
+  const terms = kept.map((t) => ({ term: t, ...signedTerm(ctx, line.sum, t, acting) }));
   const equation = sum(...terms.map((t) => (t.negative ? negative(t.expression) : t.expression)));
   const whole = line.piece.length === ctx.analysis.members.length;
   const step: StaticsStep = {
@@ -46,10 +59,7 @@ function writeStep(
     arms: ctx.arms.since(before),
   };
   if (line.kind === 'check') {
-    const moment = line.sum.kind === 'moment';
-    const figures = moment
-      ? { dimension: dimensions.moment, decimals: ctx.figures.moment }
-      : { dimension: dimensions.force, decimals: ctx.figures.force };
+    const figures = sumFigures(ctx, line.sum.kind, acting);
     return { ...step, check: relate({ letter: 'Σ' }, equation, figures, 0) };
   }
   return { ...step, relation: solveFor(ctx, line, terms, acting) };

@@ -27,7 +27,8 @@ export interface SummaryStep {
   supports: {
     joint: string;
     component: 'x' | 'y' | 'turn';
-    reaction: Value;
+    dimension: Value['dimension'];
+    decimals: number;
     /** Opposite to the reaction, except that vertical forces are counted downward: what the foundation bears. */
     cases: Record<string, number>;
     combinations: Record<string, number>;
@@ -60,12 +61,14 @@ export function deriveSummary(ctx: Context): SummaryStep {
     if (q.kind !== 'reaction') return [];
     // Down on the foundation is up on the structure: the reaction itself; other components turn their sign.
     const sign = q.component === 'y' ? 1 : -1;
+    const shown = reactionValue(ctx, r, (s) => s);
     const of = (list: readonly { value: number }[] | undefined) => sign * (list?.[k]?.value ?? Number.NaN);
     return [
       {
         joint: q.joint,
         component: q.component,
-        reaction: reactionValue(ctx, r, (s) => s),
+        dimension: shown.dimension,
+        decimals: shown.decimals,
         cases: Object.fromEntries(analysis.cases.map((c) => [c.id, of(solution.cases[c.id]?.reactions)])),
         combinations: Object.fromEntries(combined.map((c) => [c.id, of(c.reactions)])),
       },

@@ -81,7 +81,9 @@ export const threeSpans = form({
     { id: 'b', purpose: 'strength', factors: { G: 1.35, Q2: 1.5, Q3: 1.5 }, source: 'EN 1990, (6.10)' },
     { id: 'c', purpose: 'strength', factors: { G: 1.0, Q1: 1.5, Q3: 1.5 }, source: 'EN 1990, (6.10)' },
   ],
-  displacements: [{ member: 'B-C', at: 3.6, direction: 'y', limit: { value: 0.0288, source: 'Project, L/250' } }],
+  displacements: [
+    { member: 'B-C', at: 3.6, direction: 'y', limit: { value: 0.0288, source: 'Project, L/250' } },
+  ],
 });
 
 const portal = (bases: 'pinned' | 'fixed', units: 'US' | 'SI') =>
@@ -103,7 +105,13 @@ const portal = (bases: 'pinned' | 'fixed', units: 'US' | 'SI') =>
         nature: 'dead',
         loads: [
           uniform('2-3', units === 'US' ? -0.85 : -12.5),
-          { kind: 'point', member: '2-3', at: units === 'US' ? 11 : 3.3, direction: 'y', value: units === 'US' ? -6 : -27 },
+          {
+            kind: 'point',
+            member: '2-3',
+            at: units === 'US' ? 11 : 3.3,
+            direction: 'y',
+            value: units === 'US' ? -6 : -27,
+          },
         ],
       },
       {
@@ -122,7 +130,12 @@ const portal = (bases: 'pinned' | 'fixed', units: 'US' | 'SI') =>
       { id: '5', purpose: 'strength', factors: { D: 0.9, W: 1 }, source: 'ASCE/SEI 7-16, 2.3.1' },
     ],
     displacements: [
-      { member: '1-2', at: units === 'US' ? 14 : 4.2, direction: 'x', limit: { value: units === 'US' ? 0.14 : 0.042, source: 'Project limit, h/100' } },
+      {
+        member: '1-2',
+        at: units === 'US' ? 14 : 4.2,
+        direction: 'x',
+        limit: { value: units === 'US' ? 0.14 : 0.042, source: 'Project limit, h/100' },
+      },
     ],
   });
 
@@ -143,7 +156,12 @@ export const slopingRoof = form({
       nature: 'snow',
       loads: [{ kind: 'distributed', member: 'B-C', direction: 'y', per: 'projection', w1: -0.9, w2: -0.9 }],
     },
-    { id: 'W', title: 'Wind', nature: 'wind', loads: [uniform('A-B', 0.3, 'x'), uniform('B-C', 0.12, 'across')] },
+    {
+      id: 'W',
+      title: 'Wind',
+      nature: 'wind',
+      loads: [uniform('A-B', 0.3, 'x'), uniform('B-C', 0.12, 'across')],
+    },
   ],
   combinations: [
     { id: '3', purpose: 'strength', factors: { D: 1.2, S: 1.6, W: 0.5 }, source: 'ASCE/SEI 7-16, 2.3.1' },
