@@ -4,7 +4,7 @@ import { type Certificate, CertificateChainValidationEngine, type CertificateRev
 import { compareBytes } from './bytes';
 import { encoded } from './check-signer-info';
 import { oid, signatureOid } from './oid';
-import { extension, isAuthority, keyPurposes, maySeal, maySignData } from './read-certificate';
+import { extension, maySeal, mayStampTime } from './read-certificate';
 import { type SignatureCode, SignatureRefusal } from './signature-refusal';
 
 export type Purpose = 'sealing' | 'time-stamping';
@@ -30,17 +30,8 @@ function refuse(code: SignatureCode, detail: string): never {
 }
 
 function checkPurpose(certificate: Certificate, purpose: Purpose): void {
-  if (purpose === 'sealing') {
-    if (!maySeal(certificate)) refuse('certificate-purpose', 'not for documents');
-  } else {
-    // RFC 3161, 2.3: critical, and time stamping alone.
-    const purposes = keyPurposes(certificate);
-    const critical = extension(certificate, oid.extendedKeyUsage)?.critical;
-    const alone = purposes?.length === 1 && purposes[0] === oid.timeStamping;
-    if (!critical || !alone || !maySignData(certificate) || isAuthority(certificate)) {
-      refuse('certificate-purpose', 'not for time stamps');
-    }
-  }
+  const suits = purpose === 'sealing' ? maySeal : mayStampTime;
+  if (!suits(certificate)) refuse('certificate-purpose', `not for ${purpose}`);
   const strange = certificate.extensions?.find((one) => one.critical && !understood.has(one.extnID));
   if (strange) refuse('certificate-purpose', `critical extension ${strange.extnID}`);
 }

@@ -41,21 +41,10 @@ function hashOf(signerInfo: SignerInfo): string {
   return hashes.get(digest) as string;
 }
 
-/** Attributes that may be signed without changing what the signature means to this reader. */
-const known = new Set<string>([
-  oid.contentType,
-  oid.messageDigest,
-  oid.signingCertificate,
-  oid.signingCertificateV2,
-  '1.2.840.113549.1.9.5', // signing-time: a claim, read by nobody here
-  '1.2.840.113549.1.9.52', // algorithm protection (RFC 6211): repeats what is checked
-]);
-
 function attributesOf(signerInfo: SignerInfo): Map<string, asn1js.BaseBlock> {
   const attributes = new Map<string, asn1js.BaseBlock>();
   for (const { type, values } of signerInfo.signedAttrs?.attributes ?? []) {
     if (attributes.has(type) || values.length !== 1) refuse('bad-attributes', `${type} more than once`);
-    if (!known.has(type)) refuse('bad-attributes', `${type} is not known here`);
     attributes.set(type, values[0]);
   }
   return attributes;

@@ -47,6 +47,14 @@ export function maySeal(certificate: Certificate): boolean {
   return maySignData(certificate) && !isAuthority(certificate) && certificateUses(certificate).length > 0;
 }
 
+/** Whether the certificate may stamp times: for that purpose alone, marked critical (RFC 3161, 2.3). */
+export function mayStampTime(certificate: Certificate): boolean {
+  const purposes = keyPurposes(certificate);
+  const alone = purposes?.length === 1 && purposes[0] === oid.timeStamping;
+  const critical = extension(certificate, oid.extendedKeyUsage)?.critical === true;
+  return alone && critical && maySignData(certificate) && !isAuthority(certificate);
+}
+
 export function readCertificate(certificate: Certificate): CertificateFacts {
   return {
     holder: {

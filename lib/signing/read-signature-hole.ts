@@ -42,7 +42,7 @@ export function readSignatureHole(document: PdfDocument, field: SignatureField):
   const ref = field.dict.get('V');
   const object = ref instanceof PdfRef ? document.object(ref) : undefined;
   if (!object || !(object.value instanceof PdfDict)) refuse('no signature dictionary');
-  const { value: signature, span } = object;
+  const signature = object.value;
   const range = signature.get('ByteRange');
   const place = signature.places.get('Contents');
   if (!Array.isArray(range) || range.length !== 4 || !place) refuse('form');
@@ -50,7 +50,6 @@ export function readSignatureHole(document: PdfDocument, field: SignatureField):
   if (zero !== 0 || before !== place.from || after !== place.to || typeof rest !== 'number') {
     refuse('does not leave out exactly the signature');
   }
-  if (place.from < span.from || place.to > span.to) refuse('contents elsewhere');
   const { bytes, revisions } = document.file;
   const { mark, to } = revisions[document.upTo] as { mark: number; to: number };
   const end = place.to + rest;

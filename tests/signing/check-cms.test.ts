@@ -3,8 +3,11 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Bytes } from '@/lib/signing/bytes';
 import { checkCms } from '@/lib/signing/check-cms';
 import type { Trust } from '@/lib/signing/check-signature';
+import { type Issuer, makeCertificate } from '@/lib/signing/make-certificate';
+import { type MadeKey, makeKey } from '@/lib/signing/make-key';
 import { makeSigner } from '@/lib/signing/make-signer';
 import { openKeyFile } from '@/lib/signing/open-key-file';
+import { mayStampTime } from '@/lib/signing/read-certificate';
 import { signedPart } from '@/lib/signing/signed-part';
 import type { Signer } from '@/lib/signing/signer';
 import { stampSignature } from '@/lib/signing/time-stamp';
@@ -56,7 +59,7 @@ describe('refuses with its own code', () => {
   });
   it('a certificate that is not for documents', async () => {
     const { file } = await office.authority.issueTimeStampKeyFile('x');
-    const stamper = await openKeyFile(file, 'x', { suits: () => true });
+    const stamper = await openKeyFile(file, 'x', { suits: mayStampTime });
     const prepared = await prepare(await makeBase(), ines);
     const made = await sign(prepared, stamper);
     expect(await code(made, { of: signedPart(prepared.bytes, prepared.hole) })).toBe('certificate-purpose');
@@ -108,6 +111,47 @@ describe('refuses with its own code', () => {
     const prepared = await prepare(await makeBase(), ines);
     const made = await sign(prepared, crossed);
     expect(await code(made, { of: signedPart(prepared.bytes, prepared.hole) })).toBe('signature-wrong');
+  });
+  it('an authority under one that may have none under it', async () => {
+    const valid = { validFrom: later(-1), validTo: later(10) };
+    const [root, middle, own] = [await makeKey('P-256'), await makeKey('P-256'), await makeKey('P-256')];
+    const authority = (name: string, { publicKey }: MadeKey, issuer: Issuer) =>
+      makeCertificate({ role: 'authority', name, publicKey, ...valid }, issuer);
+    const top = await authority('Top register', root, { key: root });
+    const under = await authority('Under register', middle, { certificate: top, key: root });
+    const person = { role: 'documents', ...ines, publicKey: own.publicKey, ...valid } as const;
+    const leaf = await makeCertificate(person, { certificate: under, key: middle });
+    const prepared = await prepare(await makeBase(), ines);
+    const made = await sign(prepared, makeSigner(own, leaf, [under]));
+    const of = signedPart(prepared.bytes, prepared.hole);
+    expect(await code(made, { of, trust: { ...office.trust, anchors: [top] } })).toBe('certificate-unknown');
+    expect(await code(made, { of, trust: { ...office.trust, anchors: [under] } })).toBe(ines.name);
+  });
+  it('a key that is too short', async () => {
+    const importAs = { name: 'RSASSA-PKCS1-v1_5', hash: 'SHA-256' };
+    const shape = { ...importAs, modulusLength: 1024, publicExponent: new Uint8Array([1, 0, 1]) };
+    const pair = await crypto.subtle.generateKey(shape, true, ['sign', 'verify']);
+    const root = await makeKey('P-256');
+    const valid = { validFrom: later(-1), validTo: later(10) };
+    const top = await makeCertificate(
+      { role: 'authority', name: 'Top register', publicKey: root.publicKey, ...valid },
+      { key: root },
+    );
+    const leaf = await makeCertificate(
+      { role: 'documents', ...ines, publicKey: pair.publicKey, ...valid },
+      { certificate: top, key: root },
+    );
+    const short = {
+      key: pair.privateKey,
+      family: 'RSA',
+      hash: 'SHA-256',
+      importAs,
+      signAs: importAs,
+    } as const;
+    const prepared = await prepare(await makeBase(), ines);
+    const made = await sign(prepared, makeSigner(short, leaf));
+    const trust = { ...office.trust, anchors: [top] };
+    expect(await code(made, { of: signedPart(prepared.bytes, prepared.hole), trust })).toBe('weak-algorithm');
   });
   it('a weak hash', async () => {
     const weak = editCms(cms, ({ signerInfos, digestAlgorithms }) => {

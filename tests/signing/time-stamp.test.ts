@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
+import { SignedAndUnsignedAttributes } from 'pkijs';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { answerTimeStamp } from '@/lib/signing/answer-time-stamp';
 import type { Bytes } from '@/lib/signing/bytes';
@@ -10,6 +11,7 @@ import { startLocalTimeStampServer } from '@/lib/signing/local-time-stamp-server
 import type { Signer } from '@/lib/signing/signer';
 import { fetchTimeStamp } from '@/lib/signing/time-stamp';
 import { keyOf, type Office, openOffice, tomas } from './office';
+import { editCms } from './tamper';
 
 let office: Office;
 let stamper: Signer;
@@ -56,6 +58,16 @@ describe('a time stamp OpenSSL made', () => {
   it.each(['token-sha1.der', 'token-sha256.der'])('is read and trusted: %s', async (name) => {
     const stamp = await checkTimeStamp(new Uint8Array(sample(name)), data, anchors);
     expect(stamp).toMatchObject({ authority: 'Sample stamps', time: new Date('2026-12-01T09:19:38Z') });
+  });
+  it('is refused with an attribute nobody signed', async () => {
+    const token = editCms(new Uint8Array(sample('token-sha256.der')), ({ signerInfos: [own] }) => {
+      if (own?.signedAttrs)
+        own.unsignedAttrs = new SignedAndUnsignedAttributes({
+          type: 1,
+          attributes: own.signedAttrs.attributes,
+        });
+    });
+    await expect(checkTimeStamp(token, data, anchors)).rejects.toMatchObject({ code: 'time-stamp-wrong' });
   });
   it('is refused over other words', async () => {
     const token = new Uint8Array(sample('token-sha256.der'));

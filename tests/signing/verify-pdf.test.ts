@@ -111,6 +111,41 @@ describe('tells an update after signing from a signature:', () => {
     expect(await found(await withStore(899))).toEqual([]);
     expect(await found(await withStore(890))).toEqual([changed, 'object']);
   });
+  it('a font exchanged for another', async () => {
+    const text = Buffer.from(once).toString('latin1');
+    const font = text.match(/\n(\d+) 0 obj\s*<<[^>]*\/BaseFont \/Helvetica/)?.[1];
+    const other = '<< /Type /Font /Subtype /Type1 /BaseFont /Courier >>';
+    expect(await found(appendObjects(once, { [Number(font)]: other }))).toEqual([changed, 'object']);
+  });
+  it('a later signer who moves his field, or draws with more than lines', async () => {
+    const key = await keyOf(office, tomas);
+    const { trust, stamps } = office;
+    // Words of the same length, put into the update before it is signed.
+    const signedWith = async (from: string, to: string) => {
+      const prepared = await prepare(once, tomas, 'second-engineer');
+      const at = Buffer.from(prepared.bytes).indexOf(from, once.length, 'latin1');
+      expect(at).toBeGreaterThan(0);
+      prepared.bytes.set(Buffer.from(to, 'latin1'), at);
+      const service = { url: stamps.url, anchors: trust.stampAnchors };
+      return insertSignature(prepared, (await stampSignature(await sign(prepared, key), service)).cms);
+    };
+    expect(await found(await signedWith('/Rect [ 400', '/Rect [ 401'))).toEqual([changed, 'field']);
+    expect(await found(await signedWith('/Matrix [', '/MatriX ['))).toEqual(
+      expect.arrayContaining([changed, 'seal-appearance']),
+    );
+    expect(await found(await signedWith('/Resources <<\n>>', '/Resources 9 0 R'))).toEqual(
+      expect.arrayContaining([changed, 'seal-appearance']),
+    );
+  });
+  it('a field filled with an earlier signature', async () => {
+    const text = Buffer.from(once).toString('latin1');
+    const signature = text.match(/\/V (\d+) 0 R/)?.[1];
+    const [, open, dict] =
+      [...text.matchAll(/\n(\d+) 0 obj\s*(<<(?:(?!endobj).)*\/FT \/Sig(?:(?!endobj).)*)>>\s*endobj/gs)][1] ??
+      [];
+    const filled = appendObjects(once, { [Number(open)]: `${dict} /V ${signature} 0 R >>` });
+    expect(await found(filled)).toEqual(expect.arrayContaining([changed, 'field']));
+  });
   it('a second signer who draws over the first one’s page in his own update', async () => {
     const drawn = await append(once, drawOver);
     const prepared = await prepare(drawn, tomas, 'second-engineer');
@@ -200,6 +235,25 @@ describe('the signature itself:', () => {
       });
     });
     expect(await found(inside)).toEqual(['not-a-signature']);
+  });
+  it('a range that leaves out more than the signature', async () => {
+    const prepared = await prepare(base, ines);
+    const { from, to } = prepared.hole;
+    const wider = { from: from - 1, to };
+    const text = Buffer.from(prepared.bytes);
+    const at = text.indexOf(`[ 0 ${from} ${to}`, base.length, 'latin1');
+    prepared.bytes.set(Buffer.from(`[ 0 ${from - 1}`, 'latin1'), at);
+    const cms = await sign({ ...prepared, hole: wider }, key);
+    expect(await found(insertSignature(prepared, cms), { expected: { stamped: false } })).toEqual([
+      'byte-range',
+    ]);
+  });
+  it('an attribute that is signed twice', async () => {
+    const doubled = edited(({ signerInfos: [own] }) => {
+      const attributes = own?.signedAttrs?.attributes;
+      if (attributes?.[0]) attributes.splice(1, 0, attributes[0]);
+    });
+    expect(await found(doubled)).toEqual(['bad-attributes']);
   });
   it('a second signer beside the first', async () => {
     const both = edited((data) => data.signerInfos.push(data.signerInfos[0] as SignedData['signerInfos'][0]));
