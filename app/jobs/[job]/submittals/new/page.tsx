@@ -1,0 +1,42 @@
+import type { Metadata } from 'next';
+import { Page } from '@/app/components/page-layout';
+import { orRefuse, requireActor } from '@/app/session';
+import { openJob } from '@/lib/services/open-job';
+import { gather } from './actions';
+import { GatherForm } from './gather-form';
+
+interface Props {
+  params: Promise<{ job: string }>;
+}
+
+export const metadata: Metadata = { title: 'New submittal' };
+
+/** Which checked sheets go out, and for what. */
+export default async function NewSubmittalPage({ params }: Props) {
+  const actor = await requireActor();
+  const { job: id } = await params;
+  const { job, sheets, submittals } = await orRefuse(openJob(actor, id));
+  const number = submittals.length + 1;
+  return (
+    <Page
+      actor={actor}
+      path={[{ label: `${job.number} ${job.title}`, href: `/jobs/${id}` }, { label: 'New submittal' }]}
+      margin={<div className="bigno">{number}</div>}
+      foot={[actor.officeName, job.number]}
+    >
+      <div className="in">
+        <h1>New submittal</h1>
+        <GatherForm
+          action={gather.bind(null, id)}
+          sheets={sheets.map((s) => ({
+            number: s.number,
+            title: s.title,
+            revisionId: s.checkState === 'agreed' ? s.revisionId : null,
+            why: s.revisionId === null ? 'not frozen yet' : s.checkState === 'agreed' ? '' : 'not checked',
+            revision: s.revision,
+          }))}
+        />
+      </div>
+    </Page>
+  );
+}
