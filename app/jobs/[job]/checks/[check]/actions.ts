@@ -1,0 +1,59 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { afterRefusal, type FormState } from '@/app/components/form-state';
+import { orRefuse, requireActor } from '@/app/session';
+import { answerMark } from '@/lib/services/answer-mark';
+import { concludeCheck } from '@/lib/services/conclude-check';
+import { markLine } from '@/lib/services/mark-line';
+import type { Result } from '@/lib/services/result';
+
+function after(result: Result<null>, form: FormData, path: string, words: string): FormState {
+  if (!result.ok) return afterRefusal(result, form);
+  revalidatePath(path);
+  return { errors: [], typed: {}, done: words };
+}
+
+export async function leaveMark(
+  path: string,
+  checkId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const line = String(form.get('line') ?? '');
+  const mark = { checkId, line, kind: form.get('kind'), text: form.get('text') ?? '' };
+  return after(await orRefuse(markLine(actor, mark)), form, path, `Line ${line} is marked.`);
+}
+
+export async function conclude(
+  path: string,
+  checkId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const outcome = form.get('outcome');
+  const words = outcome === 'agreed' ? 'The sheet is agreed.' : 'The sheet goes back to its originator.';
+  return after(
+    await orRefuse(concludeCheck(actor, { checkId, outcome, note: form.get('note') ?? '' })),
+    form,
+    path,
+    words,
+  );
+}
+
+export async function answer(
+  path: string,
+  markId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  return after(
+    await orRefuse(answerMark(actor, { markId, answer: form.get('answer') ?? '' })),
+    form,
+    path,
+    'The answer is recorded.',
+  );
+}

@@ -1,0 +1,64 @@
+import type { Metadata } from 'next';
+import { Page } from '@/app/components/page-layout';
+import { orRefuse, requireActor } from '@/app/session';
+import { openCheck } from '@/lib/services/open-check';
+import { NotFound } from '@/lib/services/service-error';
+import { answer, conclude, leaveMark } from './actions';
+import { CheckDesk } from './check-desk';
+import '../../revisions/[revision]/revision.css';
+
+interface Props {
+  params: Promise<{ job: string; check: string }>;
+}
+
+export const metadata: Metadata = { title: 'Check' };
+
+/** The checker's screen: marks in the page's own margin, the line in hand beside it. */
+export default async function CheckPage({ params }: Props) {
+  const actor = await requireActor();
+  const { check: id } = await params;
+  const { job, revision, blocks, check, marks } = await orRefuse(openCheck(actor, id));
+  if (!check) throw new NotFound(`check ${id}`);
+  const path = `/jobs/${job.id}/checks/${id}`;
+  return (
+    <Page
+      actor={actor}
+      path={[
+        { label: `${job.number} ${job.title}`, href: `/jobs/${job.id}` },
+        { label: `${revision.sheet} ${revision.title}`, href: `/jobs/${job.id}/revisions/${revision.id}` },
+        { label: 'Check' },
+      ]}
+      margin={
+        <>
+          <div className="bigno">{revision.sheet}</div>
+          <div className="under">revision {revision.number}</div>
+        </>
+      }
+      foot={[
+        actor.officeName,
+        job.number,
+        revision.sheet,
+        `rev ${revision.number}`,
+        `checker ${check.checker}`,
+        `category ${check.category}`,
+      ]}
+    >
+      <CheckDesk
+        title={`${revision.sheet} ${revision.title}, revision ${revision.number}`}
+        blocks={blocks}
+        check={{ state: check.state, mine: check.mine, checker: check.checker ?? '', note: check.note }}
+        marks={marks.map(({ id: markId, line, kind, text, answer: given }) => ({
+          id: markId,
+          line,
+          kind,
+          text,
+          answer: given,
+        }))}
+        onMark={leaveMark.bind(null, path, id)}
+        onConclude={conclude.bind(null, path, id)}
+        onAnswer={answer.bind(null, path)}
+        mayAnswer={revision.originatorId === actor.personId}
+      />
+    </Page>
+  );
+}

@@ -1,0 +1,25 @@
+'use server';
+
+import { redirect } from 'next/navigation';
+import { afterRefusal, type FormState } from '@/app/components/form-state';
+import { orRefuse, requireActor } from '@/app/session';
+import { sendToCheck } from '@/lib/services/send-to-check';
+
+/** Gives the revision to a checker. */
+export async function giveToChecker(
+  jobId: string,
+  revisionId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const given = await orRefuse(
+    sendToCheck(actor, {
+      revisionId,
+      checkerId: form.get('checkerId') ?? '',
+      category: form.get('category'),
+    }),
+  );
+  if (!given.ok) return afterRefusal(given, form);
+  redirect(`/jobs/${jobId}/checks/${given.value.checkId}`);
+}
