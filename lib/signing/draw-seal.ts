@@ -42,9 +42,18 @@ function circle(x: number, y: number, r: number): string {
   ].join(' ');
 }
 
-/** The largest size up to `wanted` at which text keeps within `width`. */
-function fittingSize(font: fontkit.FontkitFont, text: string, wanted: number, width: number): number {
-  return Math.min(wanted, (wanted * width) / textWidth(font, text, wanted));
+/** Between the letters round the ring, as a part of their size. */
+const letterSpacing = 0.107;
+
+/** The largest size up to `wanted` at which text keeps within `width`; `spacing` is a part of the size. */
+function fittingSize(
+  font: fontkit.FontkitFont,
+  text: string,
+  wanted: number,
+  width: number,
+  spacing = 0,
+): number {
+  return Math.min(wanted, (wanted * width) / textWidth(font, text, wanted, spacing * wanted));
 }
 
 /**
@@ -60,15 +69,12 @@ export function drawSeal(text: SealText, fonts: SealFonts): (width: number, heig
       throw new Error(`the seal's font has no ${character}`);
     }
   }
-  // Half the ring at most, so that the two texts never meet.
-  const arc = (words: string, wanted: number, radius: number, at: 'top' | 'foot') => {
-    const size = fittingSize(
-      medium,
-      words,
-      wanted,
-      Math.PI * radius * (at === 'top' ? 0.84 : 0.7) - 1.6 * words.length,
-    );
-    return outlineArc(medium, words, size, { x: middle, y: middle, radius, side: at, spacing: 1.6 });
+  // Each at most a part of its half of the ring, so that the two never meet the dots between them.
+  const arc = (words: string, wanted: number, radius: number, side: 'top' | 'foot') => {
+    const longest = Math.PI * radius * (side === 'top' ? 0.84 : 0.7);
+    const size = fittingSize(medium, words, wanted, longest, letterSpacing);
+    const spacing = letterSpacing * size;
+    return outlineArc(medium, words, size, { x: middle, y: middle, radius, side, spacing });
   };
   const line = (font: fontkit.FontkitFont, words: string, down: number, wanted: number, width: number) =>
     outlineLine(font, words, middle, side - down, fittingSize(font, words, wanted, width));

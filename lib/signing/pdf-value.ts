@@ -1,3 +1,4 @@
+// server only
 /** The values a PDF is made of (ISO 32000-2, 7.3), as the strict reader returns them. */
 export type PdfValue =
   | number

@@ -146,7 +146,7 @@ describe('refuses with its own code', () => {
       family: 'RSA',
       hash: 'SHA-256',
       importAs,
-      signAs: importAs,
+      signAs: { name: importAs.name },
     } as const;
     const prepared = await prepare(await makeBase(), ines);
     const made = await sign(prepared, makeSigner(short, leaf));

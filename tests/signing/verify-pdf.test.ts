@@ -1,4 +1,4 @@
-import { degrees, PDFName, PDFRef, PDFString } from '@cantoo/pdf-lib';
+import { degrees, PDFArray, PDFDict, PDFName, PDFRef, PDFString } from '@cantoo/pdf-lib';
 import * as asn1js from 'asn1js';
 import { Certificate, CertificateRevocationList, EncapsulatedContentInfo, type SignedData } from 'pkijs';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -110,6 +110,15 @@ describe('tells an update after signing from a signature:', () => {
       });
     expect(await found(await withStore(899))).toEqual([]);
     expect(await found(await withStore(890))).toEqual([changed, 'object']);
+  });
+  it('a field added', async () => {
+    const added = await append(once, ({ context, catalog }) => {
+      const form = catalog.lookup(PDFName.of('AcroForm'), PDFDict);
+      const field = context.obj({ FT: 'Sig', T: PDFString.of('third-engineer') });
+      form.lookup(PDFName.of('Fields'), PDFArray).push(context.register(field));
+      context.snapshot?.markRefForSave(catalog.get(PDFName.of('AcroForm')) as PDFRef);
+    });
+    expect(await found(added)).toEqual([changed, 'field']);
   });
   it('a font exchanged for another', async () => {
     const text = Buffer.from(once).toString('latin1');
