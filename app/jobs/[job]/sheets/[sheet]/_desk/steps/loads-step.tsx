@@ -66,10 +66,10 @@ export function LoadsStep({ current, onCase }: { current: number; onCase: (index
             <span className="num">{c.id}</span> {c.title}
           </button>
         ))}
-        <button type="button" className="text-ink3" onClick={addCase}>
-          Add a case
-        </button>
       </div>
+      <button type="button" className="addrow" onClick={addCase}>
+        Add a case
+      </button>
       {chosen ? (
         <div role="tabpanel" aria-label={`Case ${chosen.id}`}>
           <CaseFields index={current} chosen={chosen} onRemove={removeCase} />
