@@ -6,7 +6,7 @@ import type { EquationRow } from '../block';
 import { runsOf, type Scene } from './scene';
 import type { StepWriter } from './step-writer';
 import { countWords, plain } from './words';
-import { inline, inlineValue, valueCell } from './write-lines';
+import { inline, inlineValue, relationRow, valueCell } from './write-lines';
 
 /** Coefficients stand side by side up to this many. */
 const abreast = 6;
@@ -45,6 +45,10 @@ export function composeCompatibility(step: CompatibilityStep, out: StepWriter, s
       source,
     );
   }
+  out.equations(
+    'Prescribed movements in the sense of the redundants, times $EI_0$:',
+    step.movements.map((r) => relationRow(r, units)),
+  );
   if (n === 1) {
     const rows = step.cases.map((c): EquationRow => {
       const f = step.matrix[0]?.[0];
@@ -65,7 +69,7 @@ export function composeCompatibility(step: CompatibilityStep, out: StepWriter, s
     );
     return;
   }
-  withFigures(step, out, scene);
+  withFigures(step, out, scene, moved);
 }
 
 function symbolic(step: CompatibilityStep, i: number, moved: boolean): EquationRow {
@@ -79,16 +83,23 @@ function symbolic(step: CompatibilityStep, i: number, moved: boolean): EquationR
   return { lhs: `${[...terms, gap].join('+')}=${moved ? `\\Delta_{${i + 1}}` : '0'}`, chain: [] };
 }
 
-function withFigures(step: CompatibilityStep, out: StepWriter, { units }: Scene): void {
+/** b_i = −EI0 δ_i0, with the prescribed movement where there is one. */
+export function rightSideTex(i: number, moved: boolean): string {
+  const gap = symbolTex({ letter: 'δ', sub: i > 8 ? [`${i + 1}`, ',', '0'] : [`${i + 1}0`], timesEI0: true });
+  const own = symbolTex({ letter: 'Δ', sub: [`${i + 1}`], timesEI0: true });
+  return `b_{${i + 1}}=${moved ? own : ''}-${gap}`;
+}
+
+function withFigures(step: CompatibilityStep, out: StepWriter, { units }: Scene, moved: boolean): void {
   const cases = step.cases.length;
-  const said = `With figures, times $EI_0$; ${cases > 1 ? `the equations stand once for all ${countWords(cases)} cases` : 'the right side is the gap with its sign turned'}:`;
+  const said = `With figures, times $EI_0$; ${cases > 1 ? `the equations stand once for ${cases === 2 ? 'both' : `all ${countWords(cases)}`} cases` : 'the right side is the gap with its sign turned'}:`;
   out.paragraph(said);
   runsOf(
     step.redundants.map((r, j) => ({ ...r, j })),
     abreast,
   ).forEach((run) => {
     out.table({
-      caption: 'Coefficients $EI_0f_{ij}$, each with its unit in the row of units where they differ.',
+      caption: 'Coefficients $EI_0f_{ij}$.',
       columns: [
         { head: 'equation', align: 'left' },
         ...run.map((r) => ({ head: inline(r.symbol), align: 'right' as const })),
@@ -103,7 +114,7 @@ function withFigures(step: CompatibilityStep, out: StepWriter, { units }: Scene)
   });
   runsOf(step.cases).forEach((run) => {
     out.table({
-      caption: 'Right sides $b_i=EI_0\\Delta_i-EI_0\\delta_{i0}$.',
+      caption: 'Right sides $b_i$.',
       columns: [
         { head: 'equation', align: 'left' },
         { head: 'unit', align: 'left' },
@@ -111,7 +122,7 @@ function withFigures(step: CompatibilityStep, out: StepWriter, { units }: Scene)
       ],
       rows: step.redundants.map((_, i) => ({
         cells: [
-          `$b_{${i + 1}}$`,
+          `$${rightSideTex(i, moved)}$`,
           `$${unitHead(step.cases[0]?.gaps[i]?.dimension ?? { force: 0, length: 0, temperature: 0 }, units) ?? ''}$`,
           ...run.map((c) => {
             const [gap, right] = [c.gaps[i], c.rightSides[i]];

@@ -82,7 +82,8 @@ function loaded(c: Case, { decimals: d }: DiagramsStep, out: StepWriter, scene: 
       head('x_0=V_a/w', length),
       head('M_x=M_a+V_a^2/(2\\,w)', moment),
       head('e=\\sqrt{2\\,M_x/w}', length),
-      { head: 'zeros of $M$ at $s$', unit: unitHead(length, units), align: 'right' },
+      head('s_a+x_0-e', length),
+      head('s_a+x_0+e', length),
     ],
     rows: c.loaded.map((s) => ({
       cells: [
@@ -94,10 +95,11 @@ function loaded(c: Case, { decimals: d }: DiagramsStep, out: StepWriter, scene: 
         cell(s.x, d.x, units),
         cell(s.top, d.top, units),
         cell(s.e, d.e, units),
-        s.zeros.length === 0 ? '–' : s.zeros.map((z) => cell(z, d.zero, units)).join('; '),
+        cell(s.before, d.before, units),
+        cell(s.after, d.after, units),
       ],
     })),
-    note: 'A dash: $V$ keeps its sign on the stretch, or $M$ does not reach zero.',
+    note: 'The last two columns are zeros of $M$; a dash: not on this stretch. Where $x_0$ lies outside the stretch, $M$ has no extreme on it.',
   });
 }
 

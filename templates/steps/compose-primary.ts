@@ -1,6 +1,7 @@
 import type { PrimaryStep } from '@/lib/engine/derivation/primary-step';
 import { drawPrimary } from '@/lib/figures/draw-primary';
 import { quantityNumber } from '@/lib/typeset/quantity-tex';
+import { caseTex } from '@/lib/typeset/write-symbol';
 import { unitHead } from '@/lib/typeset/write-unit';
 import { endTable } from './end-table';
 import { narrow, runsOf, type Scene, wide } from './scene';
@@ -27,6 +28,11 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
     out.paragraph(
       `With the ${step.released.length} redundants of step 4 released, what is left is determinate and stable. Subscript 0 marks its forces under the loads.`,
     );
+  if (hasHingeForces(step)) {
+    out.paragraph(
+      '$F$ with the name of a member is the force on its end at a hinge, in $x$ or $y$; the piece beyond the hinge feels it with the opposite sign.',
+    );
+  }
   if (scene.figures) figures(step, out, scene);
   step.cases.slice(0, written).forEach((c, k) => {
     if (c.steps.length === 0 || c.steps.length > mostLines) return;
@@ -55,6 +61,9 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
     );
   }
 }
+
+const hasHingeForces = (step: PrimaryStep): boolean =>
+  step.cases.slice(0, written).some((c) => c.steps.some((s) => s.relation?.symbol.letter === 'F'));
 
 function figures(step: PrimaryStep, out: StepWriter, { analysis, solution }: Scene): void {
   const draw = (width: number) =>
@@ -85,7 +94,7 @@ function reactions(step: PrimaryStep, out: StepWriter, { units }: Scene): void {
       columns: [
         { head: 'reaction', align: 'left' },
         { head: 'unit', align: 'left' },
-        ...run.map((c) => ({ head: plain(c.id), align: 'right' as const })),
+        ...run.map((c) => ({ head: `$${caseTex(c.id)}$`, align: 'right' as const })),
       ],
       rows: index.map((k) => {
         const r = first.reactions[k];

@@ -3,6 +3,7 @@ import type { SolutionStep } from '@/lib/engine/derivation/solution-step';
 import { formulaTex } from '@/lib/typeset/write-expression';
 import { caseTex, symbolTex } from '@/lib/typeset/write-symbol';
 import { unitHead } from '@/lib/typeset/write-unit';
+import { rightSideTex } from './compose-compatibility';
 import { runsOf, type Scene } from './scene';
 import type { StepWriter } from './step-writer';
 import { listWords, plain, quantityWords } from './words';
@@ -31,6 +32,7 @@ export function composeSolution(step: SolutionStep, out: StepWriter, scene: Scen
       'The matrix stays symmetric, so only entries on and right of the diagonal are written. Those that change:',
       step.elimination.entries.map((r) => relationRow(r, units)),
     );
+    const moved = solution.work.gaps.some((g) => g.rightSide !== 0);
     const ids = step.values.map((v) => v.id);
     for (const run of runsOf(ids.map((id, k) => ({ id, k })))) {
       out.table({
@@ -42,7 +44,7 @@ export function composeSolution(step: SolutionStep, out: StepWriter, scene: Scen
         ],
         rows: step.elimination.rows.map((row) => ({
           cells: [
-            `$${rowTex(row, units)}$`,
+            `$${rowTex(row, units, moved)}$`,
             `$${unitHead(row.dimension, units) ?? ''}$`,
             ...run.map((c) => cell(row.cells[c.k], row.decimals, units)),
           ],
@@ -55,7 +57,7 @@ export function composeSolution(step: SolutionStep, out: StepWriter, scene: Scen
 }
 
 /** How a row of the table follows from the rows above: b_2 − μ_21 b_1, (b_1 − f_12 X_2)/f_11. */
-function rowTex(row: EliminationRow, units: Scene['units']): string {
+function rowTex(row: EliminationRow, units: Scene['units'], moved: boolean): string {
   const label = symbolTex(row.label);
   if (row.less) {
     const { from, multiplier, other } = row.less;
@@ -69,7 +71,7 @@ function rowTex(row: EliminationRow, units: Scene['units']): string {
     ].join('');
     return `${label}=(${over})/(${formulaTex(pivot, units)})`;
   }
-  return label;
+  return rightSideTex(Number(row.label.sub?.[0]) - 1, moved);
 }
 
 function results(step: SolutionStep, out: StepWriter, { units }: Scene): void {

@@ -45,6 +45,13 @@ export function composeStructure(step: StructureStep, out: StepWriter, scene: Sc
     });
     out.paragraph(`Places of point loads and couples: ${listWords(said)}.`);
   }
+  if (step.parts.length > 0) {
+    const said = step.parts.map(
+      (l) =>
+        `${l.value.symbol ? inline(l.value.symbol) : ''} $=$ ${inlineValue(l.value, units)} on ${memberName(l.member, scene.placed)}`,
+    );
+    out.paragraph(`Loaded lengths: ${listWords(said)}.`);
+  }
   if (step.EI0)
     out.equations('Reference stiffness:', [
       { lhs: 'EI_0', chain: [inlineValue(step.EI0, units).slice(1, -1)] },

@@ -12,6 +12,10 @@ const abreast = 7;
 /** Step 16: demands on members, forces on foundations. */
 export function composeSummary(step: SummaryStep, out: StepWriter, scene: Scene): void {
   out.heading('Summary of demands');
+  if (scene.analysis.cases.length === 0) {
+    out.paragraph('There is no load case, so there are no demands.');
+    return;
+  }
   members(step, out, scene);
   supports(step, out, scene);
   const pulled = [...new Set(step.uplift.map((u) => u.joint))];

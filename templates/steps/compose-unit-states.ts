@@ -21,8 +21,9 @@ export function composeUnitStates(step: UnitStatesStep, out: StepWriter, scene: 
     return;
   }
   const { units, placed } = scene;
+  const hinged = states.some((s) => s.steps.some((line) => line.relation?.symbol.letter === 'F'));
   out.paragraph(
-    `$X_i=1$ acts alone on the primary structure. A bar marks its effects: $\\bar{R}$, $\\bar{N}$, $\\bar{V}$ and $\\bar{m}$ are per unit of $X_i$. No load acts between the joints, so every $\\bar{m}$ is straight on each member.`,
+    `$X_i=1$ acts alone on the primary structure. A bar marks its effects: $\\bar{R}$, $\\bar{N}$, $\\bar{V}$ and $\\bar{m}$ are per unit of $X_i$. No load acts between the joints, so every $\\bar{m}$ is straight on each member.${hinged ? ' $\\bar{F}$ with the name of a member is the force on its end at a hinge.' : ''}`,
   );
   for (const s of states) {
     if (s.index < written && s.steps.length > 0 && s.steps.length <= 12) {

@@ -96,7 +96,7 @@ function totals(step: WorkStep, out: StepWriter, scene: Scene): void {
         { head: '$EI_0f_{ij}$', unit: unitHead(table.dimension, units), align: 'right' },
       ],
       rows: table.groups.map((g) => ({
-        cells: [inline({ ...g.symbol, timesEI0: undefined }), valueCell(g.total, units)],
+        cells: [inline(g.symbol), valueCell(g.total, units)],
       })),
       note: 'Coefficients that are not in the table are zero; $f_{ij}=f_{ji}$.',
     });
@@ -110,7 +110,7 @@ function totals(step: WorkStep, out: StepWriter, scene: Scene): void {
           { head: '$EI_0\\delta_{i0}$', unit: unitHead(table.dimension, units), align: 'right' },
         ],
         rows: table.groups.map((w) => ({
-          cells: [inline({ ...w.symbol, timesEI0: undefined }), valueCell(w.total, units)],
+          cells: [inline(w.symbol), valueCell(w.total, units)],
         })),
       });
     }

@@ -9,7 +9,7 @@ import { finalRows } from './final-rows';
 import { type Relation, relate } from './relation';
 import { signedTerm } from './statics-terms';
 import { referenceStiffness } from './structure-step';
-import type { SymbolName } from './symbol-name';
+import { inCase, inUnitState, type SymbolName } from './symbol-name';
 import { wholeTerms } from './whole-terms';
 import { gapSymbol } from './work-step';
 import { type WorkTable, workTable } from './work-table';
@@ -96,6 +96,12 @@ function gapOf(ctx: Context): ChecksStep['gap'] {
   };
   const decimals = Math.max(0, ctx.figures.gap - 1);
   const symbol = { ...gapSymbol(0, id), sub: ['1'] };
-  const table = workTable(ctx, [{ symbol, rows, total: gap.rightSide }], dims, decimals);
+  const states = {
+    unit: (s: SymbolName) => inUnitState(s, 0),
+    perUnit: dimensionOf(q),
+    other: (s: SymbolName) => inCase(s, id),
+    perOther: dimensions.pure,
+  };
+  const table = workTable(ctx, [{ symbol, rows, total: gap.rightSide, states }], dims, decimals);
   return { id, redundant: redundantSymbol(0), table };
 }

@@ -1,7 +1,9 @@
 import type { Quantity } from '@/lib/model/quantity';
 import { type Context, redundantSymbol } from './context';
 import { flexibilityDimension, gapDimension } from './dimensions';
-import type { Value } from './expression';
+import { product, type Value } from './expression';
+import { type Relation, relate } from './relation';
+import { referenceValue } from './structure-step';
 import type { SymbolName } from './symbol-name';
 import { flexibilitySymbol, gapSymbol } from './work-step';
 
@@ -12,6 +14,8 @@ export interface CompatibilityStep {
   /** EI0 f_ij, row by row; zero where two unit states act on nothing in common. */
   matrix: (Value | undefined)[][];
   cases: { id: string; gaps: Value[]; rightSides: Value[] }[];
+  /** EI0 times the movements prescribed at the releases themselves. */
+  movements: Relation[];
 }
 
 export function deriveCompatibility(ctx: Context): CompatibilityStep {
@@ -54,5 +58,20 @@ export function deriveCompatibility(ctx: Context): CompatibilityStep {
     redundants: redundants.map((quantity, i) => ({ symbol: redundantSymbol(i), quantity })),
     matrix,
     cases,
+    movements: cases.flatMap((c) => c.rightSides.flatMap((r) => movementLine(ctx, r))),
   };
+}
+
+function movementLine(ctx: Context, right: Value): Relation[] {
+  const EI0 = ctx.solution.reference.value;
+  if (right.value === 0 || EI0 === undefined || !right.symbol) return [];
+  const dimension = { ...right.dimension, force: 0, length: right.dimension.length - 2 };
+  const movement: Value = {
+    kind: 'value',
+    symbol: { ...right.symbol, timesEI0: undefined },
+    value: right.value / EI0,
+    dimension,
+    decimals: 4,
+  };
+  return [relate(right.symbol, product(referenceValue(EI0), movement), right, right.value)];
 }

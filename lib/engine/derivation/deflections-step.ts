@@ -8,7 +8,7 @@ import { decimalsFor } from './figure-plan';
 import { finalRows } from './final-rows';
 import { type Relation, relate } from './relation';
 import { referenceStiffness, referenceValue } from './structure-step';
-import type { SymbolName } from './symbol-name';
+import { inCase, type SymbolName } from './symbol-name';
 import { type WorkTable, workTable } from './work-table';
 
 /** One displacement that was asked for, by the work of its unit load with the final moments. */
@@ -139,6 +139,16 @@ function tableOf(
         symbol: { ...symbol, super: id, timesEI0: true },
         rows: [...bending, ...stepped, ...others],
         total: found.total,
+        states: {
+          unit: (s) => ({
+            ...s,
+            mark: 'bar',
+            sub: [...(s.sub ?? []), ',', `${symbol.letter}${symbol.sub?.[0]}`],
+          }),
+          perUnit: turn ? dimensions.moment : dimensions.force,
+          other: (s) => inCase(s, id),
+          perOther: dimensions.pure,
+        },
       },
     ],
     { dimension: { force: 1, length: turn ? 2 : 3, temperature: 0 }, area: height, ordinate },

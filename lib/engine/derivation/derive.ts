@@ -8,6 +8,7 @@ import { contextOf } from './context';
 import { deriveDeflections } from './deflections-step';
 import { deriveDegree } from './degree-step';
 import { deriveDiagrams } from './diagrams-step';
+import { withEnoughFigures } from './elimination-context';
 import { deriveForces } from './forces-step';
 import { deriveParts } from './parts-step';
 import { derivePrimary } from './primary-step';
@@ -46,6 +47,6 @@ const order = [
  * the derivation, never of what was entered.
  */
 export function derive(solution: Solution): Step[] {
-  const ctx = contextOf(solution);
+  const ctx = withEnoughFigures(contextOf(solution));
   return order.map((step, i) => ({ ...step(ctx), number: i + 1 }));
 }

@@ -1,5 +1,5 @@
 import type { MemberDiagrams } from '../diagrams/member-diagrams';
-import { extremes, valueAt, zeros } from '../diagrams/piecewise';
+import { extremes, valueAt } from '../diagrams/piecewise';
 import type { Context } from './context';
 import { placedMember } from './context';
 import { fitColumns } from './precision';
@@ -23,12 +23,16 @@ export interface LoadedStretch {
   startM: number;
   V: number;
   w: number;
-  /** Distance from `from` to V = 0, and M there; absent when V keeps its sign. */
-  x?: number;
-  top?: number;
-  /** Distance of the zeros of M from the place of V = 0. */
+  /** Distance from `from` to where V is zero, or would be, and M there. */
+  x: number;
+  top: number;
+  /** V is zero on the stretch itself. */
+  inside: boolean;
+  /** Distance of the zeros of M from that place. */
   e?: number;
-  zeros: number[];
+  /** Zeros of M before and after it, where they lie on the stretch. */
+  before?: number;
+  after?: number;
 }
 
 /** Extremes of M on members whose load varies: found from the exact curve. */
@@ -45,7 +49,7 @@ export interface DiagramsStep {
   decimals: Record<Column, number>;
 }
 
-type Column = 'from' | 'length' | 'M' | 'V' | 'w' | 'x' | 'top' | 'e' | 'zero';
+type Column = 'from' | 'length' | 'M' | 'V' | 'w' | 'x' | 'top' | 'e' | 'zero' | 'before' | 'after';
 
 /** Members looked over in tables; beyond, the diagrams carry the values. */
 const most = 60;
@@ -74,6 +78,8 @@ export function deriveDiagrams(ctx: Context): DiagramsStep {
     top: figures.moment,
     e: figures.length,
     zero: figures.length,
+    before: figures.length,
+    after: figures.length,
   };
   const first = fitColumns<Column>(
     loaded.map((s) => ({
@@ -84,11 +90,15 @@ export function deriveDiagrams(ctx: Context): DiagramsStep {
       x: s.x,
       top: s.top,
       e: s.e,
+      before: s.before,
+      after: s.after,
       zero: undefined,
       length: undefined,
     })),
     start,
     [
+      { column: 'before', from: ['from', 'x', 'e'], work: (r) => r.from + r.x - r.e },
+      { column: 'after', from: ['from', 'x', 'e'], work: (r) => r.from + r.x + r.e },
       { column: 'e', from: ['top', 'w'], work: (r) => Math.sqrt((2 * r.top) / r.w) },
       { column: 'top', from: ['M', 'V', 'w'], work: (r) => r.M + r.V ** 2 / (2 * r.w) },
       { column: 'x', from: ['V', 'w'], work: (r) => r.V / r.w },
@@ -144,7 +154,7 @@ function stretchesOf(
       continue;
     }
     const w = -2 * c2;
-    if (Math.abs(w) * length * length > 1e-9 * size) found.loaded.push(underLoad(common, w, piece));
+    if (Math.abs(w) * length * length > 1e-9 * size) found.loaded.push(underLoad(common, w));
     else if (startM !== 0 || endM !== 0) {
       const crosses = startM * endM < 0;
       found.straight.push({ ...common, endM, zero: crosses ? piece.from - startM / V : undefined });
@@ -156,15 +166,15 @@ function stretchesOf(
 function underLoad(
   common: Pick<LoadedStretch, 'member' | 'from' | 'to' | 'startM' | 'V'>,
   w: number,
-  piece: MemberDiagrams['M'][number],
 ): LoadedStretch {
   const length = common.to - common.from;
   const x = common.V / w;
-  const inside = zeros([piece]).filter(
-    (s) => s > common.from + 1e-9 * length && s < common.to - 1e-9 * length,
-  );
-  if (x <= 1e-9 * length || x >= length * (1 - 1e-9)) return { ...common, w, zeros: inside };
   const top = common.startM + common.V ** 2 / (2 * w);
-  const under = (2 * top) / w;
-  return { ...common, w, x, top, e: under > 0 ? Math.sqrt(under) : undefined, zeros: inside };
+  const within = (d: number) => d > 1e-9 * length && d < length * (1 - 1e-9);
+  const inside = within(x);
+  const square = (2 * top) / w;
+  if (square <= 0) return { ...common, w, x, top, inside };
+  const e = Math.sqrt(square);
+  const [before, after] = [x - e, x + e].map((d) => (within(d) ? common.from + d : undefined));
+  return { ...common, w, x, top, inside, e, before, after };
 }

@@ -1,6 +1,7 @@
 import { deriveCompatibility } from './compatibility-step';
 import { type Context, pureValue } from './context';
 import { per } from './dimensions';
+import { fitRows } from './elimination-figures';
 import { negative, product, quotient, sum, type Value } from './expression';
 import { decimalsFor } from './figure-plan';
 import { type Relation, relate } from './relation';
@@ -50,7 +51,7 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
   }));
   const multipliers: Relation[] = [];
   const changed: Relation[] = [];
-  const decimals = ctx.figures.gap + 1;
+  const decimals = ctx.figures.gap;
   const rows: EliminationRow[] = right.map((r) => ({
     label: r.symbol,
     cells: [...r.cells],
@@ -95,7 +96,7 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
       dimension: X.dimension,
     });
   }
-  return { multipliers, entries: changed, rows };
+  return { multipliers, entries: changed, rows: fitRows(rows) };
 }
 
 const plain = (i: number): SymbolName => ({ letter: 'X', sub: [`${i + 1}`] });

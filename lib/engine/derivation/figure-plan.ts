@@ -78,7 +78,7 @@ export function planFigures(solution: Solution): FigurePlan {
       3,
     ),
     gap: noMoreThan(gaps, decimalsFor(gaps, 7, 0, 4)),
-    flexibility: noMoreThan(flexibilities, decimalsFor(flexibilities, 6, 0, 4)),
+    flexibility: noMoreThan(flexibilities, decimalsFor(flexibilities, 7, 0, 6)),
     deflection: 2,
     load: 2,
   };

@@ -4,6 +4,7 @@ import { type Context, lengthValue, loadValue, placedMember, pureValue } from '.
 import { type Expression, evaluate, negative, number, power, product, quotient, sum } from './expression';
 import type { Placed } from './geometry';
 import { placeSymbol } from './load-place';
+import { loadedLength } from './loaded-length';
 import { sectionMoment } from './section-moment';
 
 /**
@@ -44,7 +45,7 @@ function candidates(
   const intensities = intensitiesOf(ctx, id, index, load, p);
   const l = part.to - part.from;
   const whole = Math.abs(l - p.L) <= 1e-9 * p.L;
-  const base = whole ? span : lengthValue(ctx, undefined, l);
+  const base = loadedLength(ctx, p.member.id, l);
   const divisor =
     part.shape === 'parabola' ? 8 : part.shape === 'spandrel' ? 2 : part.shape === 'cubic' ? 6 : undefined;
   if (divisor === undefined) return [];

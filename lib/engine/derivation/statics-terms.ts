@@ -1,10 +1,11 @@
 import type { Joint } from '@/lib/model/structure';
 import type { StaticsLine, StaticsTerm } from '../statics/statics-line';
-import { type Context, lengthValue, loadValue, placedMember, pureValue, redundantSymbol } from './context';
+import { type Context, loadValue, placedMember, pureValue, redundantSymbol } from './context';
 import { dimensionOf, dimensions, per } from './dimensions';
 import { type Axis, jointDistance, placeDistance } from './distance';
 import { type Expression, evaluate, negative, number, product, quotient, sum } from './expression';
 import { resultantOf } from './load-place';
+import { loadedLength } from './loaded-length';
 import { inCase, inUnitState, onPrimary, type SymbolName } from './symbol-name';
 
 /** Which forces act: those of a case on the primary structure, or one redundant of value 1. */
@@ -84,15 +85,6 @@ function memberUnder(ctx: Context, id: string, index: number, term: StaticsTerm,
   return loadedLength(ctx, (own ?? weighed[0])?.member.id ?? '', length);
 }
 
-function loadedLength(ctx: Context, id: string, length: number): Expression {
-  const p = placedMember(ctx, id);
-  const close = (v: number) => Math.abs(v - length) <= 1e-9 * length;
-  if (close(p.L)) return lengthValue(ctx, ctx.names.length(id), p.L);
-  if (close(Math.abs(p.dx))) return lengthValue(ctx, ctx.names.plan(id), Math.abs(p.dx));
-  if (close(Math.abs(p.dy))) return lengthValue(ctx, ctx.names.rise(id), Math.abs(p.dy));
-  return lengthValue(ctx, undefined, length);
-}
-
 function loadAt(ctx: Context, id: string, index: number) {
   const load = ctx.analysis.cases.find((c) => c.id === id)?.loads[index];
   if (!load) throw new Error(`case ${id} has no load ${index}`);
@@ -109,7 +101,8 @@ function armOf(ctx: Context, about: Sum, term: StaticsTerm, acting: Acting): Exp
   return (centre ? namedArm(ctx, centre, term, acting, size) : undefined) ?? ctx.arms.add(size);
 }
 
-function isCouple(ctx: Context, { of }: StaticsTerm, acting: Acting): boolean {
+function isCouple(ctx: Context, term: StaticsTerm, acting: Acting): boolean {
+  const { of } = term;
   if (of.kind === 'quantity') return of.quantity.kind === 'reaction' && of.quantity.component === 'turn';
   if (of.kind === 'interface') return false;
   if (of.kind === 'unit') {
@@ -118,6 +111,10 @@ function isCouple(ctx: Context, { of }: StaticsTerm, acting: Acting): boolean {
   }
   if (acting.kind === 'unit') return false;
   const load = loadAt(ctx, acting.id, of.index);
+  if (load.kind === 'joint') {
+    const force = [load.x, load.y].includes(term.value);
+    return load.couple === term.value && Math.abs(term.coefficient) === 1 && !force;
+  }
   return load.kind === 'couple';
 }
 

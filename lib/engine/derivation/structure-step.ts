@@ -5,6 +5,7 @@ import { decimalsFor } from './figure-plan';
 import type { Placed } from './geometry';
 import { placeSymbol } from './load-place';
 import type { LoadSymbol } from './load-symbols';
+import { type LoadedLength, loadedParts } from './loaded-length';
 import { type Relation, relate } from './relation';
 
 /** Step 2: what stands there and what acts on it. */
@@ -14,6 +15,8 @@ export interface StructureStep {
   /** Springs of supports, by joint and component. */
   springs: { joint: string; component: 'x' | 'y' | 'turn'; stiffness: Value }[];
   loads: readonly LoadSymbol[];
+  /** Loaded lengths that are parts of members. */
+  parts: LoadedLength[];
   /** Distances of point loads and couples along their members. */
   places: { member: string; value: Value }[];
   /** Length and slope of inclined members. */
@@ -47,6 +50,7 @@ export function deriveStructure(ctx: Context): StructureStep {
     members,
     springs,
     loads: ctx.loads,
+    parts: loadedParts(ctx),
     places: placesOf(ctx),
     geometry: [...ctx.placed.values()].filter((p) => p.lie === 'inclined').flatMap((p) => slopeOf(ctx, p)),
     EI0: value === undefined ? undefined : referenceValue(value),

@@ -3,7 +3,7 @@ import type { Dimension } from '@/lib/units/dimension';
 import { type Context, redundantSymbol } from './context';
 import { dimensionOf, dimensions, flexibilityDimension, gapDimension, per } from './dimensions';
 import { namedParts } from './parts-step';
-import type { SymbolName } from './symbol-name';
+import { inCase, inUnitState, onPrimary, type SymbolName } from './symbol-name';
 import { type WorkTable, workTable } from './work-table';
 
 /** Step 8: EI0 f_ij and EI0 δ_i0, row by row. Tables hold groups of one dimension. */
@@ -41,6 +41,7 @@ export function deriveWork(ctx: Context): WorkStep {
     if (!q) throw new Error(`there is no redundant ${redundantSymbol(i).sub?.join('')}`);
     return q;
   };
+  const unitOf = (i: number) => ({ unit: (s: SymbolName) => inUnitState(s, i), perUnit: dimensionOf(at(i)) });
   const flexibility = grouped(
     work.flexibility.filter((f) => f.rows.length > 0 || f.total !== 0),
     (f) => flexibilityDimension(at(f.i), at(f.j)),
@@ -50,7 +51,12 @@ export function deriveWork(ctx: Context): WorkStep {
     const other = first ? dimensionOf(at(first.i)) : dimensions.force;
     return workTable(
       ctx,
-      items.map((f) => ({ symbol: flexibilitySymbol(f.j, f.i), rows: rows ? f.rows : [], total: f.total })),
+      items.map((f) => ({
+        symbol: flexibilitySymbol(f.j, f.i),
+        rows: rows ? f.rows : [],
+        total: f.total,
+        states: { ...unitOf(f.i), other: (s) => inUnitState(s, f.j), perOther: dimensionOf(at(f.j)) },
+      })),
       { dimension, area: unitArea(mine), ordinate: per(dimensions.moment, other) },
       ctx.figures.flexibility,
     );
@@ -67,6 +73,7 @@ export function deriveWork(ctx: Context): WorkStep {
           symbol: gapSymbol(g.i, id),
           rows: rows ? g.rows : [],
           total: g.total,
+          states: { ...unitOf(g.i), other: (s) => inCase(onPrimary(s), id), perOther: dimensions.pure },
           nameOf: (row) =>
             parts.find(
               ({ part }) =>

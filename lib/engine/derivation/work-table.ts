@@ -1,12 +1,11 @@
 import type { Dimension } from '@/lib/units/dimension';
 import type { PartShape, WorkRow } from '../force-method/work';
-import { type Context, lengthValue, pureValue } from './context';
-import { dimensions } from './dimensions';
-import { type Expression, negative, product, quotient, type Value } from './expression';
+import type { Context } from './context';
+import type { Value } from './expression';
 import { decimalsFor } from './figure-plan';
+import { otherFormula, type TermStates } from './other-formula';
 import { fitColumns, fitTerms } from './precision';
 import { type Relation, relate } from './relation';
-import { referenceValue } from './structure-step';
 import type { SymbolName } from './symbol-name';
 
 /** One bending row: area of one diagram times the ordinate of the other at its centroid, over k. */
@@ -68,6 +67,7 @@ export interface GroupInput {
   symbol: SymbolName;
   rows: readonly WorkRow[];
   total: number;
+  states: TermStates;
   /** Names of the parts of the rows, in their order. */
   nameOf?: (row: Extract<WorkRow, { kind: 'bending' }>) => string | undefined;
 }
@@ -170,92 +170,7 @@ function otherLine(
   return {
     kind: 'other',
     row,
-    relation: relate(symbol, otherFormula(ctx, row), figures, row.value),
+    relation: relate(symbol, otherFormula(ctx, row, group.states), figures, row.value),
     value: row.value,
   };
-}
-
-/** EI0 times the unit force times the movement that goes with it. */
-function otherFormula(ctx: Context, row: OtherLine['row']): Expression {
-  const EI0 = referenceValue(ctx.solution.reference.value ?? 1);
-  const { names, figures } = ctx;
-  const stiff = (value: number, letter: string, sub: readonly string[], dimension: Dimension): Value => ({
-    kind: 'value',
-    symbol: { letter, sub },
-    value,
-    dimension,
-    decimals: decimalsFor([value], 5, 0, 3),
-  });
-  const barred = (letter: string, sub: readonly string[] | undefined, value: number) =>
-    pureValue(value, figures.unitForce, { letter, mark: 'bar', sub });
-  const force = (letter: string, sub: readonly string[] | undefined, value: number): Value => ({
-    kind: 'value',
-    symbol: { letter, sub },
-    value,
-    dimension: dimensions.force,
-    decimals: figures.force,
-  });
-  switch (row.kind) {
-    case 'axial':
-    case 'shear': {
-      const sub = names.member(row.member);
-      const letter = row.kind === 'axial' ? 'N' : 'V';
-      const under =
-        row.kind === 'axial'
-          ? stiff(row.EA, 'EA', sub, dimensions.force)
-          : stiff(row.GAs, 'GA', [...sub, ',', 's'], dimensions.force);
-      const length = lengthValue(ctx, names.length(row.member), row.length);
-      return quotient(
-        product(EI0, barred(letter, sub, row.unit), force(letter, sub, row.force), length),
-        under,
-      );
-    }
-    case 'spring': {
-      const r = names.reaction(row.joint, row.component);
-      const turn = row.component === 'turn';
-      const k = stiff(row.stiffness, 'k', r.sub ?? [], turn ? dimensions.moment : dimensions.spring);
-      return quotient(product(EI0, barred(r.letter, r.sub, row.unit), force(r.letter, r.sub, row.force)), k);
-    }
-    case 'temperature': {
-      const sub = names.member(row.member);
-      const alpha = stiff(row.alpha, 'α', [], { force: 0, length: 0, temperature: -1 });
-      const rise = stiff(row.rise, 'T', sub, dimensions.temperature);
-      const length = lengthValue(ctx, names.length(row.member), row.length);
-      return product(EI0, barred('N', sub, row.unit), { ...alpha, decimals: 9 }, rise, length);
-    }
-    case 'gradient': {
-      const sub = names.member(row.member);
-      const area: Value = {
-        kind: 'value',
-        symbol: { letter: 'A', mark: 'bar', sub },
-        value: row.area,
-        dimension: { force: 0, length: 2, temperature: 0 },
-        decimals: 3,
-      };
-      const curvature: Value = {
-        kind: 'value',
-        symbol: { letter: 'κ', sub },
-        value: row.curvature,
-        dimension: dimensions.perLength,
-        decimals: 7,
-      };
-      return product(EI0, area, curvature);
-    }
-    case 'misfit': {
-      const sub = names.member(row.member);
-      const d = { ...lengthValue(ctx, { letter: 'd', sub }, row.misfit), decimals: 4 };
-      return product(EI0, barred('N', sub, row.unit), d);
-    }
-    case 'settlement': {
-      const r = names.reaction(row.joint, row.component);
-      const movement: Value = {
-        kind: 'value',
-        symbol: { letter: 'Δ', sub: r.sub },
-        value: row.movement,
-        dimension: row.component === 'turn' ? dimensions.pure : dimensions.length,
-        decimals: 4,
-      };
-      return negative(product(EI0, barred(r.letter, r.sub, row.unit), movement));
-    }
-  }
 }

@@ -12,7 +12,7 @@ const joined = /^EI_0\\,\s*(?=f_|\\delta|\\Delta_\{\d|v_|\\theta)/;
 
 /** Reads an expression: numbers with units, symbols, + − × /, fractions, roots, powers, brackets. Throws on anything else. */
 export function parseTex(tex: string): Node {
-  const reader = new Reader(tex);
+  const reader = new Reader(tex.replaceAll('\\text{–}', '–'));
   const node = reader.sum();
   reader.space();
   if (!reader.ended) throw new Error(`not read: ${reader.rest}`);

@@ -24,7 +24,7 @@ export function reworkTable(
   table.rows.forEach((row, r) => {
     if (row.emphasis !== 'total') reworkCells(columns, numbers[r] ?? [], printed, report, failed(r));
   });
-  reworkRows(table, numbers, printed, report, failed);
+  reworkRows(table, columns, numbers, printed, report, failed);
   reworkTotals(table, numbers, report, failed);
   holdCells(table, columns, numbers, full, report, failed);
 }
@@ -101,6 +101,7 @@ function reworkCells(
 /** Labels like b_2 = b_1 − μ b_3: each numeric column by itself. */
 function reworkRows(
   table: TableBlock,
+  columns: readonly Column[],
   numbers: readonly (readonly Cell[])[],
   printed: ReadonlyMap<string, Worked>,
   report: Report,
@@ -127,7 +128,7 @@ function reworkRows(
         const at = names.indexOf(name);
         const value = at === -1 ? undefined : numberOf(numbers[at]?.[k]);
         return value === undefined
-          ? printed.get(name) && { ...(printed.get(name) as Worked), unit: undefined }
+          ? (printed.get(name) ?? printed.get(`${name}^{${columns[k]?.name}}`))
           : { value, unit: undefined };
       };
       try {
@@ -184,9 +185,10 @@ function holdCells(
     }
     if (name === undefined) return;
     columns.forEach((column, k) => {
-      if (!column.name?.startsWith('\\mathrm')) return;
       const shown = numberOf(numbers[r]?.[k]);
-      const known = full.get(`${name}^{${column.name}}`);
+      const alone = columns.length === 2 && k === 1;
+      if (!alone && !column.name?.startsWith('\\mathrm')) return;
+      const known = full.get(alone ? `${name}` : `${name}^{${column.name}}`);
       if (shown === undefined || !known) return;
       report.counts.held += 1;
       compare(known.value, shown, figureOf(numbers[r]?.[k]), 'formula', report, failed(r));

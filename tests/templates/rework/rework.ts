@@ -1,4 +1,6 @@
+import type { Solution } from '@/lib/engine/solution';
 import type { Block, EquationRow, TableBlock } from '@/templates/block';
+import { holdTables } from './hold-tables';
 import { type Node, parseTex } from './parse-tex';
 import { compare, type Report } from './report';
 import { reworkTable } from './rework-table';
@@ -23,7 +25,11 @@ const emptyReport = (): Report => ({
 });
 
 /** Works the document's own text again. `full` gives the full-precision value behind a symbol. */
-export function rework(blocks: readonly Block[], full: ReadonlyMap<string, Worked>): Report {
+export function rework(
+  blocks: readonly Block[],
+  full: ReadonlyMap<string, Worked>,
+  solution?: Solution,
+): Report {
   const report = emptyReport();
   const printed = printedValues(blocks);
   const lookup: Lookup = (name) => full.get(name);
@@ -44,6 +50,7 @@ export function rework(blocks: readonly Block[], full: ReadonlyMap<string, Worke
         break;
     }
   }
+  if (solution) holdTables(blocks, solution, report);
   return report;
 }
 
@@ -83,6 +90,10 @@ const wordy = /\\int|\\sum|\\text|\\dd/;
 
 function reworkRow(id: string, row: EquationRow, lookup: Lookup, report: Report): void {
   if (row.chain.length === 0) {
+    if (/\\sum_\{|\\int/.test(row.lhs)) {
+      report.statements.push(`${id}: ${row.lhs}`);
+      return;
+    }
     const bare = row.lhs
       .replace(/^\\textstyle\\sum [A-Z]_\{[^}]*\}+:\\;/, '')
       .replace(/^\\text\{[^}]*:\}\\quad /, '');
@@ -96,7 +107,7 @@ function reworkRow(id: string, row: EquationRow, lookup: Lookup, report: Report)
 }
 
 function read(tex: string, id: string, report: Report): Node | undefined {
-  if (wordy.test(tex)) {
+  if (wordy.test(tex.replaceAll('\\text{–}', '–'))) {
     report.statements.push(`${id}: ${tex}`);
     return undefined;
   }
