@@ -61,9 +61,9 @@ function jointResidual(eq: Equilibrium, final: Float64Array, rows: Float64Array)
 
 /** The same coefficient with areas of the one diagram and ordinates of the other exchanged. */
 function reciprocity(eq: Equilibrium, solved: SolvedForces, EI0: number): number {
-  const diagonal = new Map(solved.flexibility.filter((f) => f.i === f.j).map((f) => [f.i, f.total]));
+  const diagonal = new Map(solved.entries.filter((f) => f.i === f.j).map((f) => [f.i, f.total]));
   let worst = 0;
-  for (const { i, j, total } of solved.flexibility) {
+  for (const { i, j, total } of solved.entries) {
     const [a, b] = [solved.units[j], solved.units[i]];
     if (i === j || !a || !b) continue;
     const turned = flexibilityRows(eq, a, b, solved.held, EI0).reduce((t, r) => t + r.value, 0);
@@ -84,8 +84,15 @@ function gapResidual(
   const c = solved.cases.get(id);
   if (!c) return Number.POSITIVE_INFINITY;
   let worst = 0;
+  const force = Math.max(0, ...c.final.map(Math.abs), ...c.load.rows.map(Math.abs));
+  const diagonal = new Map(solved.entries.filter((f) => f.i === f.j).map((f) => [f.i, f.total]));
+  /** The gap that the largest force of the case would open here: what a rounding of forces is to be held against. */
+  const opened = (i: number, { members }: SolvedForces['units'][number]) => {
+    const ends = [...members.values()].flatMap((u) => [u.N, u.m0 / eq.length, u.m1 / eq.length]);
+    const own = Math.max(0, ...ends.map(Math.abs));
+    return own === 0 ? 0 : ((diagonal.get(i) as number) * force) / own;
+  };
   solved.units.forEach((unit, i) => {
-    if (c.open.has(i)) return;
     const terms: number[] = [];
     for (const [b, u] of unit.members) {
       const bar = eq.bars[b];
@@ -113,7 +120,7 @@ function gapResidual(
       const R = unit.reactions.get(m.column);
       if (R !== undefined) terms.push(-EI0 * R * m.value);
     }
-    const size = Math.max(...terms.map(Math.abs), Math.abs(c.gaps[i]?.total as number));
+    const size = Math.max(...terms.map(Math.abs), Math.abs(c.gaps[i]?.total as number), opened(i, unit));
     if (size > 0) worst = Math.max(worst, Math.abs(terms.reduce((a, b) => a + b, 0)) / size);
   });
   return worst;

@@ -4,6 +4,10 @@ export const tolerance = {
   pivot: 1e-9,
   /** A self-stress entry, relative to the largest of its state, below which a quantity is fixed by equilibrium. */
   fixed: 1e-9,
+  /** A self-stress entry, relative to the largest of its state, that is rounding and nothing else. */
+  entry: 1e-12,
+  /** Axial force or strain along members that are held lengthwise, relative to its parts, that bending would leave open. */
+  along: 1e-9,
   /** Agreement of the two ways, joint equilibrium, reciprocity and gaps, relative to the largest value of their kind. */
   check: 1e-7,
 } as const;

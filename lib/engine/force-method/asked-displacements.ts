@@ -6,11 +6,11 @@ import { stretches } from '../diagrams/stretches';
 import { stateOf } from '../primary-structure';
 import type { DisplacementResult } from '../solution';
 import { type Equilibrium, loadState } from '../statics/equilibrium';
-import { solveBasis } from '../statics/sparse-lu';
+import { planStatics } from '../statics/plan-statics';
 import { writeStatics } from '../statics/write-statics';
 import { endForces, memberDiagram } from './member-state';
 import type { Reference } from './reference';
-import type { PrimaryBasis } from './self-stress';
+import { type PrimaryBasis, primaryForces, writtenRedundants } from './self-stress';
 import type { SolvedForces } from './solve-redundants';
 import type { WorkRow } from './work';
 import { straightParts } from './work-row';
@@ -26,20 +26,18 @@ export function askedDisplacements(
   solved: SolvedForces,
   reference: Reference,
 ): DisplacementResult[] {
+  const names = basis.redundants.map((q) => eq.quantities[q] as Quantity);
+  const written = eq.analysis.displacements.length > 0 && names.length <= writtenRedundants;
+  const plan = written ? planStatics(eq, names) : undefined;
   return eq.analysis.displacements.map((ask, index): DisplacementResult => {
     const loads = [unitLoad(ask)];
     const load = loadState(eq, loads);
-    const { z } = solveBasis(
-      basis.lu,
-      load.rows.map((v) => -v),
-    );
-    const scaled = new Float64Array(eq.quantities.length);
-    basis.lu.basis.forEach((q, i) => {
-      scaled[q] = z[i] as number;
-    });
+    const scaled = primaryForces(eq, basis, load.rows);
     const value = (q: number) => scaled[q] as number;
-    const names = basis.redundants.map((q) => eq.quantities[q] as Quantity);
-    const unit = { ...stateOf(eq, value, load), lines: writeStatics(eq, names, { kind: 'loads', loads }) };
+    const unit = {
+      ...stateOf(eq, value, load),
+      lines: plan ? writeStatics(plan, { kind: 'loads', loads }) : [],
+    };
     const cases = Object.fromEntries(
       [...solved.cases].map(([id, c]) => {
         const rows = eq.bars.flatMap((bar, b) => {

@@ -2,7 +2,7 @@ import { between, integralOfProduct } from '../diagrams/piecewise';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
 import { stretches } from '../diagrams/stretches';
 import type { Equilibrium } from '../statics/equilibrium';
-import { solveBasisTransposed } from '../statics/sparse-lu';
+import { solveBasisTransposed } from '../statics/solve-lu';
 import type { Springs } from './flexibility';
 import { endForces, memberDiagram } from './member-state';
 import type { PrimaryBasis } from './self-stress';
@@ -35,8 +35,8 @@ export function jointDisplacements(
     if (q.kind === 'reaction') {
       const spring = held.find((s) => s.column === column);
       if (spring) return -((solved.final[column] as number) * scale * scale) / spring.stiffness;
-      const moved = solved.movements.find((m) => m.column === column);
-      return moved ? moved.value * scale : 0;
+      const moves = solved.movements.filter((m) => m.column === column);
+      return scale * moves.reduce((t, m) => t + m.value, 0);
     }
     const b = barOf.get(q.member) as number;
     const bar = eq.bars[b];

@@ -1,9 +1,94 @@
+import type { Analysis } from '@/lib/model/analysis';
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Solution } from '../solution';
-import { equilibrium } from '../statics/equilibrium';
+import { tolerance } from '../tolerance';
+import { chooser, groundOf } from './choose';
+import type { PrimaryBasis } from './self-stress';
 
-/** Every quantity that could be among the redundants: those of the structure that equilibrium alone does not fix. */
+/** A good set of redundants; the condition is that of its flexibility matrix scaled to a unit diagonal. */
+export interface GoodSet {
+  quantities: Quantity[];
+  condition: number;
+}
+
+/** Sets tried for one list; where there would be more, one redundant of the proposed set is exchanged at a time. */
+const mostTrials = 400;
+
+/** Good sets of redundants, best conditioned first, the proposed set among them. Empty when nothing is indeterminate. */
+export function listChoices(analysis: Analysis, most = 40): GoodSet[] {
+  const ground = groundOf(analysis);
+  if ('good' in ground || ground.proposed.redundants.length === 0) return [];
+  const { eq, proposed } = ground;
+  const name = (column: number) => eq.quantities[column] as Quantity;
+  const candidates = openForces(proposed).map((group) => group[0] as number);
+  const n = proposed.redundants.length;
+  const all = numberOfSubsets(candidates.length, n) <= mostTrials;
+  const sets = all ? subsets(candidates, n) : exchanges(proposed.redundants, candidates);
+  const ask = chooser(analysis);
+  const tried = [proposed.redundants, ...sets].slice(0, mostTrials).flatMap((set): GoodSet[] => {
+    const quantities = set.map(name);
+    const choice = ask(quantities);
+    return choice.good ? [{ quantities, condition: choice.condition }] : [];
+  });
+  const seen = new Set<string>();
+  return tried
+    .filter(({ quantities }) => {
+      const key = quantities.map(quantityKey).sort().join();
+      return !seen.has(key) && seen.add(key);
+    })
+    .sort((a, b) => a.condition - b.condition)
+    .slice(0, most);
+}
+
+/** Every force that may be a redundant, each once, those of the solution first. */
 export function proposedChoices(solution: Solution): Quantity[] {
-  const fixed = new Set(solution.fixed.map((f) => quantityKey(f.quantity)));
-  return equilibrium(solution.analysis).quantities.filter((q) => !fixed.has(quantityKey(q)));
+  const ground = groundOf(solution.analysis);
+  if ('good' in ground) return solution.redundants;
+  const { eq, proposed } = ground;
+  const chosen = new Set(solution.redundants.map((q) => eq.indexOf.get(quantityKey(q)) as number));
+  const others = openForces(proposed).flatMap((group) =>
+    group.some((q) => chosen.has(q)) ? [] : [eq.quantities[group[0] as number] as Quantity],
+  );
+  return [...solution.redundants, ...others];
+}
+
+/**
+ * Columns that some redundant changes, in groups that are one force: their values in all self-stress states stand in
+ * one ratio (the moments of two members at their joint, thrusts at the two ends of a portal). Redundants lead theirs.
+ */
+function openForces({ states, redundants }: PrimaryBasis): number[][] {
+  const rows = new Map<number, [number, number][]>();
+  states.forEach((state, i) => {
+    let top = 0;
+    for (const v of state.values()) top = Math.max(top, Math.abs(v));
+    for (const [q, v] of state) {
+      if (Math.abs(v) > tolerance.fixed * top) rows.set(q, [...(rows.get(q) ?? []), [i, v]]);
+    }
+  });
+  const first = new Set(redundants);
+  const columns = [...rows.keys()].sort((a, b) => Number(first.has(b)) - Number(first.has(a)) || a - b);
+  const groups = new Map<string, number[]>();
+  for (const q of columns) {
+    const row = rows.get(q) as [number, number][];
+    const lead = (row[0] as [number, number])[1];
+    const key = row.map(([i, v]) => `${i}:${(v / lead).toPrecision(8)}`).join();
+    groups.set(key, [...(groups.get(key) ?? []), q]);
+  }
+  return [...groups.values()];
+}
+
+function subsets(items: readonly number[], n: number): number[][] {
+  if (n === 0) return [[]];
+  return items.flatMap((first, i) => subsets(items.slice(i + 1), n - 1).map((rest) => [first, ...rest]));
+}
+
+function numberOfSubsets(of: number, n: number): number {
+  let count = 1;
+  for (let i = 0; i < n; i++) count = (count * (of - i)) / (i + 1);
+  return count;
+}
+
+function exchanges(set: readonly number[], candidates: readonly number[]): number[][] {
+  const others = candidates.filter((q) => !set.includes(q));
+  return set.flatMap((_, i) => others.map((other) => set.map((q, k) => (k === i ? other : q))));
 }

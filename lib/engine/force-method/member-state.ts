@@ -1,4 +1,3 @@
-import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import { memberForces } from '../diagrams/member-forces';
 import type { Equilibrium, LoadState } from '../statics/equilibrium';
 
@@ -18,15 +17,12 @@ export function endForces(
 ): EndForces {
   const bar = eq.bars[b];
   if (!bar) throw new Error('no such member');
-  const get = (q: Quantity, released: number) => {
-    const index = eq.indexOf.get(quantityKey(q));
-    return index === undefined ? released : value(index) * (eq.scale[index] as number);
-  };
-  const member = bar.member.id;
+  const get = (column: number, released: number) =>
+    column === -1 ? released : value(column) * (eq.scale[column] as number);
   return {
-    N: get({ kind: 'axial', member }, load === undefined ? 0 : (load.startAxial[b] as number)),
-    M0: get({ kind: 'moment', member, end: 'start' }, 0),
-    M1: get({ kind: 'moment', member, end: 'end' }, 0),
+    N: get(bar.N, load === undefined ? 0 : (load.startAxial[b] as number)),
+    M0: get(bar.M0, 0),
+    M1: get(bar.M1, 0),
   };
 }
 

@@ -1,155 +1,88 @@
 import type { LocalLoads } from '../diagrams/local-loads';
-import { memberForces } from '../diagrams/member-forces';
+import type { memberForces } from '../diagrams/member-forces';
 import { valueAt } from '../diagrams/piecewise';
+import { stretches } from '../diagrams/stretches';
 import type { Bar } from '../statics/equilibrium';
-import type { EndForces } from './member-state';
+import { cantileverShapes } from './cantilever-shapes';
+import { type Shape, triangle } from './part-shapes';
+import { pointShapes, spreadShapes } from './span-shapes';
 import type { MomentPart } from './work';
 
-type Shape = Omit<MomentPart, 'member' | 'due'>;
+type Due = MomentPart['due'];
 
-/** Areas and centroids: triangle 1/2, parabola 2/3, spandrel 1/3 (AISC Manual, Table 17-27 as recalled; integrated). */
-function triangle(from: number, to: number, height: number, tall: 'start' | 'end'): Shape {
-  const l = to - from;
-  const centroid = tall === 'start' ? from + l / 3 : to - l / 3;
-  return {
-    shape: 'triangle',
-    from,
-    to,
-    tall,
-    height,
-    factor: { n: 1, d: 2 },
-    area: (l * height) / 2,
-    centroid,
-  };
-}
-
-function parabola(from: number, to: number, height: number): Shape {
-  const l = to - from;
-  return {
-    shape: 'parabola',
-    from,
-    to,
-    tall: 'peak',
-    height,
-    factor: { n: 2, d: 3 },
-    area: (2 * l * height) / 3,
-    centroid: from + l / 2,
-  };
-}
-
-/** Simple span under a load rising from 0 to w: M = (w l²/6)(x − x³), x = s/l; height w l²/6, area 1/4, centroid 8/15. */
-function cubic(from: number, to: number, height: number, tall: 'start' | 'end'): Shape {
-  const l = to - from;
-  const centroid = tall === 'end' ? from + (8 / 15) * l : to - (8 / 15) * l;
-  return { shape: 'cubic', from, to, tall, height, factor: { n: 1, d: 4 }, area: (l * height) / 4, centroid };
-}
-
-function spandrel(from: number, to: number, height: number, tall: 'start' | 'end'): Shape {
-  const l = to - from;
-  const centroid = tall === 'end' ? to - l / 4 : from + l / 4;
-  return {
-    shape: 'spandrel',
-    from,
-    to,
-    tall,
-    height,
-    factor: { n: 1, d: 3 },
-    area: (l * height) / 3,
-    centroid,
-  };
-}
+/** Below this part of the largest moment a shape is rounding. */
+const negligible = 1e-11;
 
 /**
- * The primary moment diagram of one member as a sum of named shapes: what the end moments draw, and for each load what
- * it draws on the simple span; a uniform load on a member with a free end is one spandrel from the support.
+ * The primary moment diagram of one member as a sum of named shapes. A member that hangs from one end: what each load
+ * draws on the cantilever. Any other, and each length of a stepped member for itself: the moments at its ends as two
+ * triangles, and what each load draws on the simple span.
  */
-export function momentParts(bar: Bar, ends: EndForces, loads: LocalLoads): MomentPart[] {
-  const { L } = bar.axis;
-  const member = bar.member.id;
-  const free = freeEndSpandrel(ends, loads, L);
-  if (free) return [{ member, ...free.shape, due: { kind: 'load', index: free.index } }];
-  const parts: MomentPart[] = [];
-  const size = Math.max(Math.abs(ends.M0), Math.abs(ends.M1), largest(loads, L));
-  const small = 1e-11 * size;
-  if (Math.abs(ends.M0) > small)
-    parts.push({ member, ...triangle(0, L, ends.M0, 'start'), due: { kind: 'end-moment', end: 'start' } });
-  if (Math.abs(ends.M1) > small)
-    parts.push({ member, ...triangle(0, L, ends.M1, 'end'), due: { kind: 'end-moment', end: 'end' } });
-  for (const w of loads.spread) {
-    for (const shape of spreadShapes(w, L))
-      parts.push({ member, ...shape, due: { kind: 'load', index: w.index } });
-  }
-  for (const p of loads.points) {
-    for (const shape of pointShapes(p, L))
-      parts.push({ member, ...shape, due: { kind: 'load', index: p.index } });
-  }
-  return parts.filter((p) => Math.abs(p.height) > small);
-}
-
-function spreadShapes(w: LocalLoads['spread'][number], L: number): Shape[] {
-  const { M } = memberForces({ N: 0, M0: 0, M1: 0 }, { spread: [w], points: [] }, L);
-  const l = w.to - w.from;
-  const shapes: Shape[] = [];
-  const [a, b] = [valueAt(M, w.from), valueAt(M, w.to, 'left')];
-  if (w.from > 0) shapes.push(triangle(0, w.from, a, 'end'));
-  if (w.from > 0) shapes.push(triangle(w.from, w.to, a, 'start'));
-  if (w.to < L) shapes.push(triangle(w.from, w.to, b, 'end'));
-  if (w.to < L) shapes.push(triangle(w.to, L, b, 'start'));
-  const [q1, q2] = w.across;
-  const even = Math.abs(q1) < Math.abs(q2) ? q1 : q2;
-  if (q1 * q2 > 0 || q1 === q2) {
-    if (even !== 0) shapes.push(parabola(w.from, w.to, (-even * l * l) / 8));
-    if (q2 - even !== 0) shapes.push(cubic(w.from, w.to, (-(q2 - even) * l * l) / 6, 'end'));
-    if (q1 - even !== 0) shapes.push(cubic(w.from, w.to, (-(q1 - even) * l * l) / 6, 'start'));
-    return shapes;
-  }
-  if (q2 !== 0) shapes.push(cubic(w.from, w.to, (-q2 * l * l) / 6, 'end'));
-  if (q1 !== 0) shapes.push(cubic(w.from, w.to, (-q1 * l * l) / 6, 'start'));
-  return shapes;
-}
-
-function pointShapes(p: LocalLoads['points'][number], L: number): Shape[] {
-  const shapes: Shape[] = [];
-  const { at: a } = p;
-  const force = (-p.across * a * (L - a)) / L;
-  if (force !== 0) {
-    shapes.push({
-      shape: 'triangle',
-      from: 0,
-      to: L,
-      tall: 'peak',
-      height: force,
-      factor: { n: 1, d: 2 },
-      area: (L * force) / 2,
-      centroid: (L + a) / 3,
-    });
-  }
-  if (p.couple !== 0) {
-    if (a > 0) shapes.push(triangle(0, a, (p.couple * a) / L, 'end'));
-    if (a < L) shapes.push(triangle(a, L, (-p.couple * (L - a)) / L, 'start'));
-  }
-  return shapes;
-}
-
-function freeEndSpandrel(
-  ends: EndForces,
+export function momentParts(
+  bar: Bar,
+  forces: ReturnType<typeof memberForces>,
   loads: LocalLoads,
-  L: number,
-): { shape: Shape; index: number } | undefined {
-  const [w, ...more] = loads.spread;
-  if (!w || more.length > 0 || loads.points.length > 0 || w.from > 0 || w.to < L) return undefined;
-  const q = w.across[0];
-  if (q === 0 || w.across[1] !== q) return undefined;
-  const full = (q * L * L) / 2;
-  const near = (x: number, y: number) => Math.abs(x - y) <= 1e-11 * Math.abs(full);
-  if (near(ends.M1, 0) && near(ends.M0, full))
-    return { shape: spandrel(0, L, full, 'start'), index: w.index };
-  if (near(ends.M0, 0) && near(ends.M1, full)) return { shape: spandrel(0, L, full, 'end'), index: w.index };
-  return undefined;
+): MomentPart[] {
+  const { L } = bar.axis;
+  const { M, V } = forces;
+  const size = largest(M, loads, L);
+  if (size === 0) return [];
+  const named = (shapes: { shape: Shape; due: Due }[]): MomentPart[] =>
+    shapes.flatMap(({ shape, due }) =>
+      Math.abs(shape.height) > negligible * size ? [{ member: bar.member.id, ...shape, due }] : [],
+    );
+  if (bar.member.steps === undefined) {
+    const free = (end: 'start' | 'end') => {
+      const [s, side] = end === 'start' ? ([0, 'right'] as const) : ([L, 'left'] as const);
+      const small = negligible * size;
+      return Math.abs(valueAt(M, s, side)) <= small && Math.abs(valueAt(V, s, side)) * L <= small;
+    };
+    // A load on the very end that leaves no force behind it goes into the joint and bends nothing.
+    const beyond = (end: number) => ({ ...loads, points: loads.points.filter((p) => p.at !== end) });
+    if (free('start')) return named(cantileverShapes(beyond(0), L, 'end'));
+    if (free('end')) return named(cantileverShapes(beyond(L), L, 'start'));
+  }
+  return stretches(bar.member, L).flatMap(({ from, to }) =>
+    named([...endShapes(M, from, to), ...loadShapes(loads, from, to)]),
+  );
 }
 
-function largest(loads: LocalLoads, L: number): number {
-  const spread = loads.spread.map((w) => Math.max(Math.abs(w.across[0]), Math.abs(w.across[1])) * L * L);
-  const points = loads.points.map((p) => Math.abs(p.across) * L + Math.abs(p.couple));
-  return Math.max(0, ...spread, ...points);
+function endShapes(M: ReturnType<typeof memberForces>['M'], from: number, to: number) {
+  const start = { kind: 'end-moment', end: 'start' } as const;
+  const end = { kind: 'end-moment', end: 'end' } as const;
+  return [
+    { shape: triangle(from, to, valueAt(M, from), 'start'), due: start },
+    { shape: triangle(from, to, valueAt(M, to, 'left'), 'end'), due: end },
+  ];
+}
+
+/** What the loads between two places draw on a simple span between them. */
+function loadShapes(loads: LocalLoads, from: number, to: number): { shape: Shape; due: Due }[] {
+  const spread = loads.spread.flatMap((w) => {
+    const [a, b] = [Math.max(w.from, from), Math.min(w.to, to)];
+    if (a >= b) return [];
+    const at = (s: number) => w.across[0] + ((w.across[1] - w.across[0]) * (s - w.from)) / (w.to - w.from);
+    const ends: [number, number] = [a === w.from ? w.across[0] : at(a), b === w.to ? w.across[1] : at(b)];
+    return spreadShapes({ from: a, to: b, across: ends }, from, to).map((shape) => ({
+      shape,
+      due: { kind: 'load' as const, index: w.index },
+    }));
+  });
+  const points = loads.points
+    .filter((p) => p.at > from && p.at < to)
+    .flatMap((p) =>
+      pointShapes(p, from, to).map((shape) => ({ shape, due: { kind: 'load' as const, index: p.index } })),
+    );
+  return [...spread, ...points];
+}
+
+function largest(M: ReturnType<typeof memberForces>['M'], loads: LocalLoads, L: number): number {
+  let size = 0;
+  for (const p of M) size = Math.max(size, Math.abs(p.c[0] as number), Math.abs(valueAt([p], p.to, 'left')));
+  for (const w of loads.spread) {
+    const l = Math.min(L, w.to) - w.from;
+    size = Math.max(size, Math.max(Math.abs(w.across[0]), Math.abs(w.across[1])) * l * l);
+  }
+  for (const p of loads.points) size = Math.max(size, Math.abs(p.across) * L, Math.abs(p.couple));
+  return size;
 }

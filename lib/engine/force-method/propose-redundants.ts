@@ -1,35 +1,40 @@
 import type { Quantity } from '@/lib/model/quantity';
 import type { Equilibrium } from '../statics/equilibrium';
-import { writeStatics } from '../statics/write-statics';
-import { type PrimaryBasis, primaryBasis, proposalOrder } from './self-stress';
+import { planStatics } from '../statics/plan-statics';
+import { proposalOrder, sweepOrder } from './proposal-order';
+import { type PrimaryBasis, primaryBasis, writtenRedundants } from './self-stress';
 
 /**
  * The set that the engine proposes. Continuous beams: moments over the supports, so that the three-moment equation
  * appears by itself. A frame with one redundant: the thrust at its last base, as it is done by hand. Other frames:
- * hinges. Every set is checked to leave a stable primary structure.
+ * hinges; where a person could not find the forces of that structure one at a time, reactions from the last base
+ * backwards. Large frames: what is left over joint by joint from the ground up.
  */
 export function proposeRedundants(eq: Equilibrium): PrimaryBasis {
   const hinges = primaryBasis(eq, proposalOrder(eq));
-  if (isBeam(eq) || hinges.redundants.length === 0) return hinges;
+  if (!hinges) return primaryBasis(eq, sweepOrder(eq), true) as PrimaryBasis;
+  const n = hinges.redundants.length;
+  if (n === 0 || n > writtenRedundants || hinges.unstable || hinges.open.length > 0 || isBeam(eq))
+    return hinges;
+  const thrust = n === 1 ? lastThrust(eq) : undefined;
+  if (thrust && canBeWritten(eq, thrust)) return thrust;
+  if (canBeWritten(eq, hinges)) return hinges;
   const bases = primaryBasis(eq, basesLast(eq));
-  const thrust = hinges.redundants.length === 1 ? lastThrust(eq) : undefined;
-  return [thrust, hinges, bases].find((b) => b !== undefined && canBeWritten(eq, b)) ?? hinges;
+  return bases && canBeWritten(eq, bases) ? bases : hinges;
 }
 
 /** Whether a person could find the forces of the primary structure one unknown at a time. */
 function canBeWritten(eq: Equilibrium, basis: PrimaryBasis): boolean {
-  if (basis.redundants.length > 12) return true;
   const names = basis.redundants.map((q) => eq.quantities[q] as Quantity);
-  return basis.redundants.every(
-    (_, redundant) => writeStatics(eq, names, { kind: 'unit', redundant }).length > 0,
-  );
+  const plan = planStatics(eq, names);
+  return plan?.steps.every((s) => s.kind === 'equation') === true;
 }
 
 function lastThrust(eq: Equilibrium): PrimaryBasis | undefined {
   const thrust = eq.quantities.findLastIndex((q) => q.kind === 'reaction' && q.component === 'x');
   if (thrust === -1) return undefined;
   const basis = primaryBasis(eq, [...proposalOrder(eq).filter((q) => q !== thrust), thrust]);
-  return basis.redundants[0] === thrust ? basis : undefined;
+  return basis?.redundants[0] === thrust ? basis : undefined;
 }
 
 /** Reactions from the last support backwards are left over first: the frame stands as a cantilever on its first base. */

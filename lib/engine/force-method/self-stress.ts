@@ -1,76 +1,123 @@
-import type { Analysis } from '@/lib/model/analysis';
-import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Equilibrium } from '../statics/equilibrium';
-import { factorColumns, type SparseLu, solveBasis } from '../statics/sparse-lu';
+import { solveBasis } from '../statics/solve-lu';
+import { factorColumns, type SparseLu } from '../statics/sparse-lu';
 import { tolerance } from '../tolerance';
+import { localStates } from './local-states';
+import { isRigidAlong } from './proposal-order';
 
-/** A primary structure: the quantities kept, the redundants, and every unit state Xi = 1 in scaled quantities. */
+/** Forces in equilibrium without load, in scaled quantities by column; sparse. */
+export type SelfStress = Map<number, number>;
+
+/** A primary structure: the quantities kept, the redundants, and the self-stress states that close its gaps. */
 export interface PrimaryBasis {
   lu: SparseLu;
+  /** X1, X2, …; axial forces that bending cannot determine are not among them. */
   redundants: number[];
-  /** units[i][q]: scaled quantity q under Xi = 1 (scaled); sparse. */
-  units: Map<number, number>[];
+  /** As many independent states as redundants: states[i] is Xi = 1 (scaled), or a local one when `local`. */
+  states: SelfStress[];
+  /** More redundants than are written out, and unit states that reach far: states around single cells stand for them. */
+  local: boolean;
+  /** Something can move: there are no states. */
+  unstable: boolean;
+  /** Purely axial states of members that do not stretch; the force of `column` is taken as zero. */
+  open: { column: number; state: SelfStress }[];
 }
 
-/** Factors the matrix keeping columns in the order given; what is left over are the redundants. */
-export function primaryBasis(eq: Equilibrium, order: readonly number[]): PrimaryBasis {
-  const lu = factorColumns(eq.columns, order, eq.rowCount, tolerance.pivot);
-  const units = lu.aside.map((k) => {
-    const right = new Float64Array(eq.rowCount);
-    const column = eq.columns[k];
-    column?.rows.forEach((r, i) => {
-      right[r] = -(column.values[i] as number);
-    });
-    const { z } = solveBasis(lu, right);
-    const largest = z.reduce((m, v) => Math.max(m, Math.abs(v)), 1);
-    const state = new Map([[k, 1]]);
-    lu.basis.forEach((q, i) => {
-      const value = z[i] as number;
-      if (Math.abs(value) > tolerance.fixed * 1e-3 * largest) state.set(q, value);
-    });
-    return state;
-  });
-  return { lu, redundants: lu.aside, units };
-}
+/** Up to here every state, shape and line of statics is written out; beyond it the results stand alone. */
+export const writtenRedundants = 30;
 
-/** Column numbers of quantities that no redundant changes. */
-export function fixedQuantities(eq: Equilibrium, basis: PrimaryBasis): number[] {
-  const largest = new Map<number, number>();
-  for (const unit of basis.units) {
-    const top = Math.max(...[...unit.values()].map(Math.abs));
-    for (const [q, v] of unit) largest.set(q, Math.max(largest.get(q) ?? 0, Math.abs(v) / top));
-  }
-  return eq.quantities.map((_, q) => q).filter((q) => (largest.get(q) ?? 0) <= tolerance.fixed);
-}
+/** Beyond `writtenRedundants`, quantities that a unit state may reach on average before local ones take its place. */
+const widestStates = 16;
 
 /**
- * The order in which quantities are kept when the engine proposes the redundants: axial forces and reaction forces
- * first, then end moments that nobody would release (free ends), then moments from the ends of the structure inward;
- * so that what is left over are, as far as possible, hinges over inner supports and at corners.
+ * Factors the matrix keeping columns in the order given; what is left over are the redundants. Undefined when their unit
+ * states reach too far to be used; `local` asks for states around single cells instead.
  */
-export function proposalOrder(eq: Equilibrium): number[] {
-  const rank = (q: Quantity): number => {
-    switch (q.kind) {
-      case 'axial':
-        return 0;
-      case 'reaction':
-        return q.component === 'turn' ? 5 : 1;
-      case 'moment':
-        return meetsSupport(eq.analysis, q) ? 4 : 2;
-    }
-  };
+export function primaryBasis(
+  eq: Equilibrium,
+  order: readonly number[],
+  local = false,
+): PrimaryBasis | undefined {
+  const lu = factorColumns(eq.columns, order, eq.rowCount, tolerance.pivot);
+  const unstable = lu.freeRows.some((r) => !eq.trivialRows.has(r));
+  const open: PrimaryBasis['open'] = [];
+  const redundants: number[] = [];
+  const rigid = isRigidAlong(eq);
+  const keptSoft = new Set(lu.basis.filter((q) => !rigid(q)));
+  for (const k of lu.aside) {
+    const state = rigid(k) ? unitState(eq, lu, k) : undefined;
+    const closed = state && [...state.keys()].every((q) => !keptSoft.has(q));
+    if (state && closed && eq.quantities[k]?.kind === 'axial') open.push({ column: k, state });
+    else redundants.push(k);
+  }
+  if (unstable) return { lu, redundants, states: [], local, unstable, open };
+  if (local) return { lu, redundants, states: localStates(eq, order, redundants), local, unstable, open };
+  const states: SelfStress[] = [];
+  let entries = 0;
+  for (const k of redundants) {
+    const state = unitState(eq, lu, k);
+    states.push(state);
+    entries += state.size;
+    if (redundants.length > writtenRedundants && entries > widestStates * redundants.length) return undefined;
+  }
+  return { lu, redundants, states, local, unstable, open };
+}
+
+/** The kept quantities under a unit of the one set aside. */
+function unitState(eq: Equilibrium, lu: SparseLu, k: number): SelfStress {
+  const right = new Float64Array(eq.rowCount);
+  const column = eq.columns[k];
+  column?.rows.forEach((r, i) => {
+    right[r] = -(column.values[i] as number);
+  });
+  const { z } = solveBasis(lu, right);
+  return sparseState(lu.basis, z, k);
+}
+
+/** The state without entries that are rounding only. */
+export function sparseState(columns: readonly number[], z: ArrayLike<number>, unit: number): SelfStress {
+  let largest = 1;
+  for (let i = 0; i < z.length; i++) largest = Math.max(largest, Math.abs(z[i] as number));
+  const state: SelfStress = new Map([[unit, 1]]);
+  for (let i = 0; i < z.length; i++)
+    if (Math.abs(z[i] as number) > tolerance.entry * largest) state.set(columns[i] as number, z[i] as number);
+  return state;
+}
+
+/** Scaled quantities of the primary structure under what loads bring to the rows, the redundants zero. */
+export function primaryForces(eq: Equilibrium, basis: PrimaryBasis, rows: Float64Array): Float64Array {
+  const { z } = solveBasis(
+    basis.lu,
+    rows.map((v) => -v),
+  );
+  const forces = new Float64Array(eq.quantities.length);
+  basis.lu.basis.forEach((q, i) => {
+    forces[q] = z[i] as number;
+  });
+  if (basis.local) return forces;
+  const excess = basis.redundants.map((q) => forces[q] as number);
+  excess.forEach((value, i) => {
+    if (value !== 0) addState(forces, basis.states[i] as SelfStress, -value);
+    forces[basis.redundants[i] as number] = 0;
+  });
+  return forces;
+}
+
+/** forces += factor × state */
+export function addState(forces: Float64Array, state: SelfStress, factor: number): void {
+  for (const [q, v] of state) forces[q] = (forces[q] as number) + factor * v;
+}
+
+/** Column numbers of quantities that no redundant changes, those of open axial states left aside. */
+export function fixedQuantities(eq: Equilibrium, basis: PrimaryBasis): number[] {
+  const largest = new Float64Array(eq.quantities.length);
+  for (const state of basis.states) {
+    let top = 0;
+    for (const v of state.values()) top = Math.max(top, Math.abs(v));
+    for (const [q, v] of state) largest[q] = Math.max(largest[q] as number, Math.abs(v) / top);
+  }
+  const open = new Set(basis.open.flatMap((o) => [...o.state.keys()]));
   return eq.quantities
-    .map((q, i) => ({ i, rank: rank(q) }))
-    .sort((a, b) => a.rank - b.rank || a.i - b.i)
-    .map((e) => e.i);
-}
-
-function meetsSupport(analysis: Analysis, q: Extract<Quantity, { kind: 'moment' }>): boolean {
-  const member = analysis.members.find((m) => m.id === q.member);
-  const joint = analysis.joints.find((j) => j.id === (q.end === 'start' ? member?.start : member?.end));
-  return joint?.support !== undefined;
-}
-
-export function columnsOf(eq: Equilibrium, quantities: readonly Quantity[]): (number | undefined)[] {
-  return quantities.map((q) => eq.indexOf.get(quantityKey(q)));
+    .map((_, q) => q)
+    .filter((q) => (largest[q] as number) <= tolerance.fixed && !open.has(q));
 }

@@ -1,3 +1,4 @@
+import type { LocalLoads } from '../diagrams/local-loads';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
 import { stretches } from '../diagrams/stretches';
 import type { Bar } from '../statics/equilibrium';
@@ -56,12 +57,14 @@ export function bendingRows(bar: Bar, i: UnitMoments, j: UnitMoments, EI0: numbe
   );
 }
 
-/** ∫ m̄_i M_0 / k: the area of each part times the ordinate of m̄_i at its centroid; members without steps only. */
+/** ∫ m̄_i M_0 / k: the area of each part times the ordinate of m̄_i at its centroid; a part lies within one stiffness. */
 export function partRows(bar: Bar, i: UnitMoments, parts: readonly MomentPart[], EI0: number): WorkRow[] {
-  const k = bar.member.EI / EI0;
+  const own = stretches(bar.member, bar.axis.L);
   return parts.map((part): WorkRow => {
     const ordinate = at(i, part.centroid, bar.axis.L);
     const { from, to, shape, height, area, centroid, due } = part;
+    const stretch = own.findLast((s) => s.from <= from) ?? own[0];
+    const k = (stretch?.EI ?? bar.member.EI) / EI0;
     return {
       kind: 'bending',
       member: bar.member.id,
@@ -77,6 +80,29 @@ export function partRows(bar: Bar, i: UnitMoments, parts: readonly MomentPart[],
       due,
     };
   });
+}
+
+/** What warmth and lack of fit add: EI0 N̄ α T L, EI0 N̄ d and EI0 (area of m̄) κ. */
+export function strainRows(
+  bar: Bar,
+  unit: { N: number; m0: number; m1: number },
+  local: Pick<LocalLoads, 'strain' | 'curvature' | 'misfit'>,
+  EI0: number,
+): WorkRow[] {
+  const { L } = bar.axis;
+  const { id: member, alpha } = bar.member;
+  const { strain, curvature, misfit } = local;
+  const rows: WorkRow[] = [];
+  if (strain !== 0 && unit.N !== 0 && alpha !== undefined) {
+    const value = EI0 * unit.N * strain * L;
+    rows.push({ kind: 'temperature', member, unit: unit.N, alpha, rise: strain / alpha, length: L, value });
+  }
+  if (misfit !== 0 && unit.N !== 0)
+    rows.push({ kind: 'misfit', member, unit: unit.N, misfit, value: EI0 * unit.N * misfit });
+  const area = ((unit.m0 + unit.m1) * L) / 2;
+  if (curvature !== 0 && area !== 0)
+    rows.push({ kind: 'gradient', member, area, curvature, value: EI0 * area * curvature });
+  return rows;
 }
 
 /** EI0 Σ N̄ N L/EA and EI0 Σ V̄ V L/GAs of a member whose unit state has constant N̄ and V̄. */

@@ -1,17 +1,12 @@
+import { openMembers } from '../force-method/open-axial';
 import type { PrimaryBasis } from '../force-method/self-stress';
-import type { SolvedForces } from '../force-method/solve-redundants';
 import type { Determinacy } from '../solution';
 import { tolerance } from '../tolerance';
 import type { Equilibrium } from './equilibrium';
 
 /** The count of the structure and the rank of its equilibrium matrix. */
-export function describeDeterminacy(eq: Equilibrium, basis: PrimaryBasis, solved: SolvedForces): Determinacy {
+export function describeDeterminacy(eq: Equilibrium, basis: PrimaryBasis): Determinacy {
   const { joints, members } = eq.analysis;
-  const open = solved.cases.values().next().value?.open ?? new Set<number>();
-  const openAxial = new Set<string>();
-  for (const i of open) {
-    for (const b of solved.units[i]?.members.keys() ?? []) openAxial.add(eq.bars[b]?.member.id as string);
-  }
   return {
     members: members.length,
     joints: joints.length,
@@ -23,9 +18,9 @@ export function describeDeterminacy(eq: Equilibrium, basis: PrimaryBasis, solved
     unknowns: eq.quantities.length,
     equations: eq.rowCount - eq.trivialRows.size,
     rank: basis.lu.basis.length,
-    degree: basis.redundants.length,
-    bendingDegree: basis.redundants.length - open.size,
-    openAxial: [...openAxial],
+    degree: basis.redundants.length + basis.open.length,
+    bendingDegree: basis.redundants.length,
+    openAxial: openMembers(eq, basis),
     smallestPivot: basis.lu.smallestPivot,
     tolerance: tolerance.pivot,
   };

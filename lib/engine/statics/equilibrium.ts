@@ -6,12 +6,15 @@ import { type LocalLoads, localLoads, type MemberAxis, memberAxis } from '../dia
 import { loadEndForces } from '../diagrams/member-forces';
 import type { SparseColumn } from './sparse-lu';
 
-/** A member with what statics needs of it. */
+/** A member with what statics needs of it: its joints, and the columns of N, M0 and M1 (−1 where released). */
 export interface Bar {
   member: Member;
   axis: MemberAxis;
   start: number;
   end: number;
+  N: number;
+  M0: number;
+  M1: number;
 }
 
 /**
@@ -24,6 +27,8 @@ export interface Equilibrium {
   bars: Bar[];
   quantities: Quantity[];
   indexOf: Map<string, number>;
+  /** Member of every column, −1 for reactions. */
+  barOf: number[];
   columns: SparseColumn[];
   rowCount: number;
   /** Rows that no force of the structure can enter: a hinge where nothing could turn. */
@@ -43,7 +48,7 @@ export function equilibrium(analysis: Analysis): Equilibrium {
     const end = place.get(member.end) as number;
     const [a, b] = [analysis.joints[start], analysis.joints[end]];
     if (!a || !b) throw new Error(`member ${member.id} has no joint`);
-    return { member, axis: memberAxis(a, b), start, end };
+    return { member, axis: memberAxis(a, b), start, end, N: -1, M0: -1, M1: -1 };
   });
   const length = bars.reduce((sum, b) => sum + b.axis.L, 0) / bars.length;
   const releases = bars.flatMap((b) =>
@@ -54,6 +59,7 @@ export function equilibrium(analysis: Analysis): Equilibrium {
     bars,
     quantities: [],
     indexOf: new Map(),
+    barOf: [],
     columns: [],
     rowCount: 3 * analysis.joints.length + releases.length,
     trivialRows: new Set(),
@@ -63,7 +69,9 @@ export function equilibrium(analysis: Analysis): Equilibrium {
   const rowOf = new Map(
     releases.map(({ b, e }, i) => [`${b.member.id}:${e}`, 3 * analysis.joints.length + i]),
   );
-  for (const bar of bars) addMember(eq, bar, rowOf);
+  bars.forEach((_, b) => {
+    addMember(eq, b, rowOf);
+  });
   analysis.joints.forEach((joint, j) => {
     const s = joint.support;
     if (!s) return;
@@ -81,35 +89,48 @@ export function equilibrium(analysis: Analysis): Equilibrium {
     if (s.turn !== 'free')
       push(eq, { kind: 'reaction', joint: joint.id, component: 'turn' }, length, [[3 * j + 2, 1]]);
   });
-  const used = new Set(eq.columns.flatMap((c) => c.rows));
-  for (let r = 0; r < eq.rowCount; r++) if (!used.has(r)) eq.trivialRows.add(r);
+  const used = new Uint8Array(eq.rowCount);
+  for (const { rows } of eq.columns) for (const r of rows) used[r] = 1;
+  for (let r = 2; r < 3 * analysis.joints.length; r += 3) if (used[r] === 0) eq.trivialRows.add(r);
   return eq;
 }
 
-function push(eq: Equilibrium, quantity: Quantity, scale: number, entries: [number, number][]): void {
-  const kept = entries.filter(([, v]) => Math.abs(v) > 1e-15);
-  eq.indexOf.set(quantityKey(quantity), eq.quantities.length);
+function push(
+  eq: Equilibrium,
+  quantity: Quantity,
+  scale: number,
+  entries: readonly [number, number][],
+  bar = -1,
+): number {
+  const column = eq.quantities.length;
+  const largest = entries.reduce((m, [, v]) => Math.max(m, Math.abs(v)), 0);
+  const kept = entries.filter(([, v]) => Math.abs(v) > 1e-15 * largest);
+  eq.indexOf.set(quantityKey(quantity), column);
   eq.quantities.push(quantity);
   eq.scale.push(scale);
+  eq.barOf.push(bar);
   eq.columns.push({ rows: kept.map(([r]) => r), values: kept.map(([, v]) => v) });
+  return column;
 }
 
 /**
  * Member forces on its joints. N pulls both joints together; the shear (M1 − M0)/L that end moments bring acts on the
  * start by −V and on the end by +V across; M0 turns the start by +M0 and M1 the end by −M1.
  */
-function addMember(eq: Equilibrium, bar: Bar, rowOf: ReadonlyMap<string, number>): void {
+function addMember(eq: Equilibrium, b: number, rowOf: ReadonlyMap<string, number>): void {
+  const bar = eq.bars[b] as Bar;
   const { member, axis, start, end } = bar;
   const { c, s, L } = axis;
   const released = (at: 'start' | 'end', what: 'moment' | 'axial') =>
     member.releases?.[at].includes(what) === true;
   if (!released('start', 'axial') && !released('end', 'axial')) {
-    push(eq, { kind: 'axial', member: member.id }, 1, [
+    const entries: [number, number][] = [
       [3 * start, c],
       [3 * start + 1, s],
       [3 * end, -c],
       [3 * end + 1, -s],
-    ]);
+    ];
+    bar.N = push(eq, { kind: 'axial', member: member.id }, 1, entries, b);
   }
   const shear = eq.length / L;
   for (const at of ['start', 'end'] as const) {
@@ -126,7 +147,9 @@ function addMember(eq: Equilibrium, bar: Bar, rowOf: ReadonlyMap<string, number>
       const row = rowOf.get(`${member.id}:${e}`);
       if (row !== undefined) entries.push([row, v]);
     }
-    push(eq, { kind: 'moment', member: member.id, end: at }, eq.length, entries);
+    const column = push(eq, { kind: 'moment', member: member.id, end: at }, eq.length, entries, b);
+    if (at === 'start') bar.M0 = column;
+    else bar.M1 = column;
   }
 }
 

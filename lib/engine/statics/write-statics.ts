@@ -1,144 +1,130 @@
-import type { Quantity } from '@/lib/model/quantity';
-import type { Equilibrium } from './equilibrium';
-import { type Action, type Body, type BodyForce, rigidBodies } from './rigid-body';
+import { type Action, actingForces } from './acting-forces';
+import { coefficient, negligible } from './equilibrium-sums';
+import type { Equation, StaticsPlan } from './plan-statics';
+import type { BodyForce } from './rigid-body';
+import { solveTogether } from './simultaneous';
 import type { StaticsLine, StaticsTerm } from './statics-line';
 
-type Sum = Extract<StaticsLine, { kind: 'equation' }>['sum'];
+/** A sum of terms below this part of the largest of them is rounding. */
+const rounding = 1e-13;
 
-/** Arms and cosines below this part of a member length count as none. */
-const none = 1e-9;
+/** Beyond so many unknowns, those that are zero because nothing acts near them are not written. */
+const mostZeros = 16;
 
 /**
- * How a person finds the forces of a determinate structure: again and again an equation with one unknown, on the whole
- * or on a piece of it, moments about a joint before sums of forces; the equation left over on the whole is the check.
- * Empty when a cut along a member is among the redundants, or when no such order exists; tables then stand alone.
+ * The lines of one state of a primary structure in the order of its plan, then an equation of the whole that was not
+ * needed, as the check. Empty when a load stands on a bar that is cut, or has no resultant.
  */
-export function writeStatics(
-  eq: Equilibrium,
-  redundants: readonly Quantity[],
-  action: Action,
-): StaticsLine[] {
-  const bodies = rigidBodies(eq, redundants, action);
-  if (!bodies) return [];
+export function writeStatics(plan: StaticsPlan, action: Action): StaticsLine[] {
+  const acting = actingForces(plan.bodies, action);
+  if (!acting) return [];
+  const outside = [...acting.values()].flatMap((list) => list.filter((f) => f.outer));
   const known = new Map<string, number>();
+  const sides = (e: Equation) => acting.get(e.body) ?? outside;
+  const quiet = plan.steps.length > mostZeros;
   const lines: StaticsLine[] = [];
-  const whole = join(bodies);
-  const tries = bodies.length === 1 ? [whole] : [whole, ...bodies];
-  const unknowns = new Set(
-    bodies.flatMap((b) => b.forces.filter((f) => f.value === undefined).map((f) => f.key)),
-  );
-  const used = new Set<string>();
-  while (known.size < unknowns.size) {
-    const found = nextLine(eq, tries, known, used);
-    if (!found) return [];
-    known.set(found.key, found.line.value);
-    lines.push(found.line);
+  for (const step of plan.steps) {
+    if (step.kind === 'equation') {
+      const line = writeEquation(plan, step.equation, step.unknown, sides(step.equation), known);
+      known.set(step.unknown, line.value);
+      if (!quiet || line.value !== 0 || line.terms.length > 1) lines.push(line);
+      continue;
+    }
+    const sought = new Set(step.unknowns);
+    const written = step.equations.map((e) => termsOf(plan, e, sides(e), known, sought));
+    const rights = written.map((terms) => total(terms.filter((t) => !sought.has(t.key))));
+    const values = solveTogether(step.equations, step.unknowns, rights);
+    step.unknowns.forEach((k, i) => {
+      known.set(k, values[i] as number);
+    });
+    if (quiet && values.every((v) => v === 0)) continue;
+    lines.push({
+      kind: 'simultaneous',
+      equations: step.equations.map((e) => ({
+        piece: e.body.members,
+        sum: e.sum,
+        terms: strip(termsOf(plan, e, sides(e), known, sought)),
+      })),
+      unknowns: step.unknowns.map((k) => ({ of: ofKey(plan, k), value: known.get(k) as number })),
+    });
   }
-  const check = leftOver(eq, whole, known, used);
-  return check ? [...lines, check] : lines;
+  return [...lines, ...check(plan, outside, known)];
 }
 
-function join(bodies: readonly Body[]): Body {
-  const forces = bodies
-    .flatMap((b) => b.forces)
-    .filter((f) => !f.key.startsWith('interface:') && !f.key.startsWith('unit:'));
-  const units = bodies.flatMap((b) => b.forces.filter((f) => f.of.kind === 'unit' && f.couple === undefined));
-  const turning = bodies.flatMap((b) =>
-    b.forces.filter((f) => f.of.kind === 'unit' && f.couple !== undefined && !f.key.startsWith('unit:')),
-  );
-  const kept = forces.filter((f) => f.of.kind !== 'unit');
-  return { members: bodies.flatMap((b) => b.members), forces: [...kept, ...units, ...turning] };
+type Term = StaticsTerm & { key: string };
+
+function writeEquation(
+  plan: StaticsPlan,
+  e: Equation,
+  unknown: string,
+  acting: readonly BodyForce[],
+  known: ReadonlyMap<string, number>,
+): Extract<StaticsLine, { kind: 'equation' }> {
+  const terms = termsOf(plan, e, acting, known, new Set([unknown]));
+  const rest = total(terms.filter((t) => t.key !== unknown));
+  const value = rest === 0 ? 0 : -rest / (e.coefficients.get(unknown) as number);
+  const written = terms.map((t) => (t.key === unknown ? { ...t, value } : t));
+  return {
+    kind: 'equation',
+    piece: e.body.members,
+    sum: e.sum,
+    terms: strip(written),
+    unknown: ofKey(plan, unknown),
+    value,
+  };
 }
 
-function sumsOf(eq: Equilibrium, body: Body): Sum[] {
-  const joints = eq.analysis.joints.filter((j) =>
-    eq.bars.some(
-      (b) => body.members.includes(b.member.id) && (b.member.start === j.id || b.member.end === j.id),
-    ),
-  );
-  return [
-    ...joints.map((j): Sum => ({ kind: 'moment', x: j.x, y: j.y, joint: j.id })),
-    { kind: 'force', x: 0, y: 1 },
-    { kind: 'force', x: 1, y: 0 },
-  ];
-}
-
-function coefficient(f: BodyForce, sum: Sum): number {
-  if (sum.kind === 'force') return f.couple === undefined ? f.ux * sum.x + f.uy * sum.y : 0;
-  return f.couple === undefined ? (f.x - sum.x) * f.uy - (f.y - sum.y) * f.ux : f.couple;
-}
-
-function termsOf(eq: Equilibrium, body: Body, sum: Sum): (StaticsTerm & { key: string; known?: number })[] {
-  const limit = none * (sum.kind === 'moment' ? eq.length : 1);
-  return body.forces.flatMap((f) => {
-    const c = coefficient(f, sum);
-    if (Math.abs(c) <= limit || f.value === 0) return [];
-    return [{ key: f.key, coefficient: c, value: f.value ?? Number.NaN, of: f.of, known: f.value }];
+/** Terms of an equation: unknowns (those sought without value, found zeros left out), then what acts. */
+function termsOf(
+  plan: StaticsPlan,
+  e: Equation,
+  acting: readonly BodyForce[],
+  known: ReadonlyMap<string, number>,
+  sought: ReadonlySet<string>,
+): Term[] {
+  const limit = negligible(plan.bodies.eq, e.sum);
+  const forces = [...e.body.forces, ...acting];
+  return forces.flatMap((f): Term[] => {
+    const c = coefficient(f, e.sum);
+    if (Math.abs(c) <= limit) return [];
+    const value = f.value ?? known.get(f.key);
+    if (sought.has(f.key)) return [{ key: f.key, coefficient: c, value: value ?? Number.NaN, of: f.of }];
+    return value === undefined || value === 0 ? [] : [{ key: f.key, coefficient: c, value, of: f.of }];
   });
 }
 
-function nextLine(
-  eq: Equilibrium,
-  tries: readonly Body[],
-  known: ReadonlyMap<string, number>,
-  used: Set<string>,
-) {
-  for (const body of tries) {
-    for (const sum of sumsOf(eq, body)) {
-      const name = `${body.members.join()}|${JSON.stringify(sum)}`;
-      if (used.has(name)) continue;
-      const terms = termsOf(eq, body, sum);
-      const open = terms.filter((t) => t.known === undefined && !known.has(t.key));
-      const [sought] = open;
-      if (!sought || open.some((t) => t.key !== sought.key)) continue;
-      used.add(name);
-      const valued = terms.map((t) => ({
-        coefficient: t.coefficient,
-        value: t.known ?? known.get(t.key) ?? Number.NaN,
-        of: t.of,
-        key: t.key,
-      }));
-      const rest = valued
-        .filter((t) => t.key !== sought.key)
-        .reduce((s, t) => s + t.coefficient * t.value, 0);
-      const value = rest === 0 ? 0 : -rest / sought.coefficient;
-      const written = valued.map(({ key, ...t }) => (key === sought.key ? { ...t, value } : t));
-      const line: Extract<StaticsLine, { kind: 'equation' }> = {
-        kind: 'equation',
-        piece: body.members,
-        sum,
-        terms: written,
-        unknown: sought.of,
-        value,
-      };
-      return { key: sought.key, line };
-    }
+const strip = (terms: readonly Term[]): StaticsTerm[] =>
+  terms.map(({ coefficient: c, value, of }) => ({ coefficient: c, value, of }));
+
+/** The sum of the terms; zero when it is only what rounding leaves. */
+function total(terms: readonly StaticsTerm[]): number {
+  let sum = 0;
+  let largest = 0;
+  for (const t of terms) {
+    sum += t.coefficient * t.value;
+    largest = Math.max(largest, Math.abs(t.coefficient * t.value));
   }
-  return undefined;
+  return Math.abs(sum) <= rounding * largest ? 0 : sum;
 }
 
-/** A moment sum on the whole about a joint not used before: every force stands in it with its value. */
-function leftOver(
-  eq: Equilibrium,
-  whole: Body,
+function ofKey(plan: StaticsPlan, key: string): StaticsTerm['of'] {
+  for (const body of plan.bodies.list) for (const f of body.forces) if (f.key === key) return f.of;
+  throw new Error(`no force ${key}`);
+}
+
+/** An equation of the whole that was not needed, a moment sum before a sum of forces: every force in it is known. */
+function check(
+  plan: StaticsPlan,
+  outside: readonly BodyForce[],
   known: ReadonlyMap<string, number>,
-  used: ReadonlySet<string>,
-): StaticsLine | undefined {
-  const free = sumsOf(eq, whole).filter((s) => !used.has(`${whole.members.join()}|${JSON.stringify(s)}`));
-  const sum =
-    free.find((s) => s.kind === 'moment' && termsOf(eq, whole, s).length > 1) ??
-    free.find((s) => termsOf(eq, whole, s).length > 1);
-  if (!sum) return undefined;
-  const terms = termsOf(eq, whole, sum).map((t) => ({
-    coefficient: t.coefficient,
-    value: t.known ?? (known.get(t.key) as number),
-    of: t.of,
-  }));
-  return {
-    kind: 'check',
-    piece: whole.members,
-    sum,
-    terms,
-    residual: terms.reduce((s, t) => s + t.coefficient * t.value, 0),
-  };
+): StaticsLine[] {
+  const candidates = plan.left.map((e) => ({ e, terms: termsOf(plan, e, outside, known, new Set()) }));
+  const found =
+    candidates.find(({ e, terms }) => e.sum.kind === 'moment' && terms.length > 1) ??
+    candidates.find(({ terms }) => terms.length > 1);
+  if (!found) return [];
+  const residual = found.terms.reduce((s, t) => s + t.coefficient * t.value, 0);
+  return [
+    { kind: 'check', piece: plan.whole.members, sum: found.e.sum, terms: strip(found.terms), residual },
+  ];
 }

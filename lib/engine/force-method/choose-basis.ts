@@ -1,0 +1,169 @@
+import { type Quantity, quantityKey } from '@/lib/model/quantity';
+import type { Choice } from '../solution';
+import { describeMechanism } from '../statics/describe-mechanism';
+import type { Equilibrium } from '../statics/equilibrium';
+import { mechanismOf } from '../statics/mechanism';
+import { forceName, listed } from '../statics/name-force';
+import { leftNullVector, solveBasis, solveBasisTransposed } from '../statics/solve-lu';
+import { factorColumns } from '../statics/sparse-lu';
+import { tolerance } from '../tolerance';
+import { releasesNothing, sameForce } from './idle-release';
+import { fixedQuantities, type PrimaryBasis, type SelfStress } from './self-stress';
+
+/** The primary structure that a choice of redundants leaves, or why it cannot be used. */
+export type ChosenBasis = { good: true; basis: PrimaryBasis } | Extract<Choice, { good: false }>;
+
+/**
+ * Tries a set of redundants: each must be a force of the structure that equilibrium leaves open, and all together must
+ * leave it stable. The set is good when its values in the self-stress states of another good set form a regular matrix.
+ */
+export function chooseBasis(
+  eq: Equilibrium,
+  proposed: PrimaryBasis,
+  quantities: readonly Quantity[],
+): ChosenBasis {
+  const columns: number[] = [];
+  const fixed = new Set(fixedQuantities(eq, proposed));
+  for (const q of quantities) {
+    const column = eq.indexOf.get(quantityKey(q));
+    const alone = column === undefined ? missing(eq, q) : faultOf(eq, proposed, column, columns, fixed);
+    if (alone) return alone;
+    columns.push(column as number);
+  }
+  const degree = proposed.redundants.length;
+  if (columns.length < degree) return bad('too-few', tooFew(degree - columns.length, degree));
+  const place = new Map(columns.map((c, i) => [c, i]));
+  const inSet = proposed.states.map((state) => {
+    const hits = [...state].filter(([q]) => place.has(q));
+    return { rows: hits.map(([q]) => place.get(q) as number), values: hits.map(([, v]) => v) };
+  });
+  const lu = factorColumns(
+    inSet,
+    inSet.map((_, i) => i),
+    columns.length,
+    tolerance.pivot,
+  );
+  const [free] = lu.freeRows;
+  if (free !== undefined) {
+    const opened = leftNullVector(lu, free);
+    const refusal = refusalOf(eq, proposed, columns, opened);
+    if (columns.length > degree && refusal.code !== 'same-force')
+      return {
+        ...refusal,
+        code: 'too-many',
+        message: `${tooMany(columns.length, degree)} ${refusal.message}`,
+      };
+    return refusal;
+  }
+  const basis: PrimaryBasis = { ...proposed, redundants: columns };
+  if (proposed.local) return { good: true, basis };
+  const states = columns.map((own, j) => {
+    const right = new Float64Array(columns.length);
+    right[j] = 1;
+    const { z } = solveBasis(lu, right);
+    return combine(eq, proposed.states, lu.basis, z, columns, own);
+  });
+  return { good: true, basis: { ...basis, states } };
+}
+
+const bad = (code: string, message: string): Extract<Choice, { good: false }> => ({
+  good: false,
+  code,
+  message,
+});
+
+/** Σ factor × state, with exact 1 and 0 at the redundants and without entries that are rounding. */
+function combine(
+  eq: Equilibrium,
+  states: readonly SelfStress[],
+  order: readonly number[],
+  factors: Float64Array,
+  redundants: readonly number[],
+  own: number,
+): SelfStress {
+  const total = new Float64Array(eq.quantities.length);
+  const size = new Float64Array(eq.quantities.length);
+  order.forEach((i, k) => {
+    const factor = factors[k] as number;
+    if (factor === 0) return;
+    for (const [q, v] of states[i] as SelfStress) {
+      total[q] = (total[q] as number) + factor * v;
+      size[q] = Math.max(size[q] as number, Math.abs(factor * v));
+    }
+  });
+  for (const q of redundants) total[q] = 0;
+  const kept: SelfStress = new Map([[own, 1]]);
+  total.forEach((v, q) => {
+    if (Math.abs(v) > tolerance.entry * (size[q] as number)) kept.set(q, v);
+  });
+  return kept;
+}
+
+function faultOf(
+  eq: Equilibrium,
+  proposed: PrimaryBasis,
+  column: number,
+  before: readonly number[],
+  fixed: ReadonlySet<number>,
+): Extract<Choice, { good: false }> | undefined {
+  const q = eq.quantities[column] as Quantity;
+  const name = forceName(eq, q);
+  if (before.includes(column)) return bad('same-force', `${name} stands twice in the set.`);
+  if (proposed.open.some((o) => o.state.has(column)) && !proposed.states.some((s) => s.has(column)))
+    return bad(
+      'open-axial',
+      `${name} is not determined by bending: the members along it are held lengthwise and do not stretch, and it is taken as zero. Leave it out, or state EA.`,
+    );
+  if (!fixed.has(column)) return undefined;
+  const idle = releasesNothing(eq, q);
+  if (idle) return bad('nothing-released', idle);
+  const opened = refusalOf(eq, proposed, [column], Float64Array.of(1));
+  return { ...opened, code: 'fixed', message: `${opened.message} Equilibrium alone gives ${name}.` };
+}
+
+function missing(eq: Equilibrium, q: Quantity): Extract<Choice, { good: false }> {
+  const idle = releasesNothing(eq, q);
+  return bad('nothing-released', idle ?? `There is no force ${forceName(eq, q)} in this structure.`);
+}
+
+/**
+ * The motion that releasing a set allows: the set opens by `opened`, everything else keeps its length and angle. The
+ * joints move as the kept quantities of the known primary structure say.
+ */
+function refusalOf(
+  eq: Equilibrium,
+  proposed: PrimaryBasis,
+  columns: readonly number[],
+  opened: Float64Array,
+): Extract<Choice, { good: false }> {
+  const openings = new Map(columns.map((c, i) => [c, opened[i] as number]));
+  const y = solveBasisTransposed(
+    proposed.lu,
+    proposed.lu.basis.map((q) => openings.get(q) ?? 0),
+  );
+  const largest = Math.max(...opened.map(Math.abs));
+  const released = columns.filter((_, i) => Math.abs(opened[i] as number) > tolerance.fixed * largest);
+  const names = released.map((q) => eq.quantities[q] as Quantity);
+  const mechanism = mechanismOf(eq, y);
+  const same = sameForce(eq, names, mechanism);
+  if (same) return bad('same-force', same);
+  const said = describeMechanism(
+    eq,
+    mechanism,
+    columns.map((q) => eq.quantities[q] as Quantity),
+  );
+  const all = names.map((q) => forceName(eq, q));
+  const who =
+    all.length > 1 ? `${listed(all)} cannot be released together.` : `${all[0]} cannot be the redundant.`;
+  return { good: false, code: said.code, message: `${who} ${said.message}`, mechanism };
+}
+
+function tooFew(n: number, degree: number): string {
+  const more = n === 1 ? 'One more release is needed' : `${n} more releases are needed`;
+  return `${more}: the primary structure is still indeterminate${degree === 1 ? ' to the first degree' : ''}.`;
+}
+
+function tooMany(chosen: number, degree: number): string {
+  const free = degree === 0 ? 'none is' : degree === 1 ? 'one is' : `${degree} are`;
+  return `${chosen === 1 ? 'One is' : `${chosen} are`} released, ${free} free: restore ${chosen - degree === 1 ? 'one' : chosen - degree}.`;
+}
