@@ -1,3 +1,4 @@
+import { openFraction } from '@/lib/typeset/open-fraction';
 import { MATH_SCALE } from '@/lib/typeset/rich-line';
 import { splitTopLevel } from '@/lib/typeset/split-top-level';
 import { TypesetError } from '@/lib/typeset/typeset-error';
@@ -78,7 +79,10 @@ function members({ lhs, chain, boxed }: EquationRow): string[] {
   );
 }
 
-/** A member in pieces that fit: whole, or broken before its relations, or before its plus and minus signs. */
+/**
+ * A member in pieces that fit: whole, or broken before its relations, or before its plus and minus signs; a fraction that
+ * is too wide is opened and broken between the terms of its numerator.
+ */
 function inPieces(
   tex: string,
   room: number,
@@ -88,9 +92,9 @@ function inPieces(
 ): Piece[] {
   const whole = set(tex);
   if (whole.width <= Math.max(room, here)) return [whole];
-  for (const at of ['relations', 'terms'] as const) {
-    const parts = splitTopLevel(tex, at);
-    if (parts.length < 2) continue;
+  const ways = [splitTopLevel(tex, 'relations'), splitTopLevel(tex, 'terms'), openFraction(tex)];
+  for (const parts of ways) {
+    if (parts === undefined || parts.length < 2) continue;
     const pieces: Piece[] = [];
     let line = '';
     for (const part of parts) {

@@ -36,7 +36,7 @@ function members(step: SummaryStep, out: StepWriter, scene: Scene): void {
   const negative = names.beam ? '$|M|$, tension above' : '$|M|$, tension left of the walk';
   const pair = (d: Demand | undefined, decimals: number, sign = 1) => [
     d ? cell(sign * d.value, decimals, units) : '–',
-    d ? plain(d.by) : '',
+    d ? spaced(plain(d.by)) : '',
   ];
   out.table({
     caption: `Demands on members, from the ${step.from === 'combinations' ? 'strength combinations' : 'single cases'}.`,
@@ -111,4 +111,9 @@ function supports(step: SummaryStep, out: StepWriter, scene: Scene): void {
       };
     }),
   });
+}
+
+/** A sum of cases with room to break: "1.2D + 1.6S". */
+function spaced(sum: string): string {
+  return sum.replace(/(\w)([+−])(?=[\d\w])/g, '$1 $2 ');
 }
