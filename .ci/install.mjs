@@ -7,6 +7,7 @@ const debian = [
   { program: 'chromium', packages: ['chromium'], tests: true },
   { program: 'pdftotext', packages: ['poppler-utils'], tests: true },
   { program: 'qpdf', packages: ['qpdf'], tests: true },
+  { program: 'openssl', packages: ['openssl'], tests: true },
 ];
 
 /** Installs Debian packages that are missing; the tests need a browser and PDF readers besides MariaDB. */

@@ -93,6 +93,8 @@ export function drawSeal(text: SealText, fonts: SealFonts): (width: number, heig
   return (width, height) => {
     const scale = Math.min(width, height) / side;
     const [x, y] = [(width - side * scale) / 2, (height - side * scale) / 2];
-    return `q ${scale} 0 0 ${scale} ${x} ${y} cm ${parts.join('\n')} Q`;
+    // A PDF knows no exponents: what is left of a rounding must not be written as 7e-15.
+    const [s, dx, dy] = [scale, x, y].map((n) => n.toFixed(5));
+    return `q ${s} 0 0 ${s} ${dx} ${dy} cm ${parts.join('\n')} Q`;
   };
 }

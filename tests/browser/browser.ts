@@ -52,6 +52,7 @@ export async function signInAs(page: Page, name: string): Promise<void> {
 
 /** Holds the page against the rules of WCAG 2.0 to 2.2, A and AA, that axe can test. */
 export async function expectAccessible(page: Page): Promise<void> {
+  await page.waitForFunction(() => document.title !== '');
   await page.evaluate(axe);
   const found = await page.evaluate(async () => {
     const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];

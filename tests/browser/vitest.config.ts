@@ -11,6 +11,6 @@ export default defineConfig({
     include: ['tests/browser/**/*.test.ts'],
     execArgv: ['--import', 'tsx'],
     fileParallelism: false,
-    testTimeout: 180_000,
+    testTimeout: 480_000,
   },
 });
