@@ -29,6 +29,8 @@ export interface ComposeOptions {
   basis?: string;
   /** Make the drawings; default true. */
   figures?: boolean;
+  /** Lay each drawing out a second time for the column of a phone; default true. */
+  narrowFigures?: boolean;
 }
 
 /**
@@ -37,7 +39,7 @@ export interface ComposeOptions {
  */
 export function compose(solution: Solution, options: ComposeOptions = {}): Block[] {
   const scene = sceneOf(solution, { figures: options.figures ?? true, basis: options.basis });
-  const counters = { figures: 0 };
+  const counters = { figures: 0, narrow: options.narrowFigures ?? true };
   return derive(solution).flatMap((step) => {
     const out = new StepWriter(step.number, scene.units, counters);
     composeStep(step, out, scene);

@@ -12,7 +12,7 @@ export function composeBasis(step: BasisStep, out: StepWriter, scene: Scene): vo
   if (scene.basis && scene.basis.trim() !== '') out.paragraph(plain(scene.basis.trim()));
   out.paragraph(`**Signs.** ${signs(step)}`);
   if (scene.figures) {
-    out.figure('Positive senses.', [drawSigns({ width: wide })], [drawSigns({ width: narrow })]);
+    out.figure('Positive senses.', [drawSigns({ width: wide })], () => [drawSigns({ width: narrow })]);
   }
   out.paragraph(`**Units.** ${unitWords(step)}`);
   out.paragraph(`**Figures.** ${figureWords(step)}`);

@@ -164,13 +164,13 @@ function figures(step: CombinationsStep, out: StepWriter, { analysis, solution, 
     const shear = (width: number) =>
       drawEnvelope(analysis, strength, { which: 'V', width, decimals: plan.force });
     if (names.beam) {
-      out.figure('Envelope of $M$ over the strength combinations.', [moment(wide)], [moment(narrow)]);
-      out.figure('Envelope of $V$ over the strength combinations.', [shear(wide)], [shear(narrow)]);
+      out.figure('Envelope of $M$ over the strength combinations.', [moment(wide)], () => [moment(narrow)]);
+      out.figure('Envelope of $V$ over the strength combinations.', [shear(wide)], () => [shear(narrow)]);
     } else
       out.figure(
         'Envelopes of $M$ and $V$ over the strength combinations.',
         [moment(wide / 2), shear(wide / 2)],
-        [moment(narrow), shear(narrow)],
+        () => [moment(narrow), shear(narrow)],
       );
     return;
   }
@@ -178,6 +178,6 @@ function figures(step: CombinationsStep, out: StepWriter, { analysis, solution, 
   if (only) {
     const draw = (width: number) =>
       drawDiagram(analysis, only.members, { which: 'M', width, decimals: plan.moment });
-    out.figure(`$M$ of combination ${plain(only.id)}.`, [draw(wide)], [draw(narrow)]);
+    out.figure(`$M$ of combination ${plain(only.id)}.`, [draw(wide)], () => [draw(narrow)]);
   }
 }

@@ -113,6 +113,6 @@ function shapes(out: StepWriter, { analysis, solution }: Scene): void {
     if (!result) continue;
     const draw = (width: number) =>
       drawDeflected(analysis, result.members, { width, timesEI0: result.displacementsTimesEI0 });
-    out.figure(`Deflected shape under ${plain(c.id)}; dashes: at rest.`, [draw(wide)], [draw(narrow)]);
+    out.figure(`Deflected shape under ${plain(c.id)}; dashes: at rest.`, [draw(wide)], () => [draw(narrow)]);
   }
 }

@@ -130,18 +130,14 @@ function figures(id: string, out: StepWriter, { analysis, solution, names, plan 
     });
   if (names.beam) {
     draw(wide).forEach((drawing, i) => {
-      const small = draw(narrow)[i];
-      out.figure(
-        `$${kinds[i]}$ of case ${plain(id)}; dots are zeros of $M$.`,
-        [drawing],
-        small ? [small] : undefined,
-      );
+      const small = () => draw(narrow).slice(i, i + 1);
+      out.figure(`$${kinds[i]}$ of case ${plain(id)}; dots are zeros of $M$.`, [drawing], small);
     });
     return;
   }
   out.figure(
     `$N$, $V$ and $M$ of case ${plain(id)}; dots are zeros of $M$; every diagram has its own scale.`,
     draw(wide / 3),
-    draw(narrow),
+    () => draw(narrow),
   );
 }

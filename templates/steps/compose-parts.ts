@@ -59,7 +59,7 @@ function figure(id: string, parts: readonly NamedPart[], out: StepWriter, scene:
     out.figure(
       `Parts of case ${plain(id)} on the tension side; crossed circles mark the centroids.`,
       draw(across),
-      draw(narrow),
+      () => draw(narrow),
     );
 }
 

@@ -9,11 +9,6 @@ import type { StepWriter } from './step-writer';
 import { capital, listWords, plain, releaseWords } from './words';
 import { inline, staticsRows, staticsWords, valueCell } from './write-lines';
 
-/** Cases whose statics are written in full; the others have their results in tables. */
-const written = 3;
-/** Lines of statics on one sheet; beyond, tables stand alone. */
-const mostLines = 40;
-
 /** Step 5: the primary structure and its forces, one unknown at a time. */
 export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene): void {
   const { analysis, units, placed, names } = scene;
@@ -34,8 +29,8 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
     );
   }
   if (scene.figures) figures(step, out, scene);
-  step.cases.slice(0, written).forEach((c, k) => {
-    if (c.steps.length === 0 || c.steps.length > mostLines) return;
+  step.cases.forEach((c, k) => {
+    if (c.steps.length === 0) return;
     if (k === 0) {
       c.steps.forEach((s, i) => {
         const lead = i === 0 ? `**Case ${plain(c.id)}.** ` : '';
@@ -63,7 +58,7 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
 }
 
 const hasHingeForces = (step: PrimaryStep): boolean =>
-  step.cases.slice(0, written).some((c) => c.steps.some((s) => s.relation?.symbol.letter === 'F'));
+  step.cases.some((c) => c.steps.some((s) => s.relation?.symbol.letter === 'F'));
 
 function figures(step: PrimaryStep, out: StepWriter, { analysis, solution }: Scene): void {
   const draw = (width: number) =>
@@ -77,7 +72,7 @@ function figures(step: PrimaryStep, out: StepWriter, { analysis, solution }: Sce
     out.figure(
       'Primary structure with its loads; what is released is shown by its redundant.',
       draw(wide / Math.max(1, pair)),
-      draw(narrow),
+      () => draw(narrow),
     );
 }
 

@@ -22,6 +22,12 @@ export function composeRedundants(step: RedundantsStep, out: StepWriter, scene: 
   }
   fixedQuantities(step, out, scene);
   refusals(step, out, scene);
+  if (step.good.length > 1) {
+    const some = step.good.slice(0, most).map(inline);
+    out.paragraph(
+      `**Good choices** are ${listWords(some)}${step.good.length > most ? ' and others' : ''}: each leaves a stable structure.`,
+    );
+  }
   const chosen = redundants.map((r) => ({
     lhs: symbolTex(r.symbol),
     chain: [symbolTex(r.is)],
@@ -82,10 +88,14 @@ function fixedQuantities(step: RedundantsStep, out: StepWriter, { units }: Scene
 
 function refusals(step: RedundantsStep, out: StepWriter, scene: Scene): void {
   const { analysis, names } = scene;
+  const n = step.redundants.length;
   if (step.refused.length === 0) return;
   const count = step.refused.reduce((t, r) => t + r.sets.length, 0);
   out.table({
-    caption: `Unstable choices: ${count} set${count === 1 ? '' : 's'} that differ${count === 1 ? 's' : ''} from the chosen one in one quantity.`,
+    caption:
+      n === 1
+        ? 'Unstable choices.'
+        : `Unstable choices: ${count} set${count === 1 ? '' : 's'} that differ${count === 1 ? 's' : ''} from the chosen one in one quantity.`,
     columns: [
       { head: 'refused', align: 'left' },
       { head: 'sets', align: 'right' },
@@ -118,7 +128,7 @@ function refusals(step: RedundantsStep, out: StepWriter, scene: Scene): void {
     out.figure(
       `Refused: ${named.join('; ')}. The motion is drawn small; nothing resists it.`,
       draw(wide),
-      shown.map((s) => drawMechanism(analysis, s.set, s.mechanism, { width: narrow })),
+      () => shown.map((s) => drawMechanism(analysis, s.set, s.mechanism, { width: narrow })),
     );
   }
 }

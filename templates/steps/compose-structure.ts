@@ -19,7 +19,7 @@ export function composeStructure(step: StructureStep, out: StepWriter, scene: Sc
     out.figure(
       'The structure, to scale; dashes mark the side where a positive $M$ gives tension.',
       [draw(wide)],
-      [draw(narrow)],
+      () => [draw(narrow)],
     );
   }
   joints(out, scene);
@@ -29,7 +29,7 @@ export function composeStructure(step: StructureStep, out: StepWriter, scene: Sc
     for (const c of analysis.cases) {
       const title = (width: number) => drawLoads(analysis, c, { width });
       if (c.loads.length > 0)
-        out.figure(`Case ${plain(c.id)}, ${plain(c.title)}.`, [title(wide)], [title(narrow)]);
+        out.figure(`Case ${plain(c.id)}, ${plain(c.title)}.`, [title(wide)], () => [title(narrow)]);
     }
   }
   if (step.geometry.length > 0) {

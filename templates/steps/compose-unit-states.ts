@@ -7,8 +7,6 @@ import type { StepWriter } from './step-writer';
 import { listWords } from './words';
 import { inline, inlineValue, staticsRows, staticsWords } from './write-lines';
 
-/** Statics of unit states written in full; the others have their results in tables. */
-const written = 3;
 /** Unit states drawn on one sheet. */
 const drawn = 8;
 
@@ -26,7 +24,7 @@ export function composeUnitStates(step: UnitStatesStep, out: StepWriter, scene: 
     `$X_i=1$ acts alone on the primary structure. A bar marks its effects: $\\bar{R}$, $\\bar{N}$, $\\bar{V}$ and $\\bar{m}$ are per unit of $X_i$. No load acts between the joints, so every $\\bar{m}$ is straight on each member.${hinged ? ' $\\bar{F}$ with the name of a member is the force on its end at a hinge.' : ''}`,
   );
   for (const s of states) {
-    if (s.index < written && s.steps.length > 0 && s.steps.length <= 12) {
+    if (s.steps.length > 0) {
       s.steps.forEach((line, k) => {
         const lead = k === 0 ? `**${inline(s.symbol)} $=1$.** ` : '';
         out.equations(`${lead}${staticsWords(line, placed, units)}`, staticsRows(line, units));
@@ -67,6 +65,6 @@ function figure(pair: UnitStatesStep['states'], out: StepWriter, { analysis, sol
   out.figure(
     `Unit moments ${listWords(pair.map((s) => `$\\bar{m}_{${s.index + 1}}$`))} with the reactions.`,
     draw(wide / pair.length),
-    draw(narrow),
+    () => draw(narrow),
   );
 }

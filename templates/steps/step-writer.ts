@@ -11,9 +11,10 @@ export interface TableInput {
   source?: string;
 }
 
-/** Counts what runs through the whole sheet. */
+/** What runs through the whole sheet: the count of its figures, and whether they are drawn for phones as well. */
 export interface SheetCounters {
   figures: number;
+  narrow: boolean;
 }
 
 /** Gathers the blocks of one step and numbers its lines: 5, 5.1, 5.2 … */
@@ -59,11 +60,18 @@ export class StepWriter {
     });
   }
 
-  figure(caption: string, drawings: Drawing[], narrow?: Drawing[]): void {
+  /** Drawings side by side; `narrow` lays the same out for the column of a phone, where the sheet has such. */
+  figure(caption: string, drawings: Drawing[], narrow: () => Drawing[]): void {
     if (drawings.length === 0) return;
     this.counters.figures += 1;
     const numbered = `**Figure ${this.counters.figures}.** ${caption}`;
-    this.blocks.push({ kind: 'figure', id: this.take(), caption: numbered, drawings, narrow });
+    this.blocks.push({
+      kind: 'figure',
+      id: this.take(),
+      caption: numbered,
+      drawings,
+      narrow: this.counters.narrow ? narrow() : undefined,
+    });
   }
 
   caution(text: string): void {

@@ -14,11 +14,9 @@ export interface EndForces {
 
 type Three = Pick<MemberDiagrams, 'N' | 'V' | 'M'>;
 
-/** Forces at both ends of every member of a state, in the order of the analysis. */
+/** Forces at both ends of every member of a state, in the order of its diagrams: that of the analysis. */
 export function endForcesOf(ctx: Context, members: Readonly<Record<string, Three>>): EndForces[] {
-  return ctx.analysis.members.flatMap(({ id }) => {
-    const diagrams = members[id];
-    if (!diagrams) return [];
+  return Object.entries(members).flatMap(([id, diagrams]) => {
     const { L, start, end } = placedMember(ctx, id);
     return (['start', 'end'] as const).map((which): EndForces => {
       const at = (f: Three['M']) =>

@@ -79,7 +79,7 @@ export function planFigures(solution: Solution): FigurePlan {
     ),
     gap: noMoreThan(gaps, decimalsFor(gaps, 7, 0, 4)),
     flexibility: noMoreThan(flexibilities, decimalsFor(flexibilities, 7, 0, 6)),
-    deflection: 2,
+    deflection: analysis.units === 'US' ? 3 : 2,
     load: 2,
   };
 }

@@ -52,13 +52,17 @@ function exampleOf(
     return superposed(ctx, id, ctx.names.quantity(r.quantity), value, before, units);
   });
   const seen = new Set<string>();
+  const primaryEnds = primary ? endForcesOf(ctx, primary.members) : [];
+  const unitEnds = solution.primary.units.map(
+    (u) => new Map(endForcesOf(ctx, u.members).map((e) => [`${e.member} ${e.end}`, e.M])),
+  );
   const moments = result.ends.flatMap((e, k): Relation[] => {
     const symbol = ctx.names.moment(e.member, e.end);
     const key = JSON.stringify(symbol);
     if (seen.has(key) || isRedundant(ctx, e)) return [];
     seen.add(key);
-    const before = primary ? (endForcesOf(ctx, primary.members)[k]?.M ?? 0) : 0;
-    const units = solution.primary.units.map((u) => unitMoment(ctx, u.members, e));
+    const before = primaryEnds[k]?.M ?? 0;
+    const units = unitEnds.map((u) => u.get(`${e.member} ${e.end}`) ?? 0);
     if (units.every((u) => u === 0)) return [];
     const value: Value = {
       kind: 'value',
@@ -70,14 +74,6 @@ function exampleOf(
     return superposed(ctx, id, symbol, value, before, units);
   });
   return { id, reactions: reactions.slice(0, most.lines), moments: moments.slice(0, most.lines) };
-}
-
-function unitMoment(
-  ctx: Context,
-  members: Context['solution']['primary']['units'][number]['members'],
-  e: EndForces,
-): number {
-  return endForcesOf(ctx, members).find((u) => u.member === e.member && u.end === e.end)?.M ?? 0;
 }
 
 const isRedundant = (ctx: Context, e: EndForces): boolean =>

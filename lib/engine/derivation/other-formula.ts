@@ -1,6 +1,6 @@
 import type { Dimension } from '@/lib/units/dimension';
 import type { WorkRow } from '../force-method/work';
-import { type Context, lengthValue, pureValue } from './context';
+import { type Context, lengthValue, placedMember, pureValue } from './context';
 import { dimensions, per } from './dimensions';
 import { type Expression, negative, product, quotient, type Value } from './expression';
 import { decimalsFor } from './figure-plan';
@@ -15,6 +15,8 @@ export interface TermStates {
   other: (s: SymbolName) => SymbolName;
   /** Of the redundant of the other state when that is a unit state too. */
   perOther: Dimension;
+  /** Tells stretches of one member apart in the lines of one sum. */
+  stretch: string;
 }
 
 type OtherRow = Exclude<WorkRow, { kind: 'bending' }>;
@@ -47,12 +49,18 @@ export function otherFormula(ctx: Context, row: OtherRow, states: TermStates): E
     case 'axial':
     case 'shear': {
       const sub = names.member(row.member);
-      const mean = { letter: row.kind === 'axial' ? 'N' : 'V', sub: [...sub, ',', 'm'] };
+      // N and V are means over the length; a length that is part of its member is named by its line.
+      const whole = Math.abs(placedMember(ctx, row.member).L - row.length) <= 1e-9 * row.length;
+      const mean = {
+        letter: row.kind === 'axial' ? 'N' : 'V',
+        sub: [...sub, ',', whole ? 'm' : states.stretch],
+      };
       const under =
         row.kind === 'axial'
           ? stiff('EA', sub, row.EA, dimensions.force)
           : stiff('GA', [...sub, ',', 's'], row.GAs, dimensions.force);
-      const length = lengthValue(ctx, names.length(row.member), row.length);
+      const own = whole ? names.length(row.member) : { letter: 'l', sub: [...sub, ',', states.stretch] };
+      const length = lengthValue(ctx, own, row.length);
       return quotient(product(EI0, unit(mean, row.unit), other(mean, row.force), length), under);
     }
     case 'spring': {

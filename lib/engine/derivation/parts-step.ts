@@ -63,9 +63,14 @@ function decimalsOf(ctx: Context, parts: readonly NamedPart[]): PartDecimals {
   return { length, height, area, centroid: figures.length + 1 };
 }
 
+/** Rounding of the arithmetic, beside the largest area of a case. */
+const negligible = 1e-12;
+
 /** The parts of one case: D1, D2 … */
 export function namedParts(ctx: Context, id: string): NamedPart[] {
-  const parts = ctx.solution.work.parts[id] ?? [];
+  const all = ctx.solution.work.parts[id] ?? [];
+  const largest = Math.max(...all.map((p) => Math.abs(p.area)), 0);
+  const parts = all.filter((p) => Math.abs(p.area) > negligible * largest);
   return parts.map((part, i) => {
     const { L } = placedMember(ctx, part.member);
     const l = part.to - part.from;

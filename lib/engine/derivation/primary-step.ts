@@ -20,6 +20,9 @@ export interface PrimaryStep {
   }[];
 }
 
+/** Cases whose statics are written out, and lines of one; the others have their results in tables. */
+const most = { cases: 3, lines: 40 };
+
 export function derivePrimary(ctx: Context): PrimaryStep {
   const { solution, analysis, names } = ctx;
   const released = new Set(solution.redundants.map(quantityKey));
@@ -31,13 +34,15 @@ export function derivePrimary(ctx: Context): PrimaryStep {
       quantity,
     })),
     pieces: solution.primary.pieces,
-    cases: analysis.cases.flatMap(({ id }) => {
+    cases: analysis.cases.flatMap(({ id }, k) => {
       const state = solution.primary.loaded[id];
       if (!state) return [];
+      const lines = usedLines(state.lines);
+      const written = k < most.cases && lines.length <= most.lines;
       return [
         {
           id,
-          steps: writeSteps(ctx, usedLines(state.lines), { kind: 'case', id }),
+          steps: written ? writeSteps(ctx, lines, { kind: 'case', id }) : [],
           reactions: state.reactions
             .filter((r) => !released.has(quantityKey(r.quantity)))
             .map((r) => reactionValue(ctx, r, (s) => inCase(onPrimary(s), id))),

@@ -1,10 +1,11 @@
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Mechanism } from '@/lib/model/refusal';
-import { choose } from '../force-method/choose';
+import { chooser } from '../force-method/choose';
 import { type Context, redundantSymbol } from './context';
 import { dimensionOf } from './dimensions';
+import { endForcesOf } from './end-forces';
 import type { Value } from './expression';
-import type { SymbolName } from './symbol-name';
+import { type SymbolName, symbolKey } from './symbol-name';
 
 /** Step 4: what may be released, what may not, and what is. */
 export interface RedundantsStep {
@@ -15,6 +16,8 @@ export interface RedundantsStep {
   /** Sets that differ from the chosen one in one place and leave a mechanism, by what moves. */
   refused: RefusedSets[];
   redundants: { symbol: SymbolName; is: SymbolName; quantity: Quantity }[];
+  /** Forces that may be released, each once, where there is one redundant. */
+  good: SymbolName[];
   /** Pairs of redundants that act on nothing in common: f_ij = 0. */
   uncoupled: number;
   condition: number;
@@ -32,7 +35,7 @@ const most = { members: 8, redundants: 3, trials: 40 };
 
 export function deriveRedundants(ctx: Context): RedundantsStep {
   const { solution, names, analysis } = ctx;
-  const fixed = solution.fixed.map(({ quantity, values }) => {
+  const fixed = oncePerSymbol(ctx).map(({ quantity, values }) => {
     const symbol = names.quantity(quantity);
     const decimals = dimensionOf(quantity).length === 1 ? ctx.figures.moment : ctx.figures.force;
     const list = analysis.cases.map(
@@ -60,13 +63,15 @@ export function deriveRedundants(ctx: Context): RedundantsStep {
       is: names.quantity(quantity),
       quantity,
     })),
+    good: n === 1 && analysis.members.length <= most.members ? alternatives(ctx) : [],
     uncoupled: (n * (n - 1)) / 2 - coupled,
     condition: solution.condition,
     proposed: solution.proposed,
   };
 }
 
-function refusedExchanges({ solution, analysis, names }: Context): RefusedSets[] {
+function refusedExchanges(ctx: Context): RefusedSets[] {
+  const { solution, analysis, names } = ctx;
   const { redundants } = solution;
   const n = redundants.length;
   if (n === 0 || n > most.redundants || analysis.members.length > most.members) return [];
@@ -78,21 +83,59 @@ function refusedExchanges({ solution, analysis, names }: Context): RefusedSets[]
     seen.add(name);
     return true;
   });
-  const byMotion = new Map<string, RefusedSets & { sets: Quantity[][] }>();
+  const byMotion: Motions = new Map();
   let trials = 0;
+  const ask = chooser(analysis);
+  for (const { quantity, values } of oncePerSymbol(ctx)) {
+    if (quantity.kind === 'axial' || Object.values(values).every((v) => v === 0)) continue;
+    const choice = ask(redundants.map((q, k) => (k === 0 ? quantity : q)));
+    if (!choice.good && choice.mechanism) note(byMotion, choice, [quantity]);
+  }
   for (let i = 0; i < n; i++) {
     for (const other of others) {
       if (++trials > most.trials) break;
       const set = redundants.map((q, k) => (k === i ? other : q));
-      const choice = choose(analysis, set);
+      const choice = ask(set);
       if (choice.good || !choice.mechanism) continue;
-      const known = byMotion.get(choice.message);
-      if (known) known.sets.push(set);
-      else
-        byMotion.set(choice.message, { message: choice.message, sets: [set], mechanism: choice.mechanism });
+      note(byMotion, choice, set);
     }
   }
   return [...byMotion.values()];
+}
+
+/** Quantities that equilibrium fixes; moments on both sides of a joint that are one stand once. */
+function oncePerSymbol({ solution, names }: Context): Context['solution']['fixed'] {
+  const seen = new Set<string>();
+  return solution.fixed.filter(({ quantity }) => {
+    const key = symbolKey(names.quantity(quantity));
+    return !seen.has(key) && seen.add(key);
+  });
+}
+
+/** Forces that one redundant brings with it: any of them could be released in its place. */
+function alternatives(ctx: Context): SymbolName[] {
+  const [unit] = ctx.solution.primary.units;
+  if (!unit) return [];
+  const found = [
+    ...unit.reactions.filter((r) => r.value !== 0).map((r) => ctx.names.quantity(r.quantity)),
+    ...endForcesOf(ctx, unit.members).flatMap((e) => [
+      ...(e.M === 0 ? [] : [ctx.names.moment(e.member, e.end)]),
+      ...(e.N === 0 || e.end === 'end' ? [] : [ctx.names.axial(e.member, 'start')]),
+    ]),
+  ];
+  return [...new Map(found.map((s) => [symbolKey(s), s])).values()];
+}
+
+type Motions = Map<string, RefusedSets & { sets: Quantity[][] }>;
+
+function note(
+  motions: Motions,
+  { message, mechanism }: Pick<RefusedSets, 'message' | 'mechanism'>,
+  set: Quantity[],
+): void {
+  const known = motions.get(message);
+  if (known) known.sets.push(set);
+  else motions.set(message, { message, sets: [set], mechanism });
 }
 
 function reactionsOf(joints: Context['analysis']['joints']): Quantity[] {

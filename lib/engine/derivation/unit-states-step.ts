@@ -17,6 +17,9 @@ export interface UnitState {
   ends: EndForces[];
 }
 
+/** States whose statics are written out, on sheets with so many redundants; the others have their results in tables. */
+const most = { states: 3, redundants: 12 };
+
 /** Step 7: the unit-load structures. Moments per unit of X: a length for a force, a pure number for a moment. */
 export interface UnitStatesStep {
   kind: 'units';
@@ -29,11 +32,12 @@ export function deriveUnitStates(ctx: Context): UnitStatesStep {
   const states = solution.primary.units.map((state, index): UnitState => {
     const quantity = solution.redundants[index];
     if (!quantity) throw new Error(`no redundant ${index}`);
+    const written = index < most.states && solution.redundants.length <= most.redundants;
     return {
       index,
       symbol: redundantSymbol(index),
       quantity,
-      steps: writeSteps(ctx, usedLines(state.lines), { kind: 'unit', index }),
+      steps: written ? writeSteps(ctx, usedLines(state.lines), { kind: 'unit', index }) : [],
       reactions: state.reactions
         .filter((r) => !released.has(quantityKey(r.quantity)))
         .map((r) => ({

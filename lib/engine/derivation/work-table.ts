@@ -67,7 +67,7 @@ export interface GroupInput {
   symbol: SymbolName;
   rows: readonly WorkRow[];
   total: number;
-  states: TermStates;
+  states: Omit<TermStates, 'stretch'>;
   /** Names of the parts of the rows, in their order. */
   nameOf?: (row: Extract<WorkRow, { kind: 'bending' }>) => string | undefined;
 }
@@ -82,7 +82,7 @@ export function workTable(
   const { figures } = ctx;
   let others = 0;
   const groups = inputs.map((g) => {
-    const lines = g.rows.map((row): WorkLine => {
+    const lines = withoutRounding(g.rows).map((row): WorkLine => {
       if (row.kind === 'bending') return bendingLine(row, g.nameOf?.(row));
       others += 1;
       return otherLine(ctx, row, g, others, dims, totalDecimals);
@@ -136,6 +136,13 @@ export function workTable(
   return { groups, decimals, ...dims };
 }
 
+/** Rows whose area is rounding of the arithmetic say nothing. */
+function withoutRounding(rows: readonly WorkRow[]): WorkRow[] {
+  const size = (r: WorkRow) => (r.kind === 'bending' ? Math.abs(r.area) : 0);
+  const largest = Math.max(...rows.map(size), 0);
+  return rows.filter((r) => r.kind !== 'bending' || size(r) > 1e-12 * largest);
+}
+
 function bendingLine(row: Extract<WorkRow, { kind: 'bending' }>, part: string | undefined): BendingLine {
   const length = row.to - row.from;
   return {
@@ -167,10 +174,12 @@ function otherLine(
     super: group.symbol.super,
   };
   const figures = { dimension: dims.dimension, decimals: decimals + 1 };
+  const { letter, sub = [] } = group.symbol;
+  const stretch = [letter, ...sub, `-${n}`].join('');
   return {
     kind: 'other',
     row,
-    relation: relate(symbol, otherFormula(ctx, row, group.states), figures, row.value),
+    relation: relate(symbol, otherFormula(ctx, row, { ...group.states, stretch }), figures, row.value),
     value: row.value,
   };
 }

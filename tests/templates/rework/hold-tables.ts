@@ -65,7 +65,7 @@ const readers: [RegExp, Reader][] = [
   [
     /Parts of case (.*)\.$/,
     (_, m, s) =>
-      (s.work.parts[m[1] ?? ''] ?? []).map((p) => [
+      realParts(s.work.parts[m[1] ?? ''] ?? []).map((p) => [
         undefined,
         undefined,
         undefined,
@@ -100,6 +100,12 @@ const readers: [RegExp, Reader][] = [
   [/Greatest and least moments along/, (t, _, s) => spanRows(t, s)],
   [/Demands on members/, (_, __, s) => demandRows(s)],
 ];
+
+/** Parts that are not rounding of the arithmetic. */
+function realParts<T extends { area: number }>(parts: readonly T[]): T[] {
+  const largest = Math.max(...parts.map((p) => Math.abs(p.area)));
+  return parts.filter((p) => Math.abs(p.area) > 1e-12 * largest);
+}
 
 function memberNamed(s: Solution, cell: string | undefined) {
   return s.analysis.members.find((m) => `${m.start}–${m.end}` === cell);
@@ -143,13 +149,14 @@ function endRows(
 
 /** Rows stand in the order of the engine; those of bending are held, totals and other terms are passed over. */
 function workRows(table: TableBlock, rows: readonly WorkRow[], worked: boolean): Expected {
-  const bending = rows.filter((r) => r.kind === 'bending');
+  const areas = rows.flatMap((r) => (r.kind === 'bending' ? [Math.abs(r.area)] : []));
+  const bending = rows.filter((r) => r.kind === 'bending' && Math.abs(r.area) > 1e-12 * Math.max(...areas));
   const lead = table.columns[0]?.head === 'of' ? 1 : 0;
   let next = 0;
   return table.rows.map(({ cells, emphasis }) => {
     if (emphasis === 'total' || cells[lead]?.startsWith('$t_')) return [];
     const r = bending[next++];
-    if (!r || table.columns.length - lead !== (worked ? 9 : 6)) return [];
+    if (r?.kind !== 'bending' || table.columns.length - lead !== (worked ? 9 : 6)) return [];
     const blank = Array.from({ length: lead + 2 }, () => undefined);
     if (!worked) return [...blank, r.area, r.ordinate, r.k, r.value];
     return [...blank, undefined, r.to - r.from, r.height, r.area, r.ordinate, r.k, r.value];
