@@ -1,7 +1,6 @@
 import { between, integralOfProduct } from './diagrams/piecewise';
-import { stretches } from './diagrams/stretches';
 import { flexibilityRows } from './force-method/flexibility';
-import type { SolvedForces } from './force-method/solve-redundants';
+import type { SolvedCase, SolvedForces } from './force-method/solve-redundants';
 import { axialShearRows } from './force-method/work-row';
 import type { CaseResult, Check } from './solution';
 import type { Equilibrium } from './statics/equilibrium';
@@ -37,9 +36,9 @@ export function checkSolution(
         check('gap', 'every gap is closed', gapResidual(eq, solved, id, cases[id] as CaseResult, EI0), id),
       );
   const second = solveStiffness(eq.analysis);
-  for (const [id] of solved.cases) {
+  for (const [id, c] of solved.cases) {
     const other = second?.get(id);
-    const residual = other ? agreement(eq, cases[id] as CaseResult, other) : Number.POSITIVE_INFINITY;
+    const residual = other ? agreement(eq, c, cases[id] as CaseResult, other) : Number.POSITIVE_INFINITY;
     checks.push(check('second-way', 'direct stiffness gives the same forces', residual, id));
   }
   return checks;
@@ -84,7 +83,7 @@ function gapResidual(
   const c = solved.cases.get(id);
   if (!c) return Number.POSITIVE_INFINITY;
   let worst = 0;
-  const force = Math.max(0, ...c.final.map(Math.abs), ...c.load.rows.map(Math.abs));
+  const force = sizeOf(eq, c);
   const diagonal = new Map(solved.entries.filter((f) => f.i === f.j).map((f) => [f.i, f.total]));
   /** The gap that the largest force of the case would open here: what a rounding of forces is to be held against. */
   const opened = (i: number, { members }: SolvedForces['units'][number]) => {
@@ -100,7 +99,7 @@ function gapResidual(
       const d = bar && result.members[bar.member.id];
       if (!bar || !d || !local) continue;
       const { L } = bar.axis;
-      const own = stretches(bar.member, L);
+      const own = bar.stretches;
       const line = [{ from: 0, to: L, c: [u.m0, (u.m1 - u.m0) / L] }];
       for (const t of own) {
         const work = integralOfProduct(between(d.M, t.from, t.to), between(line, t.from, t.to));
@@ -126,9 +125,32 @@ function gapResidual(
   return worst;
 }
 
-function agreement(eq: Equilibrium, one: CaseResult, other: StiffnessCase): number {
-  let force = 0;
-  let moment = 0;
+/**
+ * The largest force of a case, its loads among them, and what its strains and movements would call for in a member held
+ * fast: what rounding is to be held against where all forces are none.
+ */
+function sizeOf(eq: Equilibrium, c: SolvedCase): number {
+  const strained = eq.bars.map(({ member, axis: { L } }, b) => {
+    const local = c.load.local[b];
+    if (!local) return 0;
+    const part = Math.abs(local.strain) + Math.abs(local.curvature) * L + Math.abs(local.misfit) / L;
+    return (part * member.EI) / L ** 2;
+  });
+  const stiffest = eq.bars.reduce((most, { member }) => Math.max(most, member.EI), 0);
+  const moved = c.movements.map((m) => {
+    const part = m.component === 'turn' ? m.value : m.value / eq.length;
+    return (part * stiffest) / eq.length ** 2;
+  });
+  return largest(c.final, c.load.rows, strained, moved);
+}
+
+function largest(...lists: Iterable<number>[]): number {
+  let most = 0;
+  for (const list of lists) for (const v of list) most = Math.max(most, Math.abs(v));
+  return most;
+}
+
+function agreement(eq: Equilibrium, c: SolvedCase, one: CaseResult, other: StiffnessCase): number {
   let off = 0;
   const pairs: { a: number; b: number; moment: boolean }[] = [];
   for (const r of one.reactions) {
@@ -146,16 +168,13 @@ function agreement(eq: Equilibrium, one: CaseResult, other: StiffnessCase): numb
     const m = other.members[b];
     if (!d || !m) return;
     const start = (f: typeof d.M) => f[0]?.c[0] as number;
+    if (!other.open.has(bar.member.id)) pairs.push({ a: start(d.N), b: m.N, moment: false });
     pairs.push({ a: start(d.M), b: m.M0, moment: true });
     const last = d.M.at(-1);
     const end = last?.c.reduce((t, c, k) => t + c * (last.to - last.from) ** k, 0) as number;
     pairs.push({ a: end, b: m.M1, moment: true });
   });
-  for (const p of pairs) {
-    if (p.moment) moment = Math.max(moment, Math.abs(p.a));
-    else force = Math.max(force, Math.abs(p.a));
-  }
-  const size = Math.max(force, moment / eq.length);
+  const size = sizeOf(eq, c);
   if (size === 0) return Math.max(0, ...pairs.map((p) => Math.abs(p.b)));
   for (const p of pairs) off = Math.max(off, Math.abs(p.a - p.b) / (p.moment ? size * eq.length : size));
   return off;

@@ -1,24 +1,22 @@
 import type { DisplacementAsk } from '@/lib/model/analysis';
 import type { Load } from '@/lib/model/load';
 import type { Quantity } from '@/lib/model/quantity';
-import { between, integralOfProduct, valueAt } from '../diagrams/piecewise';
-import { stretches } from '../diagrams/stretches';
 import { stateOf } from '../primary-structure';
 import type { DisplacementResult } from '../solution';
-import { type Equilibrium, loadState } from '../statics/equilibrium';
+import { type Equilibrium, type LoadState, loadState } from '../statics/equilibrium';
 import { planStatics } from '../statics/plan-statics';
 import { writeStatics } from '../statics/write-statics';
+import { displacementRows } from './displacement-rows';
+import { settlementRow, springRow } from './flexibility';
 import { endForces, memberDiagram } from './member-state';
 import type { Reference } from './reference';
 import { type PrimaryBasis, primaryForces, writtenRedundants } from './self-stress';
-import type { SolvedForces } from './solve-redundants';
+import type { SolvedCase, SolvedForces } from './solve-redundants';
 import type { WorkRow } from './work';
-import { straightParts } from './work-row';
 
 /**
- * Each displacement asked for by a unit load on the primary structure (reduction theorem): the work of its diagram with
- * the final one. Rows are areas of the unit diagram on the stretches where it is straight, times nothing that is not
- * exact: the ordinate is the weighted one of the final diagram, area × ordinate being the integral itself.
+ * Each displacement asked for, by a unit load on the primary structure: its work with the deformations of the structure
+ * itself (reduction theorem).
  */
 export function askedDisplacements(
   eq: Equilibrium,
@@ -26,87 +24,23 @@ export function askedDisplacements(
   solved: SolvedForces,
   reference: Reference,
 ): DisplacementResult[] {
+  const { displacements } = eq.analysis;
   const names = basis.redundants.map((q) => eq.quantities[q] as Quantity);
-  const written = eq.analysis.displacements.length > 0 && names.length <= writtenRedundants;
+  const written = displacements.length > 0 && names.length <= writtenRedundants;
   const plan = written ? planStatics(eq, names) : undefined;
-  return eq.analysis.displacements.map((ask, index): DisplacementResult => {
+  return displacements.map((ask, index): DisplacementResult => {
     const loads = [unitLoad(ask)];
     const load = loadState(eq, loads);
-    const scaled = primaryForces(eq, basis, load.rows);
-    const value = (q: number) => scaled[q] as number;
-    const unit = {
-      ...stateOf(eq, value, load),
-      lines: plan ? writeStatics(plan, { kind: 'loads', loads }) : [],
-    };
-    const cases = Object.fromEntries(
-      [...solved.cases].map(([id, c]) => {
-        const rows = eq.bars.flatMap((bar, b) => {
-          const final = memberDiagram(
-            eq,
-            b,
-            endForces(eq, b, (q) => c.final[q] as number, c.load),
-            c.load,
-          );
-          const mine = memberDiagram(eq, b, endForces(eq, b, value, load), load);
-          const local = c.load.local[b];
-          return local
-            ? workRows(
-                bar.member.id,
-                stretches(bar.member, bar.axis.L),
-                mine,
-                final,
-                local,
-                reference.EI0,
-                bar.axis.L,
-              )
-            : [];
-        });
-        for (const s of solved.held) {
-          const [R, F] = [
-            value(s.column) * (eq.scale[s.column] as number),
-            (c.final[s.column] as number) * (eq.scale[s.column] as number),
-          ];
-          if (R !== 0)
-            rows.push({
-              kind: 'spring',
-              joint: s.joint,
-              component: s.component,
-              unit: R,
-              force: F,
-              stiffness: s.stiffness,
-              value: (reference.EI0 * R * F) / s.stiffness,
-            });
-        }
-        for (const m of c.movements) {
-          const R = value(m.column) * (eq.scale[m.column] as number);
-          if (R !== 0)
-            rows.push({
-              kind: 'settlement',
-              joint: m.joint,
-              component: m.component,
-              unit: R,
-              movement: m.value,
-              value: -reference.EI0 * R * m.value,
-            });
-        }
-        const total = rows.reduce((t, r) => t + r.value, 0);
-        return [
-          id,
-          { rows, total, value: reference.value === undefined ? undefined : total / reference.value },
-        ];
-      }),
-    );
-    const combinations = eq.analysis.combinations.map((combination) => {
-      const parts = Object.entries(combination.factors).map(([id, f]) => ({ f, v: cases[id]?.value }));
-      const known = parts.every((p) => p.v !== undefined);
-      const total = known ? parts.reduce((t, p) => t + p.f * (p.v as number), 0) : undefined;
-      return {
-        id: combination.id,
-        value: total,
-        ratio: total !== undefined && ask.limit ? Math.abs(total) / ask.limit.value : undefined,
-      };
-    });
-    return { ask: index, unit, cases, combinations };
+    const unit = primaryForces(eq, basis, load.rows);
+    const state = stateOf(eq, (q) => unit[q] as number, load);
+    const lines = plan ? writeStatics(plan, { kind: 'loads', loads }) : [];
+    const cases: DisplacementResult['cases'] = {};
+    for (const [id, c] of solved.cases) {
+      const rows = workRows(eq, { unit, load }, c, solved.held, reference.EI0);
+      const total = rows.reduce((t, r) => t + r.value, 0);
+      cases[id] = { rows, total, value: reference.value === undefined ? undefined : total / reference.value };
+    }
+    return { ask: index, unit: { ...state, lines }, cases, combinations: combined(eq, ask, cases) };
   });
 }
 
@@ -115,112 +49,49 @@ function unitLoad(ask: DisplacementAsk): Load {
   return { kind: 'point', member: ask.member, at: ask.at, direction: ask.direction, value: 1 };
 }
 
-type Diagrams = ReturnType<typeof memberDiagram>;
-
 function workRows(
-  member: string,
-  own: ReturnType<typeof stretches>,
-  unit: Diagrams,
-  final: Diagrams,
-  local: { strain: number; curvature: number; misfit: number },
+  eq: Equilibrium,
+  one: { unit: Float64Array; load: LoadState },
+  c: SolvedCase,
+  held: SolvedForces['held'],
   EI0: number,
-  L: number,
 ): WorkRow[] {
-  const rows: WorkRow[] = [];
-  for (const s of own) {
-    for (const piece of between(unit.M, s.from, s.to)) {
-      const { from, to } = piece;
-      const window = between(final.M, from, to);
-      for (const part of straightParts(from, to, valueAt([piece], from), valueAt([piece], to, 'left'))) {
-        const shape =
-          part.shape === 'rectangle'
-            ? [{ from, to, c: [part.height] }]
-            : [
-                {
-                  from,
-                  to,
-                  c:
-                    part.centroid < (from + to) / 2
-                      ? [part.height, -part.height / (to - from)]
-                      : [0, part.height / (to - from)],
-                },
-              ];
-        const work = integralOfProduct(shape, window);
-        const k = s.EI / EI0;
-        rows.push({
-          kind: 'bending',
-          member,
-          from,
-          to,
-          shape: part.shape,
-          height: part.height,
-          area: part.area,
-          centroid: part.centroid,
-          ordinate: work / part.area,
-          k,
-          value: work / k,
-        });
-      }
-    }
-    const constant = (f: Diagrams['N']) =>
-      integralOfProduct(between(f, s.from, s.to), [{ from: s.from, to: s.to, c: [1] }]) / (s.to - s.from);
-    if (s.EA !== undefined && constant(unit.N) !== 0) {
-      const work = integralOfProduct(between(unit.N, s.from, s.to), between(final.N, s.from, s.to));
-      rows.push({
-        kind: 'axial',
-        member,
-        unit: constant(unit.N),
-        force: work / ((s.to - s.from) * constant(unit.N)),
-        length: s.to - s.from,
-        EA: s.EA,
-        value: (EI0 * work) / s.EA,
-      });
-    }
-    if (s.GAs !== undefined) {
-      for (const piece of between(unit.V, s.from, s.to)) {
-        const V = valueAt([piece], piece.from);
-        const length = piece.to - piece.from;
-        const force =
-          integralOfProduct(between(final.V, piece.from, piece.to), [
-            { from: piece.from, to: piece.to, c: [1] },
-          ]) / length;
-        if (V !== 0)
-          rows.push({
-            kind: 'shear',
-            member,
-            unit: V,
-            force,
-            length,
-            GAs: s.GAs,
-            value: (EI0 * V * force * length) / s.GAs,
-          });
-      }
-    }
+  const diagram = (forces: Float64Array, load: LoadState, b: number) =>
+    memberDiagram(
+      eq,
+      b,
+      endForces(eq, b, (q) => forces[q] as number, load),
+      load,
+    );
+  const rows = eq.bars.flatMap((bar, b) => {
+    const local = c.load.local[b];
+    if (!local) throw new Error(`no loads of ${bar.member.id}`);
+    return displacementRows(bar, diagram(one.unit, one.load, b), diagram(c.final, c.load, b), local, EI0);
+  });
+  const pressed = (forces: Float64Array, q: number) => (forces[q] as number) * (eq.scale[q] as number);
+  for (const s of held) {
+    const R = pressed(one.unit, s.column);
+    if (R !== 0) rows.push(springRow(s, R, pressed(c.final, s.column), EI0));
   }
-  const one: Diagrams['N'] = [{ from: 0, to: L, c: [1] }];
-  const N = integralOfProduct(unit.N, one) / L;
-  if (local.strain !== 0 && N !== 0)
-    rows.push({
-      kind: 'temperature',
-      member,
-      unit: N,
-      alpha: 1,
-      rise: local.strain,
-      length: L,
-      value: EI0 * N * local.strain * L,
-    });
-  if (local.misfit !== 0 && N !== 0)
-    rows.push({ kind: 'misfit', member, unit: N, misfit: local.misfit, value: EI0 * N * local.misfit });
-  if (local.curvature !== 0) {
-    const area = integralOfProduct(unit.M, one);
-    if (area !== 0)
-      rows.push({
-        kind: 'gradient',
-        member,
-        area,
-        curvature: local.curvature,
-        value: EI0 * area * local.curvature,
-      });
+  for (const m of c.movements) {
+    const R = pressed(one.unit, m.column);
+    if (R !== 0) rows.push(settlementRow(m, R, EI0));
   }
   return rows;
+}
+
+function combined(
+  eq: Equilibrium,
+  ask: DisplacementAsk,
+  cases: DisplacementResult['cases'],
+): DisplacementResult['combinations'] {
+  return eq.analysis.combinations.map(({ id, factors }) => {
+    let value: number | undefined = 0;
+    for (const [name, factor] of Object.entries(factors)) {
+      const one: number | undefined = cases[name]?.value;
+      value = value === undefined || one === undefined ? undefined : value + factor * one;
+    }
+    const ratio = value !== undefined && ask.limit ? Math.abs(value) / ask.limit.value : undefined;
+    return { id, value, ratio };
+  });
 }

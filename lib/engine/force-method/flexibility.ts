@@ -51,7 +51,13 @@ export function springs(eq: Equilibrium): Springs[] {
   });
 }
 
-function springRow(s: Springs, unit: number, force: number, EI0: number): WorkRow {
+/** −EI0 R̄ Δ */
+export function settlementRow({ joint, component, value }: Movement, unit: number, EI0: number): WorkRow {
+  return { kind: 'settlement', joint, component, unit, movement: value, value: -EI0 * unit * value };
+}
+
+/** EI0 R̄ R/k */
+export function springRow(s: Springs, unit: number, force: number, EI0: number): WorkRow {
   const { joint, component, stiffness } = s;
   return {
     kind: 'spring',
@@ -150,15 +156,7 @@ export function gapRows(
   for (const m of movements) {
     const unit = i.reactions.get(m.column);
     if (unit === undefined || m.column === released) continue;
-    const { joint, component, value } = m;
-    rows.push({
-      kind: 'settlement',
-      joint,
-      component,
-      unit,
-      movement: value,
-      value: -EI0 * unit * value,
-    });
+    rows.push(settlementRow(m, unit, EI0));
   }
   return rows;
 }

@@ -1,10 +1,9 @@
 import { between, integralOfProduct } from '../diagrams/piecewise';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
-import { stretches } from '../diagrams/stretches';
 import type { Equilibrium } from '../statics/equilibrium';
 import { solveBasisTransposed } from '../statics/solve-lu';
 import type { Springs } from './flexibility';
-import { endForces, memberDiagram } from './member-state';
+import type { memberDiagram } from './member-state';
 import type { PrimaryBasis } from './self-stress';
 import type { SolvedCase } from './solve-redundants';
 
@@ -17,17 +16,9 @@ export function jointDisplacements(
   eq: Equilibrium,
   basis: PrimaryBasis,
   solved: SolvedCase,
+  diagrams: readonly ReturnType<typeof memberDiagram>[],
   held: readonly Springs[],
 ): Float64Array {
-  const diagrams = eq.bars.map((_, b) =>
-    memberDiagram(
-      eq,
-      b,
-      endForces(eq, b, (q) => solved.final[q] as number, solved.load),
-      solved.load,
-    ),
-  );
-  const barOf = new Map(eq.bars.map((bar, b) => [bar.member.id, b]));
   const right = basis.lu.basis.map((column) => {
     const q = eq.quantities[column];
     if (!q) throw new Error('no such quantity');
@@ -38,13 +29,13 @@ export function jointDisplacements(
       const moves = solved.movements.filter((m) => m.column === column);
       return scale * moves.reduce((t, m) => t + m.value, 0);
     }
-    const b = barOf.get(q.member) as number;
+    const b = eq.barOf[column] as number;
     const bar = eq.bars[b];
     const d = diagrams[b];
     const local = solved.load.local[b];
     if (!bar || !d || !local) throw new Error(`no member ${q.member}`);
     const { L } = bar.axis;
-    const own = stretches(bar.member, L);
+    const own = bar.stretches;
     if (q.kind === 'axial') {
       const elongation = own.reduce(
         (t, s) => t + (s.EA === undefined ? 0 : within(d.N, s.from, s.to, [1]) / s.EA),

@@ -1,7 +1,6 @@
 import type { LocalLoads } from '../diagrams/local-loads';
 import type { memberForces } from '../diagrams/member-forces';
 import { valueAt } from '../diagrams/piecewise';
-import { stretches } from '../diagrams/stretches';
 import type { Bar } from '../statics/equilibrium';
 import { cantileverShapes } from './cantilever-shapes';
 import { type Shape, triangle } from './part-shapes';
@@ -42,9 +41,17 @@ export function momentParts(
     if (free('start')) return named(cantileverShapes(beyond(0), L, 'end'));
     if (free('end')) return named(cantileverShapes(beyond(L), L, 'start'));
   }
-  return stretches(bar.member, L).flatMap(({ from, to }) =>
-    named([...endShapes(M, from, to), ...loadShapes(loads, from, to)]),
-  );
+  return bar.stretches.flatMap(({ from, to }) => named(shapesBetween(M, loads, from, to)));
+}
+
+/** A moment diagram between two places: its end values as two triangles, and what the loads add on a simple span. */
+export function shapesBetween(
+  M: ReturnType<typeof memberForces>['M'],
+  loads: LocalLoads,
+  from: number,
+  to: number,
+): { shape: Shape; due: Due }[] {
+  return [...endShapes(M, from, to), ...loadShapes(loads, from, to)];
 }
 
 function endShapes(M: ReturnType<typeof memberForces>['M'], from: number, to: number) {

@@ -1,6 +1,7 @@
 import type { Quantity } from '@/lib/model/quantity';
 import type { Equilibrium } from '../statics/equilibrium';
 import { planStatics } from '../statics/plan-statics';
+import { exchangeRedundants } from './exchange-redundants';
 import { proposalOrder, sweepOrder } from './proposal-order';
 import { type PrimaryBasis, primaryBasis, writtenRedundants } from './self-stress';
 
@@ -8,9 +9,14 @@ import { type PrimaryBasis, primaryBasis, writtenRedundants } from './self-stres
  * The set that the engine proposes. Continuous beams: moments over the supports, so that the three-moment equation
  * appears by itself. A frame with one redundant: the thrust at its last base, as it is done by hand. Other frames:
  * hinges; where a person could not find the forces of that structure one at a time, reactions from the last base
- * backwards. Large frames: what is left over joint by joint from the ground up.
+ * backwards. Large frames: what is left over joint by joint from the ground up. A set whose unit states call up forces
+ * many times their own is exchanged for a better one.
  */
 export function proposeRedundants(eq: Equilibrium): PrimaryBasis {
+  return exchangeRedundants(familiarRedundants(eq));
+}
+
+function familiarRedundants(eq: Equilibrium): PrimaryBasis {
   const hinges = primaryBasis(eq, proposalOrder(eq));
   if (!hinges) return primaryBasis(eq, sweepOrder(eq), true) as PrimaryBasis;
   const n = hinges.redundants.length;

@@ -1,6 +1,5 @@
 import type { LocalLoads } from '../diagrams/local-loads';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
-import { stretches } from '../diagrams/stretches';
 import type { Bar } from '../statics/equilibrium';
 import type { MomentPart, WorkRow } from './work';
 
@@ -39,7 +38,7 @@ export function straightParts(
 /** ∫ m̄_i m̄_j / k over one member, as areas of m̄_j times ordinates of m̄_i. */
 export function bendingRows(bar: Bar, i: UnitMoments, j: UnitMoments, EI0: number): WorkRow[] {
   const { L } = bar.axis;
-  return stretches(bar.member, L).flatMap(({ from, to, EI }) =>
+  return bar.stretches.flatMap(({ from, to, EI }) =>
     straightParts(from, to, at(j, from, L), at(j, to, L)).map((part): WorkRow => {
       const k = EI / EI0;
       const ordinate = at(i, part.centroid, L);
@@ -59,7 +58,7 @@ export function bendingRows(bar: Bar, i: UnitMoments, j: UnitMoments, EI0: numbe
 
 /** ∫ m̄_i M_0 / k: the area of each part times the ordinate of m̄_i at its centroid; a part lies within one stiffness. */
 export function partRows(bar: Bar, i: UnitMoments, parts: readonly MomentPart[], EI0: number): WorkRow[] {
-  const own = stretches(bar.member, bar.axis.L);
+  const own = bar.stretches;
   return parts.map((part): WorkRow => {
     const ordinate = at(i, part.centroid, bar.axis.L);
     const { from, to, shape, height, area, centroid, due } = part;
@@ -113,7 +112,7 @@ export function axialShearRows(
   EI0: number,
 ): WorkRow[] {
   const mean = (f: PiecewisePolynomial, from: number, to: number) => meanValue(f, from, to);
-  return stretches(bar.member, bar.axis.L).flatMap(({ from, to, EA, GAs }): WorkRow[] => {
+  return bar.stretches.flatMap(({ from, to, EA, GAs }): WorkRow[] => {
     const length = to - from;
     const rows: WorkRow[] = [];
     if (EA !== undefined && unit.N !== 0) {

@@ -4,12 +4,15 @@ import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Member } from '@/lib/model/structure';
 import { type LocalLoads, localLoads, type MemberAxis, memberAxis } from '../diagrams/local-loads';
 import { loadEndForces } from '../diagrams/member-forces';
+import { type Stretch, stretches } from '../diagrams/stretches';
 import type { SparseColumn } from './sparse-lu';
 
 /** A member with what statics needs of it: its joints, and the columns of N, M0 and M1 (−1 where released). */
 export interface Bar {
   member: Member;
   axis: MemberAxis;
+  /** Lengths of one stiffness. */
+  stretches: Stretch[];
   start: number;
   end: number;
   N: number;
@@ -48,7 +51,8 @@ export function equilibrium(analysis: Analysis): Equilibrium {
     const end = place.get(member.end) as number;
     const [a, b] = [analysis.joints[start], analysis.joints[end]];
     if (!a || !b) throw new Error(`member ${member.id} has no joint`);
-    return { member, axis: memberAxis(a, b), start, end, N: -1, M0: -1, M1: -1 };
+    const axis = memberAxis(a, b);
+    return { member, axis, stretches: stretches(member, axis.L), start, end, N: -1, M0: -1, M1: -1 };
   });
   const length = bars.reduce((sum, b) => sum + b.axis.L, 0) / bars.length;
   const releases = bars.flatMap((b) =>
