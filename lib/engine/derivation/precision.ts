@@ -66,9 +66,14 @@ export function fitColumns<K extends string>(
   rules: readonly ColumnRule<K>[],
 ): Record<K, number> {
   const decimals: Record<K, number> = { ...start };
-  for (const rule of rules) {
-    for (const row of rows) fitRow(row, rule, decimals);
-  }
+  let before: string;
+  do {
+    // A figure that one row gets is printed in all, so rows looked over before are looked over again.
+    before = JSON.stringify(decimals);
+    for (const rule of rules) {
+      for (const row of rows) fitRow(row, rule, decimals);
+    }
+  } while (JSON.stringify(decimals) !== before);
   return decimals;
 }
 
