@@ -36,7 +36,7 @@ export function placesOf(e: Element, { joints }: Numbering): (number | undefined
 
 /** −F f + B d = e for the members, Bᵀ f − R = P for the joints, −d − R/k = −Δ at the supports. */
 function assemble(elements: readonly Element[], numbering: Numbering): SymmetricSystem {
-  const system = new SymmetricSystem(numbering.count);
+  const system = new SymmetricSystem(naturalSizes(elements, numbering));
   elements.forEach((e, i) => {
     const unknowns = numbering.modes[i] as number[];
     const places = placesOf(e, numbering);
@@ -62,4 +62,30 @@ function assemble(elements: readonly Element[], numbering: Numbering): Symmetric
     }
   });
   return system;
+}
+
+/**
+ * Forces and displacements in units of the structure's own, so that flexibility weighs as much as geometry: a mean length,
+ * and the displacement that a unit force causes on a mean member.
+ */
+function naturalSizes(elements: readonly Element[], numbering: Numbering): Float64Array {
+  const mean = (of: (e: Element) => number) =>
+    Math.exp(elements.reduce((t, e) => t + Math.log(of(e)), 0) / elements.length);
+  const length = mean((e) => e.L);
+  const give = Math.sqrt(mean((e) => e.flexibility[1][1]) * length ** 2);
+  const sizes = new Float64Array(numbering.count).fill(1 / give);
+  elements.forEach((e, i) => {
+    e.modes.forEach((mode, m) => {
+      if (mode[0] === 0) sizes[(numbering.modes[i] as number[])[m] as number] = length / give;
+    });
+  });
+  for (const { x, y, turn } of numbering.joints) {
+    sizes[x] = give;
+    sizes[y] = give;
+    if (turn !== undefined) sizes[turn] = give / length;
+  }
+  for (const list of numbering.reactions) {
+    for (const { component, index } of list) if (component === 'turn') sizes[index] = length / give;
+  }
+  return sizes;
 }

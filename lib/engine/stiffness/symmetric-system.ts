@@ -15,8 +15,13 @@ export interface SystemSolution {
 export class SymmetricSystem {
   private readonly entries: Map<number, number>[];
 
-  constructor(readonly size: number) {
-    this.entries = Array.from({ length: size }, () => new Map());
+  /** `start`: the natural size of every unknown, which the balancing of the matrix starts from. */
+  constructor(private readonly start: Float64Array) {
+    this.entries = Array.from({ length: start.length }, () => new Map());
+  }
+
+  get size(): number {
+    return this.start.length;
   }
 
   /** Adds to entry (i, j) and, off the diagonal, to its mirror image. */
@@ -70,7 +75,7 @@ export class SymmetricSystem {
 
   /** Powers of two that bring the largest entry of every row to about 1. Ruiz, RAL-TR-2001-034. */
   private balance(): Float64Array {
-    let scale = new Float64Array(this.size).fill(1);
+    let scale = this.start.map((v) => 2 ** Math.round(Math.log2(v)));
     for (let round = 0; round < 12; round++) {
       const next = scale.map((own, i) => {
         let most = 0;

@@ -5,7 +5,7 @@ import type { AnalysisInput } from '@/lib/model/analysis';
 import { difference, sizeOf, solveOrRefuse, toleranceOf, type Values, valuesOf } from './compare-results';
 import { between, type Load, randomStructure } from './random-structure';
 
-const numRuns = 250;
+const numRuns = 150;
 
 /** Solves both forms of one structure and compares every case, names of the second turned into those of the first. */
 function expectSame(
