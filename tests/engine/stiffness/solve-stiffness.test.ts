@@ -39,7 +39,7 @@ test('a propped cantilever carries three eighths of its load at the prop', () =>
   const r = solved({ ...propped(), loads: [uniform] });
   expect(r.reactions.get('B:y')).toBeCloseTo(36, 10);
   expect(r.members[0]?.M0).toBeCloseTo(-96, 10);
-  expect(r.members[0]?.M1).toBe(0);
+  expect(r.members[0]?.M1).toBeCloseTo(0, 12);
 });
 
 /** Prop of a Timoshenko cantilever by δ0/f11 with δ0 = wL⁴/8EI + wL²/2GAs, f11 = L³/3EI + L/GAs. */
