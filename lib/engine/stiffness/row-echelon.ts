@@ -6,6 +6,8 @@ interface Row {
   first: number;
   end: number;
   values: Float64Array;
+  /** How far rounding may have carried its entries: a running bound. Higham, Accuracy and Stability, §3.3. */
+  noise: number;
 }
 
 /** One row taken from another: row `target` −= factor · row `source`. */
@@ -29,11 +31,14 @@ export interface Echelon {
 /** A row may be taken as pivot when its entry is at least this part of the largest: the first such row is, to keep fill near. */
 const threshold = 0.1;
 
+/** A pivot of this size is one whatever the bound on its rounding says; the bound may be far too careful. */
+const certain = 1e-11;
+
 /**
- * Gaussian elimination on rows of a band or profile, whose entries are about 1 in size; one below `tolerance` is none.
+ * Gaussian elimination on rows of a band or profile, whose entries are about 1 in size; one that may be rounding is none.
  * Golub and Van Loan, Matrix Computations, 4th ed., §4.3.
  */
-export function toEchelon(matrix: readonly ReadonlyMap<number, number>[], tolerance: number): Echelon {
+export function toEchelon(matrix: readonly ReadonlyMap<number, number>[]): Echelon {
   const rows = matrix.map(toRow);
   const waiting: number[][] = rows.map(() => []);
   const left: number[] = [];
@@ -45,14 +50,16 @@ export function toEchelon(matrix: readonly ReadonlyMap<number, number>[], tolera
   for (let r = 0; r < rows.length; r++) wait(r);
   const steps: Step[] = [];
   const pivots = waiting.map((candidates) => {
-    const pivot = choosePivot(rows, candidates, tolerance);
+    const pivot = choosePivot(rows, candidates);
     const source = pivot === undefined ? undefined : (rows[pivot] as Row);
+    const spread = source ? source.noise + Number.EPSILON * largestOf(source) : 0;
     for (const r of candidates) {
       if (r === pivot) continue;
       const row = rows[r] as Row;
       if (source && pivot !== undefined) {
         const factor = leading(row) / leading(source);
         subtract(row, source, factor);
+        row.noise += Math.abs(factor) * spread;
         steps.push({ target: r, source: pivot, factor });
       }
       row.first++;
@@ -64,24 +71,32 @@ export function toEchelon(matrix: readonly ReadonlyMap<number, number>[], tolera
 }
 
 function toRow(entries: ReadonlyMap<number, number>): Row {
+  if (entries.size === 0) return { base: 0, first: 0, end: 0, values: new Float64Array(0), noise: 0 };
   const columns = [...entries.keys()];
   const base = Math.min(...columns);
   const end = Math.max(...columns) + 1;
-  if (columns.length === 0) return { base: 0, first: 0, end: 0, values: new Float64Array(0) };
   const values = new Float64Array(end - base);
   for (const [j, v] of entries) values[j - base] = v;
-  return { base, first: base, end, values };
+  const row = { base, first: base, end, values, noise: 0 };
+  return { ...row, noise: Number.EPSILON * largestOf(row) };
+}
+
+function largestOf({ values, first, end, base }: Row): number {
+  let most = 0;
+  for (let k = first - base; k < end - base; k++) most = Math.max(most, Math.abs(values[k] as number));
+  return most;
 }
 
 function leading(row: Row): number {
   return row.values[row.first - row.base] as number;
 }
 
-function choosePivot(rows: readonly Row[], candidates: readonly number[], tolerance: number) {
+function choosePivot(rows: readonly Row[], candidates: readonly number[]): number | undefined {
   const size = (r: number) => Math.abs(leading(rows[r] as Row));
-  const largest = candidates.reduce((most, r) => Math.max(most, size(r)), 0);
-  if (largest <= tolerance) return undefined;
-  return Math.min(...candidates.filter((r) => size(r) >= threshold * largest));
+  const real = candidates.filter((r) => size(r) > Math.min(certain, (rows[r] as Row).noise));
+  if (real.length === 0) return undefined;
+  const largest = real.reduce((most, r) => Math.max(most, size(r)), 0);
+  return Math.min(...real.filter((r) => size(r) >= threshold * largest));
 }
 
 /** row −= factor · source beyond the first column, which both have and which cancels. */

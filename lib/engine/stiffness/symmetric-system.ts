@@ -1,7 +1,5 @@
 import { backSubstitute, reduceRight, toEchelon } from './row-echelon';
 
-/** Entry of a scaled row below which it is rounding of one that vanishes. */
-const pivotTolerance = 1e-14;
 /** Part of a vector of unknowns below which an entry counts as untouched. */
 const untouched = 1e-8;
 
@@ -46,7 +44,7 @@ export class SymmetricSystem {
       for (const [j, v] of row) scaled.set(j, v * at(scale, i) * at(scale, j));
       return scaled;
     });
-    const echelon = toEchelon(matrix, pivotTolerance);
+    const echelon = toEchelon(matrix);
     const x: Float64Array[] = [];
     for (const right of rights) {
       const b = right.map((v, i) => v * at(scale, i));
