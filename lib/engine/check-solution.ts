@@ -174,8 +174,12 @@ function agreement(eq: Equilibrium, c: SolvedCase, one: CaseResult, other: Stiff
     const end = last?.c.reduce((t, c, k) => t + c * (last.to - last.from) ** k, 0) as number;
     pairs.push({ a: end, b: m.M1, moment: true });
   });
-  const size = sizeOf(eq, c);
-  if (size === 0) return Math.max(0, ...pairs.map((p) => Math.abs(p.b)));
+  // Couples that cancel leave no force but moments in the member between them.
+  const size = largest(
+    [sizeOf(eq, c)],
+    pairs.map((p) => (p.moment ? p.a / eq.length : p.a)),
+  );
+  if (size === 0) return largest(pairs.map((p) => p.b));
   for (const p of pairs) off = Math.max(off, Math.abs(p.a - p.b) / (p.moment ? size * eq.length : size));
   return off;
 }

@@ -16,10 +16,23 @@ export function refuseUnstable(eq: Equilibrium, basis: PrimaryBasis): Refusal | 
   const equations = eq.rowCount - eq.trivialRows.size;
   return {
     code: `unstable-${code}`,
-    message: `The structure is unstable: ${equations} equations, rank ${lu.basis.length}. ${message}`,
+    message: `The structure is unstable: ${equations} equations, rank ${lu.basis.length}. ${message}${wayOut(code)}`,
     place: { path: 'joints', joint, member: mechanism.pieces[0]?.members[0] },
     mechanism,
   };
+}
+
+function wayOut(code: string): string {
+  switch (code) {
+    case 'parallel':
+      return ' Add a support that holds it that way.';
+    case 'concurrent':
+      return ' Add a reaction that passes elsewhere, or hold a joint against turning.';
+    case 'not-connected':
+      return ' Join it to the rest, or support it.';
+    default:
+      return ' Take out a release, or add a support or a member that stops it.';
+  }
 }
 
 /** A couple on a joint where nothing can turn against it. */

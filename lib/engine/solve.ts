@@ -16,6 +16,7 @@ import type { Outcome } from './outcome';
 import { primaryStructure } from './primary-structure';
 import { refuseForm } from './refuse-form';
 import { refuseCoupleOnHinge, refuseUnstable } from './refuse-unstable';
+import { snapPlaces } from './snap-places';
 import type { Solution } from './solution';
 import { describeDeterminacy } from './statics/determinacy';
 import { type Equilibrium, equilibrium } from './statics/equilibrium';
@@ -49,7 +50,7 @@ export function solve(input: unknown): Outcome<Solution> {
 
 function solveValid(analysis: Analysis): Outcome<Solution> {
   const reference = referenceStiffness(analysis);
-  const eq = equilibrium(withReference(analysis, reference));
+  const eq = equilibrium(withReference(snapPlaces(analysis), reference));
   const proposed = proposeRedundants(eq);
   const unstable = refuseUnstable(eq, proposed) ?? refuseCoupleOnHinge(eq);
   if (unstable) return refused(unstable);

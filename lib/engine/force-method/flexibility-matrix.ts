@@ -23,9 +23,9 @@ export function flexibilityMatrix(eq: Equilibrium, basis: PrimaryBasis, EI0: num
     const scale = basis.local ? 1 : (eq.scale[basis.redundants[i] as number] as number);
     return unitState(eq, state, 1 / scale);
   });
-  const entries = overlapping(units).map(({ i, j }) => {
+  const entries = overlapping(units, held).flatMap(({ i, j }) => {
     const rows = flexibilityRows(eq, units[i] as UnitState, units[j] as UnitState, held, EI0);
-    return { i, j, rows, total: rows.reduce((t, r) => t + r.value, 0) };
+    return rows.length === 0 ? [] : [{ i, j, rows, total: rows.reduce((t, r) => t + r.value, 0) }];
   });
   const lines = units.map(() => new Map<number, number>());
   for (const { i, j, total } of entries) lines[i]?.set(j, total);
@@ -33,8 +33,8 @@ export function flexibilityMatrix(eq: Equilibrium, basis: PrimaryBasis, EI0: num
   return { units, held, entries, factor: factorEnvelope(matrix), condition: conditionOf(matrix) };
 }
 
-/** Pairs j ≤ i of states that bend, stretch or press on something in common; others have f_ij = 0. */
-function overlapping(units: readonly UnitState[]): { i: number; j: number }[] {
+/** Pairs j ≤ i of states that bend or stretch a member or press a spring in common; others have f_ij = 0. */
+function overlapping(units: readonly UnitState[], held: readonly Springs[]): { i: number; j: number }[] {
   const members = new Map<number, number[]>();
   const reactions = new Map<number, number[]>();
   const note = (users: Map<number, number[]>, key: number, i: number) => {
@@ -42,12 +42,14 @@ function overlapping(units: readonly UnitState[]): { i: number; j: number }[] {
     if (list) list.push(i);
     else users.set(key, [i]);
   };
+  const columns = new Set(held.map((s) => s.column));
   return units.flatMap((u, i) => {
+    const pressed = [...u.reactions.keys()].filter((q) => columns.has(q));
     const met = new Set<number>();
     for (const b of u.members.keys()) note(members, b, i);
-    for (const q of u.reactions.keys()) note(reactions, q, i);
+    for (const q of pressed) note(reactions, q, i);
     for (const b of u.members.keys()) for (const j of members.get(b) ?? []) met.add(j);
-    for (const q of u.reactions.keys()) for (const j of reactions.get(q) ?? []) met.add(j);
+    for (const q of pressed) for (const j of reactions.get(q) ?? []) met.add(j);
     return [...met].sort((a, b) => a - b).map((j) => ({ i, j }));
   });
 }

@@ -1,6 +1,8 @@
 import type { Analysis } from '@/lib/model/analysis';
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Solution } from '../solution';
+import type { Equilibrium } from '../statics/equilibrium';
+import { endJoint } from '../statics/name-force';
 import { tolerance } from '../tolerance';
 import { chooser, groundOf } from './choose';
 import type { PrimaryBasis } from './self-stress';
@@ -20,7 +22,7 @@ export function listChoices(analysis: Analysis, most = 40): GoodSet[] {
   if ('good' in ground || ground.proposed.redundants.length === 0) return [];
   const { eq, proposed } = ground;
   const name = (column: number) => eq.quantities[column] as Quantity;
-  const candidates = openForces(proposed).map((group) => group[0] as number);
+  const candidates = openForces(eq, proposed).map((group) => group[0] as number);
   const n = proposed.redundants.length;
   const all = numberOfSubsets(candidates.length, n) <= mostTrials;
   const sets = all ? subsets(candidates, n) : exchanges(proposed.redundants, candidates);
@@ -46,23 +48,26 @@ export function proposedChoices(solution: Solution): Quantity[] {
   if ('good' in ground) return solution.redundants;
   const { eq, proposed } = ground;
   const chosen = new Set(solution.redundants.map((q) => eq.indexOf.get(quantityKey(q)) as number));
-  const others = openForces(proposed).flatMap((group) =>
+  const others = openForces(eq, proposed).flatMap((group) =>
     group.some((q) => chosen.has(q)) ? [] : [eq.quantities[group[0] as number] as Quantity],
   );
   return [...solution.redundants, ...others];
 }
 
 /**
- * Columns that some redundant changes, in groups that are one force: their values in all self-stress states stand in
- * one ratio (the moments of two members at their joint, thrusts at the two ends of a portal). Redundants lead theirs.
+ * Columns that some redundant changes. Moments at one joint that are one moment (their values in all self-stress states
+ * stand in one ratio) form a group, led by a redundant where there is one.
  */
-function openForces({ states, redundants }: PrimaryBasis): number[][] {
+function openForces(eq: Equilibrium, { states, redundants }: PrimaryBasis): number[][] {
   const rows = new Map<number, [number, number][]>();
   states.forEach((state, i) => {
     let top = 0;
     for (const v of state.values()) top = Math.max(top, Math.abs(v));
     for (const [q, v] of state) {
-      if (Math.abs(v) > tolerance.fixed * top) rows.set(q, [...(rows.get(q) ?? []), [i, v]]);
+      if (Math.abs(v) <= tolerance.fixed * top) continue;
+      const row = rows.get(q);
+      if (row) row.push([i, v]);
+      else rows.set(q, [[i, v]]);
     }
   });
   const first = new Set(redundants);
@@ -71,10 +76,22 @@ function openForces({ states, redundants }: PrimaryBasis): number[][] {
   for (const q of columns) {
     const row = rows.get(q) as [number, number][];
     const lead = (row[0] as [number, number])[1];
-    const key = row.map(([i, v]) => `${i}:${(v / lead).toPrecision(8)}`).join();
-    groups.set(key, [...(groups.get(key) ?? []), q]);
+    const joint = turningAt(eq, eq.quantities[q] as Quantity);
+    const key =
+      joint === undefined
+        ? `${q}`
+        : `${joint}|${row.map(([i, v]) => `${i}:${(v / lead).toPrecision(8)}`).join()}`;
+    const group = groups.get(key);
+    if (group) group.push(q);
+    else groups.set(key, [q]);
   }
   return [...groups.values()];
+}
+
+/** The joint that a moment turns; undefined for forces. */
+function turningAt(eq: Equilibrium, q: Quantity): string | undefined {
+  if (q.kind === 'moment') return endJoint(eq, q);
+  return q.kind === 'reaction' && q.component === 'turn' ? q.joint : undefined;
 }
 
 function subsets(items: readonly number[], n: number): number[][] {
