@@ -50,23 +50,23 @@ export function primaryStructure(
   return { primary: { pieces, loaded, units }, work: { parts, flexibility, gaps } };
 }
 
-/** N, V, M and reactions of a state of scaled quantities; with `only`, the members it reaches. */
+/** N, V, M and reactions of a state of scaled quantities; with `only`, those that it reaches. */
 export function stateOf(
   eq: Equilibrium,
   value: (q: number) => number,
   load: LoadState | undefined,
   only?: ReadonlyMap<number, number>,
 ): Omit<StaticState, 'lines'> {
-  const reached = only && new Set([...only.keys()].map((q) => eq.barOf[q]));
+  const reached = only ? [...only.keys()].sort((a, b) => a - b) : eq.quantities.map((_, q) => q);
+  const bars = only ? [...new Set(reached.map((q) => eq.barOf[q] as number))] : eq.bars.map((_, b) => b);
   const members: Record<string, ReturnType<typeof memberDiagram>> = {};
-  eq.bars.forEach((bar, b) => {
-    if (reached && !reached.has(b)) return;
-    members[bar.member.id] = memberDiagram(eq, b, endForces(eq, b, value, load), load);
+  for (const b of bars) {
+    const bar = eq.bars[b];
+    if (bar) members[bar.member.id] = memberDiagram(eq, b, endForces(eq, b, value, load), load);
+  }
+  const reactions = reached.flatMap((q) => {
+    const quantity = eq.quantities[q];
+    return quantity?.kind === 'reaction' ? [{ quantity, value: value(q) * (eq.scale[q] as number) }] : [];
   });
-  const reactions = eq.quantities.flatMap((quantity, q) =>
-    quantity.kind === 'reaction' && (!only || only.has(q))
-      ? [{ quantity, value: value(q) * (eq.scale[q] as number) }]
-      : [],
-  );
   return { reactions, members };
 }

@@ -1,6 +1,7 @@
 import type { Equilibrium } from '../statics/equilibrium';
 import { solveBasis } from '../statics/solve-lu';
-import { factorColumns, type SparseLu } from '../statics/sparse-lu';
+import { sparseSolver } from '../statics/solve-sparse';
+import { factorColumns, type SparseColumn, type SparseLu } from '../statics/sparse-lu';
 import { tolerance } from '../tolerance';
 import { localStates } from './local-states';
 import { isRigidAlong } from './proposal-order';
@@ -40,12 +41,13 @@ export function primaryBasis(
 ): PrimaryBasis | undefined {
   const lu = factorColumns(eq.columns, order, eq.rowCount, tolerance.pivot);
   const unstable = lu.freeRows.some((r) => !eq.trivialRows.has(r));
+  const unitState = unitStates(eq, lu);
   const open: PrimaryBasis['open'] = [];
   const redundants: number[] = [];
   const rigid = isRigidAlong(eq);
   const keptSoft = new Set(lu.basis.filter((q) => !rigid(q)));
   for (const k of lu.aside) {
-    const state = rigid(k) ? unitState(eq, lu, k) : undefined;
+    const state = rigid(k) ? unitState(k) : undefined;
     const closed = state && [...state.keys()].every((q) => !keptSoft.has(q));
     if (state && closed && eq.quantities[k]?.kind === 'axial') open.push({ column: k, state });
     else redundants.push(k);
@@ -55,7 +57,7 @@ export function primaryBasis(
   const states: SelfStress[] = [];
   let entries = 0;
   for (const k of redundants) {
-    const state = unitState(eq, lu, k);
+    const state = unitState(k);
     states.push(state);
     entries += state.size;
     if (redundants.length > writtenRedundants && entries > widestStates * redundants.length) return undefined;
@@ -63,15 +65,17 @@ export function primaryBasis(
   return { lu, redundants, states, local, unstable, open };
 }
 
-/** The kept quantities under a unit of the one set aside. */
-function unitState(eq: Equilibrium, lu: SparseLu, k: number): SelfStress {
-  const right = new Float64Array(eq.rowCount);
-  const column = eq.columns[k];
-  column?.rows.forEach((r, i) => {
-    right[r] = -(column.values[i] as number);
-  });
-  const { z } = solveBasis(lu, right);
-  return sparseState(lu.basis, z, k);
+/** The kept quantities under a unit of one set aside. */
+function unitStates(eq: Equilibrium, lu: SparseLu): (k: number) => SelfStress {
+  const solve = sparseSolver(lu);
+  return (k) => {
+    const { pivots, values } = solve(eq.columns[k] as SparseColumn);
+    return sparseState(
+      pivots.map((p) => lu.basis[p] as number),
+      values,
+      k,
+    );
+  };
 }
 
 /** The state without entries that are rounding only. */

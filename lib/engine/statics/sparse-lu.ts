@@ -1,3 +1,5 @@
+import { reach } from './reach';
+
 /** A sparse column: row numbers and values. */
 export interface SparseColumn {
   rows: number[];
@@ -44,7 +46,10 @@ export function factorColumns(
     upper: [],
   };
   const x = new Float64Array(rowCount);
-  const visit = reach(lu);
+  const visit = reach(rowCount, (r) => {
+    const pivot = lu.pivotOf[r] as number;
+    return pivot === -1 ? [] : (lu.lower[pivot] as SparseColumn).rows;
+  });
   for (const k of order) {
     const column = columns[k] as SparseColumn;
     const size = Math.hypot(...column.values);
@@ -72,34 +77,6 @@ export function factorColumns(
   }
   for (let r = 0; r < rowCount; r++) if (lu.pivotOf[r] === -1) lu.freeRows.push(r);
   return lu;
-}
-
-/** Finds the rows that entries in given rows can reach through L, each before those it feeds. */
-function reach(lu: SparseLu): (rows: readonly number[]) => number[] {
-  const seen = new Int32Array(lu.rowCount);
-  let turn = 0;
-  return (rows) => {
-    turn++;
-    const done: number[] = [];
-    const path: { row: number; next: number }[] = [];
-    for (const start of rows) {
-      if (seen[start] === turn) continue;
-      seen[start] = turn;
-      path.push({ row: start, next: 0 });
-      for (let top = path.at(-1); top; top = path.at(-1)) {
-        const pivot = lu.pivotOf[top.row] as number;
-        const fed = pivot === -1 ? undefined : (lu.lower[pivot] as SparseColumn).rows[top.next++];
-        if (fed === undefined) {
-          done.push(top.row);
-          path.pop();
-        } else if (seen[fed] !== turn) {
-          seen[fed] = turn;
-          path.push({ row: fed, next: 0 });
-        }
-      }
-    }
-    return done.reverse();
-  };
 }
 
 /** x ← L⁻¹ x over the rows met; what stands on rows with a pivot is the column of U. */

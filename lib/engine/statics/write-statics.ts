@@ -118,13 +118,12 @@ function check(
   outside: readonly BodyForce[],
   known: ReadonlyMap<string, number>,
 ): StaticsLine[] {
-  const candidates = plan.left.map((e) => ({ e, terms: termsOf(plan, e, outside, known, new Set()) }));
-  const found =
-    candidates.find(({ e, terms }) => e.sum.kind === 'moment' && terms.length > 1) ??
-    candidates.find(({ terms }) => terms.length > 1);
-  if (!found) return [];
-  const residual = found.terms.reduce((s, t) => s + t.coefficient * t.value, 0);
-  return [
-    { kind: 'check', piece: plan.whole.members, sum: found.e.sum, terms: strip(found.terms), residual },
-  ];
+  const moments = plan.left.filter((e) => e.sum.kind === 'moment');
+  for (const e of [...moments, ...plan.left.filter((x) => x.sum.kind === 'force')]) {
+    const terms = strip(termsOf(plan, e, outside, known, new Set()));
+    if (terms.length < 2) continue;
+    const residual = terms.reduce((s, t) => s + t.coefficient * t.value, 0);
+    return [{ kind: 'check', piece: plan.whole.members, sum: e.sum, terms, residual }];
+  }
+  return [];
 }
