@@ -22,7 +22,7 @@ export function validateSize(analysis: Analysis): Refusal | undefined {
   return path
     ? {
         code: 'out-of-range',
-        message: `${path.join('.')} is too large or too small a number to reckon with.`,
+        message: `The number at ${path.join('.')} is too large or too small to reckon with.`,
         place: { path: path.join('.') },
       }
     : undefined;
