@@ -150,6 +150,9 @@ function largest(...lists: Iterable<number>[]): number {
   return most;
 }
 
+/** Moments below this part of force times length are those of a structure that hardly bends. */
+const unbent = 1e-6;
+
 function agreement(eq: Equilibrium, c: SolvedCase, one: CaseResult, other: StiffnessCase): number {
   let off = 0;
   const pairs: { a: number; b: number; moment: boolean }[] = [];
@@ -180,6 +183,9 @@ function agreement(eq: Equilibrium, c: SolvedCase, one: CaseResult, other: Stiff
     pairs.map((p) => (p.moment ? p.a / eq.length : p.a)),
   );
   if (size === 0) return largest(pairs.map((p) => p.b));
-  for (const p of pairs) off = Math.max(off, Math.abs(p.a - p.b) / (p.moment ? size * eq.length : size));
+  // Beside a very short member forces are huge and moments are not: moments are held against moments.
+  const bent = largest(pairs.map((p) => (p.moment ? p.a : 0)));
+  const moment = Math.max(bent, unbent * size * eq.length);
+  for (const p of pairs) off = Math.max(off, Math.abs(p.a - p.b) / (p.moment ? moment : size));
   return off;
 }

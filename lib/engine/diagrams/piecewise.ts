@@ -24,9 +24,11 @@ export function breaks(f: PiecewisePolynomial): number[] {
 }
 
 /** The same function cut at further places. */
-export function cutAt(f: PiecewisePolynomial, places: readonly number[]): Piece[] {
+export function cutAt(f: PiecewisePolynomial, places: readonly number[]): readonly Piece[] {
+  const inside = (p: Piece) => places.filter((s) => s > p.from && s < p.to);
+  if (f.every((p) => !places.some((s) => s > p.from && s < p.to))) return f;
   return f.flatMap((p) => {
-    const inner = [...new Set(places.filter((s) => s > p.from && s < p.to))].sort((a, b) => a - b);
+    const inner = [...new Set(inside(p))].sort((a, b) => a - b);
     const ends = [p.from, ...inner, p.to];
     return ends.slice(1).map((to, i) => {
       const from = ends[i] as number;
@@ -37,21 +39,20 @@ export function cutAt(f: PiecewisePolynomial, places: readonly number[]): Piece[
 
 /** Σ factor · f, on the union of all breaks. */
 export function sum(terms: readonly { f: PiecewisePolynomial; factor: number }[]): Piece[] {
-  const places = terms.flatMap((t) => breaks(t.f));
+  const [first, ...others] = terms;
+  if (!first) return [];
+  const alike = others.every(({ f }) => sameBreaks(f, first.f));
+  const places = alike ? [] : terms.flatMap((t) => breaks(t.f));
   const cut = terms.map((t) => ({ pieces: cutAt(t.f, places), factor: t.factor }));
-  const first = cut[0]?.pieces ?? [];
-  return first.map((p, i) => ({
+  return cutAt(first.f, places).map((p, i) => ({
     from: p.from,
     to: p.to,
-    c: cut.reduce<Coefficients>(
-      (c, t) =>
-        add(
-          c,
-          (t.pieces[i] as Piece).c.map((k) => k * t.factor),
-        ),
-      [],
-    ),
+    c: cut.reduce<Coefficients>((c, t) => add(c, (t.pieces[i] as Piece).c, t.factor), []),
   }));
+}
+
+function sameBreaks(f: PiecewisePolynomial, g: PiecewisePolynomial): boolean {
+  return f.length === g.length && f.every((p, i) => p.from === g[i]?.from && p.to === g[i]?.to);
 }
 
 /** Antiderivative, continuous, with value `start` at the beginning. */
@@ -111,6 +112,6 @@ export function zeros(f: PiecewisePolynomial): number[] {
 }
 
 /** The part of the function between two places. */
-export function between(f: PiecewisePolynomial, from: number, to: number): Piece[] {
+export function between(f: PiecewisePolynomial, from: number, to: number): readonly Piece[] {
   return cutAt(f, [from, to]).filter((p) => p.from >= from && p.to <= to);
 }
