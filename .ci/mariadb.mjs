@@ -56,7 +56,7 @@ export async function startMariadb(folder) {
     server,
   );
   const sql =
-    "CREATE DATABASE IF NOT EXISTS fairhand; CREATE OR REPLACE USER fairhand@'127.0.0.1' IDENTIFIED BY 'fairhand'; GRANT ALL ON fairhand.* TO fairhand@'127.0.0.1';";
+    "CREATE DATABASE IF NOT EXISTS fairhand; CREATE OR REPLACE USER fairhand@'127.0.0.1' IDENTIFIED BY 'fairhand'; GRANT ALL ON `fairhand%`.* TO fairhand@'127.0.0.1';";
   await run('mariadb', ['--no-defaults', `--socket=${socket}`, '-e', sql]);
   const stop = async () => {
     server.kill('SIGTERM');

@@ -6,6 +6,10 @@ export async function countAttempts(db: Knex, subject: string, since: Date): Pro
   return Number(row?.n);
 }
 
+export async function forgetAttempts(db: Knex, subject: string): Promise<void> {
+  await db('attempts').where({ subject }).delete();
+}
+
 export async function insertAttempt(db: Knex, subject: string, at: Date): Promise<void> {
   await db('attempts').insert({ subject, at });
 }

@@ -77,9 +77,54 @@ export async function takeNumber(
     .first();
   if (!job) return undefined;
   await trx('jobs')
-    .where({ id: jobId })
+    .where({ office_id: officeId, id: jobId })
     .update({ [counter]: job[counter] + 1 });
   return job[counter];
+}
+
+export async function setJobState(
+  trx: Knex,
+  officeId: string,
+  id: string,
+  state: JobRow['state'],
+): Promise<number> {
+  return trx('jobs').where({ office_id: officeId, id }).update({ state, changed_at: new Date() });
+}
+
+export const jobParts = ['engineer-of-record', 'originator', 'checker'] as const;
+export type JobPart = (typeof jobParts)[number];
+
+export interface JobPersonRow {
+  job_id: string;
+  office_id: string;
+  person_id: string;
+  part: JobPart;
+}
+
+/** Who does what on a job. */
+export async function jobPeople(
+  db: Knex,
+  officeId: string,
+  jobId: string,
+): Promise<(JobPersonRow & { name: string; initials: string })[]> {
+  return db('job_people as jp')
+    .join('people as p', 'p.id', 'jp.person_id')
+    .where({ 'jp.office_id': officeId, 'jp.job_id': jobId })
+    .orderBy(['jp.part', 'p.name'])
+    .select('jp.*', 'p.name', 'p.initials');
+}
+
+/** Gives one part of a job to these people and to nobody else. */
+export async function setJobPeople(
+  trx: Knex,
+  officeId: string,
+  jobId: string,
+  part: JobPart,
+  personIds: readonly string[],
+): Promise<void> {
+  await trx('job_people').where({ office_id: officeId, job_id: jobId, part }).delete();
+  const rows = personIds.map((person_id) => ({ job_id: jobId, office_id: officeId, part, person_id }));
+  if (rows.length > 0) await trx('job_people').insert(rows);
 }
 
 export interface AuthorityRow {
@@ -105,4 +150,13 @@ export async function authorityById(
 
 export async function insertAuthority(db: Knex, row: AuthorityRow): Promise<void> {
   await db('authorities').insert({ ...row, decisions: JSON.stringify(row.decisions) });
+}
+
+export async function changeAuthority(
+  trx: Knex,
+  { office_id, id, decisions, ...row }: AuthorityRow,
+): Promise<number> {
+  return trx('authorities')
+    .where({ office_id, id })
+    .update({ ...row, decisions: JSON.stringify(decisions) });
 }

@@ -50,18 +50,24 @@ export async function claimMail(db: Knex, now: Date, abandoned: Date): Promise<M
   });
 }
 
+/**
+ * Writes down what became of a claimed mail. A sender that was so slow that another took the mail over changes nothing:
+ * `attempt` is the number of the try that it claimed.
+ */
 export async function settleMail(
   db: Knex,
   id: string,
+  attempt: number,
   outcome: { state: 'accepted' | 'refused' | 'queued'; words: string; nextTry?: Date },
-): Promise<void> {
-  await db('mails')
-    .where({ id })
+): Promise<boolean> {
+  const settled = await db('mails')
+    .where({ id, attempts: attempt, state: 'sending' })
     .update({
       state: outcome.state,
       server_words: outcome.words.slice(0, 500),
       ...(outcome.nextTry ? { next_try: outcome.nextTry } : {}),
     });
+  return settled === 1;
 }
 
 export async function mailsOfSubmittal(db: Knex, officeId: string, submittalId: string): Promise<MailRow[]> {

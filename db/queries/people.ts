@@ -61,11 +61,36 @@ export interface LicenceRow {
   jurisdiction: string;
   profession: string;
   number: string;
+  /** The last day on which it is in force, as midnight UTC of that day. */
   expires: Date;
 }
 
+/** Licences of the office that were not withdrawn. */
 export async function licencesOf(db: Knex, officeId: string): Promise<LicenceRow[]> {
-  return db('licences').where({ office_id: officeId }).orderBy('jurisdiction');
+  return db('licences').where({ office_id: officeId }).whereNull('withdrawn_at').orderBy('jurisdiction');
+}
+
+export async function withdrawLicence(trx: Knex, officeId: string, id: string, at: Date): Promise<number> {
+  return trx('licences')
+    .where({ office_id: officeId, id })
+    .whereNull('withdrawn_at')
+    .update({ withdrawn_at: at });
+}
+
+/** People of the office under a lock, so that two changes cannot both leave it without an administrator. */
+export async function lockPeople(trx: Knex.Transaction, officeId: string): Promise<PersonRow[]> {
+  return trx('people').where({ office_id: officeId }).forUpdate();
+}
+
+export async function changePerson(
+  trx: Knex,
+  officeId: string,
+  id: string,
+  change: { name: string; initials: string; roles: string[]; active: boolean },
+): Promise<void> {
+  await trx('people')
+    .where({ office_id: officeId, id })
+    .update({ ...change, roles: JSON.stringify(change.roles) });
 }
 
 export async function insertLicence(db: Knex, row: LicenceRow & { office_id: string }): Promise<void> {

@@ -55,32 +55,87 @@ export interface CommentRow {
   text: string;
   author: string;
   at: Date;
-  answer: string | null;
 }
 
-export async function commentsOf(db: Knex, officeId: string, submittalId: string): Promise<CommentRow[]> {
-  return db('comments').where({ office_id: officeId, submittal_id: submittalId }).orderBy('number');
+/** A comment as it stands: open until it is answered; the reviewer accepts the answer or opens it again. */
+export interface CommentLine extends CommentRow {
+  state: 'open' | 'answered' | 'accepted' | 'reopened';
+  /** The newest answer and the place that it names. */
+  answer: string | null;
+  place: string | null;
+}
+
+const newest = (column: string, kind = '') =>
+  `(SELECT p.${column} FROM responses p WHERE p.comment_id = c.id ${kind} ORDER BY p.id DESC LIMIT 1)`;
+
+const commentLines = (db: Knex) =>
+  db('comments as c').select(
+    'c.*',
+    db.raw(`COALESCE(${newest('kind')}, 'open') AS state`),
+    db.raw(`${newest('text', "AND p.kind = 'answered'")} AS answer`),
+    db.raw(`${newest('place', "AND p.kind = 'answered'")} AS place`),
+  );
+
+export async function commentsOf(db: Knex, officeId: string, submittalId: string): Promise<CommentLine[]> {
+  return commentLines(db)
+    .where({ 'c.office_id': officeId, 'c.submittal_id': submittalId })
+    .orderBy('c.number');
+}
+
+/** Every comment on any submittal of a job, with the number of its submittal. */
+export async function commentsOfJob(
+  db: Knex,
+  officeId: string,
+  jobId: string,
+): Promise<(CommentLine & { submittal: number })[]> {
+  return commentLines(db)
+    .join('submittals as s', 's.id', 'c.submittal_id')
+    .where({ 'c.office_id': officeId, 's.job_id': jobId })
+    .orderBy(['s.number', 'c.number'])
+    .select('s.number as submittal');
+}
+
+export async function commentById(
+  db: Knex,
+  officeId: string,
+  id: string,
+): Promise<(CommentLine & { job_id: string }) | undefined> {
+  return commentLines(db)
+    .join('submittals as s', 's.id', 'c.submittal_id')
+    .where({ 'c.office_id': officeId, 'c.id': id })
+    .select('s.job_id')
+    .first();
+}
+
+export interface ResponseRow {
+  office_id: string;
+  comment_id: string;
+  kind: 'answered' | 'accepted' | 'reopened';
+  text: string;
+  place: string;
+  author: string;
+  at: Date;
+}
+
+export async function insertResponse(trx: Knex, row: ResponseRow): Promise<void> {
+  await trx('responses').insert(row);
+}
+
+/** All that was said under a comment, in order. */
+export async function responsesOf(db: Knex, officeId: string, commentId: string): Promise<ResponseRow[]> {
+  return db('responses').where({ office_id: officeId, comment_id: commentId }).orderBy('id');
 }
 
 /** Numbers comments under the lock of their submittal, so that two at once get two numbers. */
-export async function insertComment(
-  trx: Knex.Transaction,
-  row: Omit<CommentRow, 'number' | 'answer'>,
-): Promise<number> {
-  await trx('submittals').where({ id: row.submittal_id }).forUpdate().first('id');
-  const last = await trx('comments').where({ submittal_id: row.submittal_id }).max({ n: 'number' }).first();
+export async function insertComment(trx: Knex.Transaction, row: Omit<CommentRow, 'number'>): Promise<number> {
+  await trx('submittals').where({ office_id: row.office_id, id: row.submittal_id }).forUpdate().first('id');
+  const last = await trx('comments')
+    .where({ office_id: row.office_id, submittal_id: row.submittal_id })
+    .max({ n: 'number' })
+    .first();
   const number = last?.n === null || last?.n === undefined ? 1 : Number(last.n) + 1;
   await trx('comments').insert({ ...row, number });
   return number;
-}
-
-export async function answerComment(
-  trx: Knex,
-  officeId: string,
-  id: string,
-  answer: string,
-): Promise<number> {
-  return trx('comments').where({ office_id: officeId, id }).update({ answer });
 }
 
 export async function decisionOf(

@@ -96,6 +96,34 @@ export async function newestDraft(
     .first('d.version', 'd.body', 'd.kept_at', 'd.kept_by', 'p.name');
 }
 
+/** The versions of a draft, newest first, without their bodies. */
+export async function draftVersions(
+  db: Knex,
+  officeId: string,
+  sheetId: string,
+  page: { size: number; offset: number },
+): Promise<Omit<DraftRow, 'body'>[]> {
+  return db('drafts as d')
+    .join('people as p', 'p.id', 'd.kept_by')
+    .where({ 'd.office_id': officeId, 'd.sheet_id': sheetId })
+    .orderBy('d.version', 'desc')
+    .limit(page.size)
+    .offset(page.offset)
+    .select('d.version', 'd.kept_at', 'd.kept_by', 'p.name');
+}
+
+export async function draftByVersion(
+  db: Knex,
+  officeId: string,
+  sheetId: string,
+  version: number,
+): Promise<DraftRow | undefined> {
+  return db('drafts as d')
+    .join('people as p', 'p.id', 'd.kept_by')
+    .where({ 'd.office_id': officeId, 'd.sheet_id': sheetId, 'd.version': version })
+    .first('d.version', 'd.body', 'd.kept_at', 'd.kept_by', 'p.name');
+}
+
 export async function insertDraft(
   trx: Knex,
   row: { sheetId: string; officeId: string; version: number; body: unknown; by: string; at: Date },

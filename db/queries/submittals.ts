@@ -8,10 +8,13 @@ export interface SubmittalRow {
   number: number;
   purpose: string;
   remarks: string;
-  state: 'drafted' | 'sealed' | 'sent' | 'decided';
+  state: 'drafted' | 'sealed' | 'sent' | 'decided' | 'void';
   pages: number;
   created_by: string;
   created_at: Date;
+  /** The engineer of record named on its cover, who alone seals it. */
+  engineer_id: string;
+  void_reason: string | null;
 }
 
 export async function submittalsOf(
@@ -60,6 +63,24 @@ export async function setSubmittalState(
   await trx('submittals').where({ office_id: officeId, id }).update({ state });
 }
 
+/** Submittals that hold a revision of this sheet; their rows are locked. */
+export async function submittalsWithSheet(
+  trx: Knex.Transaction,
+  officeId: string,
+  sheetId: string,
+): Promise<SubmittalRow[]> {
+  const holding = trx('submittal_revisions as sr')
+    .join('revisions as r', 'r.id', 'sr.revision_id')
+    .where({ 'r.office_id': officeId, 'r.sheet_id': sheetId })
+    .select('sr.submittal_id');
+  return trx('submittals').where({ office_id: officeId }).whereIn('id', holding).forUpdate();
+}
+
+export async function voidSubmittal(trx: Knex, officeId: string, id: string, reason: string): Promise<void> {
+  await trx('submittals').where({ office_id: officeId, id }).update({ state: 'void', void_reason: reason });
+  await trx('prepared_seals').where({ office_id: officeId, submittal_id: id }).delete();
+}
+
 export interface FileRow {
   id: string;
   office_id: string;
@@ -105,6 +126,10 @@ export async function preparedSealById(
   id: string,
 ): Promise<PreparedSealRow | undefined> {
   return db('prepared_seals').where({ office_id: officeId, id }).first();
+}
+
+export async function dropPreparedSeals(trx: Knex, officeId: string, submittalId: string): Promise<void> {
+  await trx('prepared_seals').where({ office_id: officeId, submittal_id: submittalId }).delete();
 }
 
 export async function transmittalsOf(

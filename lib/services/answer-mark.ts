@@ -1,26 +1,37 @@
 // server only
 import { z } from 'zod';
-import { answerMark as writeAnswer } from '@/db/queries/checks';
+import { insertMarkAnswer, markById } from '@/db/queries/checks';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { makers, requireRole } from './require-role';
-import { done, type Result, unread } from './result';
-import { NotFound } from './service-error';
+import { type Result, unread } from './result';
+import { NotFound, refuse } from './service-error';
 
 const input = z.object({
   markId: z.string().max(36),
   answer: z.string().trim().min(1, 'An answer is missing.').max(1000),
 });
 
-/** The originator's answer to a mark. */
+/** The answer to a mark of a check; answers are added, none takes the place of another. */
 export async function answerMark(actor: Actor, raw: unknown): Promise<Result<null>> {
   requireRole(actor, ...makers);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  await inTransaction({ officeId: actor.officeId, person: actor.name }, async (trx, record) => {
-    const found = await writeAnswer(trx, actor.officeId, parsed.data.markId, parsed.data.answer);
-    if (found !== 1) throw new NotFound(`mark ${parsed.data.markId}`);
-    await record('answered a mark', parsed.data.markId);
+  const { markId, answer } = parsed.data;
+  return inTransaction(actor, async (trx, record) => {
+    const mark = await markById(trx, actor.officeId, markId);
+    if (!mark) throw new NotFound(`mark ${markId}`);
+    if (mark.check_state === 'void')
+      refuse('check-void', '', 'The sheet changed meanwhile: this check is void.');
+    await insertMarkAnswer(trx, {
+      office_id: actor.officeId,
+      mark_id: markId,
+      text: answer,
+      person_id: actor.personId,
+      at: new Date(),
+    });
+    const about = { jobId: mark.job_id, aboutId: mark.check_id };
+    await record('answered a mark', `line ${mark.line}: ${answer}`.slice(0, 400), about);
+    return null;
   });
-  return done(null);
 }

@@ -15,17 +15,14 @@ const input = z.object({
 export async function askPasswordReset(raw: unknown, from: string): Promise<Result<null>> {
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  if (!(await allowAttempt(`reset:${from}`, 10))) return mend('', tooOften);
+  if (!(await allowAttempt(`reset:${from}`, 10))) return mend('too-often', '', tooOften);
   const person = await personByEmail(database(), parsed.data.email);
-  if (!person?.active) return done(null);
-  await inTransaction({ officeId: person.office_id, person: person.name }, async (trx, record) => {
-    await sendToken(
-      trx,
-      { officeId: person.office_id, personId: person.id, email: person.email, name: person.name },
-      'password',
-      2,
-    );
-    await record('asked for a new password', person.id);
+  // The same person is not written to again and again by strangers.
+  if (!person?.active || !(await allowAttempt(`reset-of:${person.id}`, 3))) return done(null);
+  const who = { officeId: person.office_id, personId: person.id, name: person.name };
+  await inTransaction(who, async (trx, record) => {
+    await sendToken(trx, { ...who, email: person.email }, 'password', 2);
+    await record('asked for a new password', person.name, { aboutId: person.id });
   });
   return done(null);
 }

@@ -3,8 +3,12 @@ import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { decisionOf, insertComment, type ReviewLinkRow } from '@/db/queries/reviews';
 import { revisionsOfSubmittal } from '@/db/queries/revisions';
+import { submittalById } from '@/db/queries/submittals';
 import { inTransaction } from './in-transaction';
-import { done, mend, type Result, unread } from './result';
+import { type Result, unread } from './result';
+import { reviewer } from './reviewer';
+import { NotFound, refuse } from './service-error';
+import { sheetName } from './sheet-state';
 
 const input = z.object({
   revisionId: z.string().max(36),
@@ -21,32 +25,24 @@ export async function commentOnReview(
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { revisionId, line, text, code } = parsed.data;
-  return inTransaction(
-    { officeId: link.office_id, person: link.reviewer },
-    async (trx, record): Promise<Result<{ number: number }>> => {
-      const revisions = await revisionsOfSubmittal(trx, link.office_id, link.submittal_id);
-      const fault = !revisions.some((r) => r.id === revisionId)
-        ? 'This sheet is not part of the submittal.'
-        : (await decisionOf(trx, link.office_id, link.submittal_id))
-          ? 'The decision is recorded; comments are closed.'
-          : undefined;
-      if (fault) {
-        await record('could not comment', link.submittal_id);
-        return mend('', fault);
-      }
-      const number = await insertComment(trx, {
-        id: randomUUID(),
-        office_id: link.office_id,
-        submittal_id: link.submittal_id,
-        revision_id: revisionId,
-        line,
-        code,
-        text,
-        author: link.reviewer,
-        at: new Date(),
-      });
-      await record('commented', `comment ${number} on line ${line}`);
-      return done({ number });
-    },
-  );
+  const { office_id, submittal_id } = link;
+  return inTransaction(reviewer(link), async (trx, record) => {
+    const submittal = await submittalById(trx, office_id, submittal_id, true);
+    if (!submittal) throw new NotFound('submittal of a link');
+    const revision = (await revisionsOfSubmittal(trx, office_id, submittal_id)).find(
+      (r) => r.id === revisionId,
+    );
+    if (!revision) refuse('not-in-submittal', '', 'This sheet is not part of the submittal.');
+    if (await decisionOf(trx, office_id, submittal_id))
+      refuse('decided', '', 'The decision is recorded; comments are closed.');
+    const id = randomUUID();
+    const at = new Date();
+    const author = link.reviewer;
+    const row = { id, office_id, submittal_id, revision_id: revisionId, line, code, text, author, at };
+    const number = await insertComment(trx, row);
+    const words = `comment ${number} on ${sheetName(revision.sheet_number)}, line ${line}: ${text}`;
+    const about = { digest: revision.digest, jobId: submittal.job_id, aboutId: submittal_id };
+    await record('commented', words.slice(0, 400), about);
+    return { number };
+  });
 }

@@ -3,10 +3,10 @@ import { createHash, randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { database } from '@/db/connection';
 import { licencesOf } from '@/db/queries/people';
-import { insertFile, preparedSealById, setSubmittalState, submittalById } from '@/db/queries/submittals';
+import { dropPreparedSeals, insertFile, preparedSealById, setSubmittalState } from '@/db/queries/submittals';
 import { env } from '@/lib/env';
 import { log } from '@/lib/log';
-import { checkCms } from '@/lib/signing/check-cms';
+import { checkCms, type Person } from '@/lib/signing/check-cms';
 import { insertSignature } from '@/lib/signing/insert-signature';
 import { SignatureRefusal } from '@/lib/signing/signature-refusal';
 import { type Hole, signedPart } from '@/lib/signing/signed-part';
@@ -16,8 +16,9 @@ import type { Actor } from './actor';
 import { sealField } from './create-submittal';
 import { inTransaction } from './in-transaction';
 import { requireRole } from './require-role';
-import { done, mend, type Result, unread } from './result';
-import { NotFound } from './service-error';
+import { mend, type Result, unread } from './result';
+import { sealable } from './sealable';
+import { NotFound, Refused, refuse } from './service-error';
 import { trust } from './trust';
 
 const input = z.object({
@@ -34,67 +35,74 @@ export async function completeSeal(actor: Actor, raw: unknown): Promise<Result<n
   requireRole(actor, 'engineer-of-record');
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const prepared = await preparedSealById(database(), actor.officeId, parsed.data.preparedId);
+  const { officeId } = actor;
+  const prepared = await preparedSealById(database(), officeId, parsed.data.preparedId);
   if (!prepared || prepared.person_id !== actor.personId) throw new NotFound('prepared seal');
   const now = new Date();
   if (prepared.expires_at < now)
-    return mend('', 'More than fifteen minutes went by. Prepare the seal again; nothing was sealed.');
-  const licence = (await licencesOf(database(), actor.officeId)).find((l) => l.id === prepared.licence_id);
-  if (!licence || licence.expires < now)
-    return mend('', 'The licence expired meanwhile. Nothing was sealed.');
-  const trusted = trust();
-  if (!trusted)
-    return mend('', 'No authority is trusted here yet, so nothing can be sealed. Set TRUST_PEM_FILE.');
-  const bytes = new Uint8Array(prepared.bytes);
-  const place: Hole = hole.parse(prepared.hole);
-  try {
-    let cms = new Uint8Array(parsed.data.cms);
-    const person = { name: actor.name, licenceNumber: licence.number };
-    await checkCms(cms, signedPart(bytes, place), person, trusted, now);
-    const stampUrl = env().timeStampUrl;
-    if (stampUrl) cms = (await stampSignature(cms, { url: stampUrl, anchors: trusted.stampAnchors })).cms;
-    const sealed = insertSignature({ bytes, hole: place }, cms);
-    const report = await verifyPdf(sealed, {
-      trust: trusted,
-      expected: { fields: [sealField], stamped: stampUrl !== undefined },
-    });
-    if (!report.intact) {
-      log.error(
-        { reasons: report.reasons, submittal: prepared.submittal_id },
-        'a sealed file did not verify',
-      );
-      return mend(
-        '',
-        `The sealed file did not verify: ${report.reasons[0]?.sentence ?? 'no reason given'} Nothing was stored.`,
-      );
-    }
-    const sha256 = createHash('sha256').update(sealed).digest('hex');
-    return await inTransaction(
-      { officeId: actor.officeId, person: actor.name },
-      async (trx, record): Promise<Result<null>> => {
-        const submittal = await submittalById(trx, actor.officeId, prepared.submittal_id, true);
-        if (submittal?.state !== 'drafted') {
-          await record('could not seal', prepared.submittal_id);
-          return mend('', 'This submittal was sealed meanwhile. The first seal stands.');
-        }
-        const id = randomUUID();
-        await insertFile(trx, {
-          id,
-          office_id: actor.officeId,
-          submittal_id: submittal.id,
-          kind: 'sealed',
-          bytes: Buffer.from(sealed),
-          sha256,
-          made_at: now,
-          signed_by: `${actor.name}, licence ${licence.number}`,
-        });
-        await setSubmittalState(trx, actor.officeId, submittal.id, 'sealed');
-        await record('sealed', `submittal ${submittal.number}`, sha256);
-        return done(null);
-      },
+    return mend(
+      'prepared-over',
+      '',
+      'More than fifteen minutes went by. Prepare the seal again; nothing was sealed.',
     );
+  const licence = (await licencesOf(database(), officeId)).find((l) => l.id === prepared.licence_id);
+  if (!licence)
+    return mend('licence-withdrawn', '', 'The licence was withdrawn meanwhile. Nothing was sealed.');
+  const person = { name: actor.name, licenceNumber: licence.number };
+  try {
+    const file = { bytes: new Uint8Array(prepared.bytes), hole: hole.parse(prepared.hole) };
+    const sealed = await signAndVerify(file, new Uint8Array(parsed.data.cms), person, now);
+    const sha256 = createHash('sha256').update(sealed).digest('hex');
+    return await inTransaction(actor, async (trx, record) => {
+      const { submittal, job } = await sealable(trx, actor, prepared.submittal_id, new Date());
+      await insertFile(trx, {
+        id: randomUUID(),
+        office_id: officeId,
+        submittal_id: submittal.id,
+        kind: 'sealed',
+        bytes: Buffer.from(sealed),
+        sha256,
+        made_at: now,
+        signed_by: `${actor.name}, licence ${licence.number}`,
+      });
+      await setSubmittalState(trx, officeId, submittal.id, 'sealed');
+      await dropPreparedSeals(trx, officeId, submittal.id);
+      const about = { digest: sha256, jobId: job.id, aboutId: submittal.id };
+      await record('sealed', `${job.number} submittal ${submittal.number}`, about);
+      return null;
+    });
   } catch (error) {
-    if (error instanceof SignatureRefusal) return mend('', error.message);
+    if (error instanceof SignatureRefusal) {
+      log.warn({ err: error, submittal: prepared.submittal_id }, 'a signature was not accepted');
+      return mend(error.code, '', error.message);
+    }
+    if (error instanceof Refused) return mend(error.code, error.path, error.message);
     throw error;
   }
+}
+
+/** The file with the signature in its place, stamped if a service is set, and verified as a stranger would verify it. */
+async function signAndVerify(
+  file: { bytes: Uint8Array<ArrayBuffer>; hole: Hole },
+  signature: Uint8Array<ArrayBuffer>,
+  person: Person,
+  now: Date,
+): Promise<Uint8Array> {
+  const trusted = trust();
+  if (!trusted)
+    refuse('no-trust', '', 'No authority is trusted here yet, so nothing can be sealed. Set TRUST_PEM_FILE.');
+  await checkCms(signature, signedPart(file.bytes, file.hole), person, trusted, now);
+  const url = env().timeStampUrl;
+  const stamped = url ? await stampSignature(signature, { url, anchors: trusted.stampAnchors }) : undefined;
+  const sealed = insertSignature(file, stamped ? stamped.cms : signature);
+  const report = await verifyPdf(sealed, {
+    trust: trusted,
+    expected: { fields: [sealField], stamped: url !== undefined },
+  });
+  if (!report.intact) {
+    log.error({ reasons: report.reasons }, 'a sealed file did not verify');
+    const why = report.reasons[0]?.sentence ?? 'no reason given';
+    refuse('not-intact', '', `The sealed file did not verify: ${why} Nothing was stored.`);
+  }
+  return sealed;
 }

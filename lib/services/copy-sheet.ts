@@ -1,12 +1,13 @@
 // server only
 import { z } from 'zod';
-import { database } from '@/db/connection';
 import { newestDraft, sheetById } from '@/db/queries/sheets';
 import { draft as draftSchema } from '@/lib/model/draft';
 import type { Actor } from './actor';
-import { addSheet } from './create-sheet';
+import { writeSheet } from './create-sheet';
+import { inTransaction } from './in-transaction';
+import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
-import { done, type Result, unread } from './result';
+import { type Result, unread } from './result';
 import { NotFound } from './service-error';
 
 const input = z.object({ sheetId: z.string().max(36) });
@@ -17,10 +18,14 @@ export async function copySheet(actor: Actor, raw: unknown): Promise<Result<{ id
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { sheetId } = parsed.data;
-  const sheet = await sheetById(database(), actor.officeId, sheetId);
-  const kept = await newestDraft(database(), actor.officeId, sheetId);
-  if (!sheet || !kept) throw new NotFound(`sheet ${sheetId}`);
-  const title = `${sheet.title}, copy`.slice(0, 120);
-  const draft = { ...draftSchema.parse(kept.body), title };
-  return done({ id: await addSheet(actor, sheet.job_id, title, draft, 'copied sheet') });
+  return inTransaction(actor, async (trx, record) => {
+    const sheet = await sheetById(trx, actor.officeId, sheetId);
+    const kept = await newestDraft(trx, actor.officeId, sheetId);
+    if (!sheet || !kept) throw new NotFound(`sheet ${sheetId}`);
+    await jobOpenToWork(trx, actor.officeId, sheet.job_id);
+    const title = `${sheet.title.slice(0, 113)}, copy`;
+    const draft = { ...draftSchema.parse(kept.body), title };
+    const copy = { jobId: sheet.job_id, title, draft, verb: 'copied sheet' };
+    return { id: await writeSheet(trx, record, actor, copy) };
+  });
 }

@@ -1,12 +1,13 @@
 // server only
 import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
-import { database } from '@/db/connection';
+import { isDuplicate } from '@/db/is-duplicate';
 import { authorityById, insertJob } from '@/db/queries/jobs';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { makers, requireRole } from './require-role';
-import { done, mend, type Result, unread } from './result';
+import { type Result, unread } from './result';
+import { refuse } from './service-error';
 
 const input = z.object({
   number: z.string().trim().min(1, 'A job needs its number.').max(20),
@@ -25,25 +26,23 @@ export async function createJob(actor: Actor, raw: unknown): Promise<Result<{ id
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { authorityId, pageSize, ...job } = parsed.data;
-  const authority = authorityId ? await authorityById(database(), actor.officeId, authorityId) : undefined;
-  if (authorityId && !authority) return mend('authorityId', 'This authority is not known in the office.');
-  const id = randomUUID();
-  try {
-    await inTransaction({ officeId: actor.officeId, person: actor.name }, async (trx, record) => {
-      await insertJob(trx, {
-        ...job,
-        id,
-        office_id: actor.officeId,
-        page_size: pageSize,
-        authority_id: authority?.id ?? null,
-        changed_at: new Date(),
-      });
-      await record('opened job', job.number);
+  return inTransaction(actor, async (trx, record) => {
+    const authority = authorityId ? await authorityById(trx, actor.officeId, authorityId) : undefined;
+    if (authorityId && !authority)
+      refuse('unknown-authority', 'authorityId', 'This authority is not known in the office.');
+    const id = randomUUID();
+    await insertJob(trx, {
+      ...job,
+      id,
+      office_id: actor.officeId,
+      page_size: pageSize,
+      authority_id: authority?.id ?? null,
+      changed_at: new Date(),
+    }).catch((error: unknown) => {
+      if (isDuplicate(error)) refuse('number-taken', 'number', `There is a job ${job.number} already.`);
+      throw error;
     });
-  } catch (error) {
-    if (error instanceof Error && 'code' in error && error.code === 'ER_DUP_ENTRY')
-      return mend('number', `There is a job ${job.number} already.`);
-    throw error;
-  }
-  return done({ id });
+    await record('opened job', `${job.number} ${job.title}`, { jobId: id });
+    return { id };
+  });
 }

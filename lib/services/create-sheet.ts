@@ -1,15 +1,16 @@
 // server only
 import { randomUUID } from 'node:crypto';
+import type { Knex } from 'knex';
 import { z } from 'zod';
-import { database } from '@/db/connection';
-import { jobById, takeNumber, touchJob } from '@/db/queries/jobs';
+import { takeNumber, touchJob } from '@/db/queries/jobs';
 import { insertDraft, insertSheet } from '@/db/queries/sheets';
 import type { Draft } from '@/lib/model/draft';
 import { startingDraft, startingSheets } from '@/lib/model/starting-draft';
 import type { Actor } from './actor';
-import { inTransaction } from './in-transaction';
+import { inTransaction, type Record } from './in-transaction';
+import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
-import { done, type Result, unread } from './result';
+import { type Result, unread } from './result';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
 
@@ -25,14 +26,14 @@ export async function createSheet(actor: Actor, raw: unknown): Promise<Result<{ 
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { jobId, start, title } = parsed.data;
-  const job = await jobById(database(), actor.officeId, jobId);
-  if (!job) throw new NotFound(`job ${jobId}`);
-  return done({
-    id: await addSheet(actor, jobId, title, startingDraft(start, job.units, title), 'made sheet'),
+  return inTransaction(actor, async (trx, record) => {
+    const job = await jobOpenToWork(trx, actor.officeId, jobId);
+    const draft = startingDraft(start, job.units, title);
+    return { id: await writeSheet(trx, record, actor, { jobId, title, draft, verb: 'made sheet' }) };
   });
 }
 
-/** Numbers and keeps a sheet with its first draft. */
+/** Makes a sheet of a given draft, such as one of the demo. */
 export async function addSheet(
   actor: Actor,
   jobId: string,
@@ -40,30 +41,39 @@ export async function addSheet(
   draft: Draft,
   verb: string,
 ): Promise<string> {
-  const id = randomUUID();
-  await inTransaction({ officeId: actor.officeId, person: actor.name }, async (trx, record) => {
-    const number = await takeNumber(trx, actor.officeId, jobId, 'next_sheet');
-    if (number === undefined) throw new NotFound(`job ${jobId}`);
-    const at = new Date();
-    await insertSheet(trx, {
-      id,
-      office_id: actor.officeId,
-      job_id: jobId,
-      number,
-      title,
-      originator_id: actor.personId,
-      changed_at: at,
-    });
-    await insertDraft(trx, {
-      sheetId: id,
-      officeId: actor.officeId,
-      version: 1,
-      body: draft,
-      by: actor.personId,
-      at,
-    });
-    await touchJob(trx, actor.officeId, jobId);
-    await record(verb, `${sheetName(number)} ${title}`);
+  requireRole(actor, ...makers);
+  const added = await inTransaction(actor, async (trx, record) => {
+    await jobOpenToWork(trx, actor.officeId, jobId);
+    return writeSheet(trx, record, actor, { jobId, title, draft, verb });
   });
+  if (!added.ok) throw new Error(added.errors.map((e) => e.message).join(' '));
+  return added.value;
+}
+
+/** Numbers and keeps a sheet with its first draft. */
+export async function writeSheet(
+  trx: Knex.Transaction,
+  record: Record,
+  actor: Actor,
+  sheet: { jobId: string; title: string; draft: Draft; verb: string },
+): Promise<string> {
+  const { jobId, title, draft, verb } = sheet;
+  const { officeId, personId } = actor;
+  const id = randomUUID();
+  const number = await takeNumber(trx, officeId, jobId, 'next_sheet');
+  if (number === undefined) throw new NotFound(`job ${jobId}`);
+  const at = new Date();
+  await insertSheet(trx, {
+    id,
+    office_id: officeId,
+    job_id: jobId,
+    number,
+    title,
+    originator_id: personId,
+    changed_at: at,
+  });
+  await insertDraft(trx, { sheetId: id, officeId, version: 1, body: draft, by: personId, at });
+  await touchJob(trx, officeId, jobId);
+  await record(verb, `${sheetName(number)} ${title}`, { jobId, aboutId: id });
   return id;
 }

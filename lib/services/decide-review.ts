@@ -4,11 +4,13 @@ import { authorityById, jobById } from '@/db/queries/jobs';
 import { queueMail } from '@/db/queries/mails';
 import { peopleOf } from '@/db/queries/people';
 import { commentsOf, decisionOf, insertDecision, type ReviewLinkRow } from '@/db/queries/reviews';
-import { setSubmittalState, submittalById } from '@/db/queries/submittals';
+import { fileOf, setSubmittalState, submittalById } from '@/db/queries/submittals';
 import { env } from '@/lib/env';
 import { inTransaction } from './in-transaction';
-import { done, mend, type Result, unread } from './result';
-import { NotFound } from './service-error';
+import { type Result, unread } from './result';
+import { reviewer } from './reviewer';
+import { NotFound, refuse } from './service-error';
+import { usualDecisions } from './usual-decisions';
 
 const input = z.object({ words: z.string().min(1, 'Choose a decision.').max(80) });
 
@@ -17,46 +19,41 @@ export async function decideReview(link: ReviewLinkRow, raw: unknown): Promise<R
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { words } = parsed.data;
-  return inTransaction(
-    { officeId: link.office_id, person: link.reviewer },
-    async (trx, record): Promise<Result<null>> => {
-      const submittal = await submittalById(trx, link.office_id, link.submittal_id, true);
-      const job = submittal && (await jobById(trx, link.office_id, submittal.job_id));
-      if (!submittal || !job) throw new NotFound('submittal of a link');
-      const name = `${job.number} submittal ${submittal.number}`;
-      const authority = job.authority_id
-        ? await authorityById(trx, link.office_id, job.authority_id)
-        : undefined;
-      if (authority && !authority.decisions.includes(words)) {
-        await record('could not decide', name);
-        return mend('words', 'This is not one of the decisions of the authority.');
-      }
-      const before = await decisionOf(trx, link.office_id, link.submittal_id);
-      if (before) {
-        await record('met an earlier decision', name);
-        return mend('', `${before.author} recorded “${before.words}” already. The first decision stands.`);
-      }
-      await insertDecision(trx, {
-        submittal_id: submittal.id,
-        office_id: link.office_id,
-        words,
-        author: link.reviewer,
-        at: new Date(),
+  const { office_id: officeId, submittal_id: id } = link;
+  return inTransaction(reviewer(link), async (trx, record) => {
+    const submittal = await submittalById(trx, officeId, id, true);
+    const job = submittal && (await jobById(trx, officeId, submittal.job_id));
+    if (!submittal || !job) throw new NotFound('submittal of a link');
+    const authority = job.authority_id ? await authorityById(trx, officeId, job.authority_id) : undefined;
+    if (!(authority?.decisions ?? usualDecisions).includes(words))
+      refuse('unknown-decision', 'words', 'This is not one of the decisions of the authority.');
+    const before = await decisionOf(trx, officeId, id);
+    if (before)
+      refuse(
+        'decided',
+        '',
+        `${before.author} recorded “${before.words}” already. The first decision stands.`,
+      );
+    const author = link.reviewer;
+    await insertDecision(trx, { submittal_id: id, office_id: officeId, words, author, at: new Date() });
+    await setSubmittalState(trx, officeId, id, 'decided');
+    const name = `${job.number} submittal ${submittal.number}`;
+    const comments = (await commentsOf(trx, officeId, id)).length;
+    const count = comments === 1 ? 'one comment' : `${comments} comments`;
+    const place = `${env().appUrl}/jobs/${job.id}/submittals/${id}`;
+    for (const person of await peopleOf(trx, officeId)) {
+      if (person.id !== submittal.created_by && person.id !== submittal.engineer_id) continue;
+      await queueMail(trx, {
+        officeId,
+        submittalId: id,
+        recipient: person.email,
+        subject: `${name}: ${words}`,
+        body: `${person.name},\n\n${author} recorded a decision on ${name}: ${words}, with ${count}.\n\n${place}\n`,
       });
-      await setSubmittalState(trx, link.office_id, submittal.id, 'decided');
-      const comments = await commentsOf(trx, link.office_id, submittal.id);
-      const sender = (await peopleOf(trx, link.office_id)).find((p) => p.id === submittal.created_by);
-      if (sender) {
-        await queueMail(trx, {
-          officeId: link.office_id,
-          submittalId: submittal.id,
-          recipient: sender.email,
-          subject: `${name}: ${words}`,
-          body: `${sender.name},\n\n${link.reviewer} recorded a decision on ${name}: ${words}, with ${comments.length === 1 ? 'one comment' : `${comments.length} comments`}.\n\n${env().appUrl}/jobs/${job.id}/submittals/${submittal.id}\n`,
-        });
-      }
-      await record('decided', `${name}: ${words}`);
-      return done(null);
-    },
-  );
+    }
+    const sealed = await fileOf(trx, officeId, id, 'sealed');
+    const about = { digest: sealed?.sha256, jobId: job.id, aboutId: id };
+    await record('decided', `${name}: ${words}`, about);
+    return null;
+  });
 }

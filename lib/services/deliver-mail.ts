@@ -1,42 +1,38 @@
 // server only
-import { createTransport } from 'nodemailer';
 import { database } from '@/db/connection';
 import { claimMail, settleMail } from '@/db/queries/mails';
-import { env } from '@/lib/env';
 import { log } from '@/lib/log';
+import { isRefusedForGood, sendMail } from '@/lib/mail/send-mail';
 
 /** Minutes to wait after each failed try; then the refusal stands and its words are shown to the sender. */
 const waits = [1, 5, 30, 120];
+/** Longer than the longest that one try can take (see lib/mail/send-mail.ts). */
 const abandonedAfter = 5 * 60_000;
 
-/** Sends one queued mail, if one is due. Answers whether there was one. */
+/**
+ * Sends one queued mail, if one is due. Answers whether there was one. A server that dies between the mail server's "ok"
+ * and its own note of it leaves the mail to be sent again, under the same Message-ID, by which mailboxes know it.
+ */
 export async function deliverMail(): Promise<boolean> {
   const now = new Date();
   const mail = await claimMail(database(), now, new Date(now.getTime() - abandonedAfter));
   if (!mail) return false;
-  const transport = createTransport(env().smtpUrl);
+  const settle = (outcome: Parameters<typeof settleMail>[3]) =>
+    settleMail(database(), mail.id, mail.attempts, outcome);
   try {
-    const sent = await transport.sendMail({
-      messageId: `<${mail.id}@fairhand>`,
-      from: env().mailFrom,
+    const words = await sendMail({
+      id: mail.id,
       to: mail.recipient,
       subject: mail.subject,
       text: mail.body,
     });
-    await settleMail(database(), mail.id, { state: 'accepted', words: sent.response });
+    await settle({ state: 'accepted', words });
   } catch (error) {
     const words = error instanceof Error ? error.message : String(error);
-    const wait = waits[mail.attempts - 1];
+    const wait = isRefusedForGood(error) ? undefined : waits[mail.attempts - 1];
     log.warn({ err: error, mail: mail.id, attempt: mail.attempts }, 'mail was not taken');
-    if (wait === undefined) await settleMail(database(), mail.id, { state: 'refused', words });
-    else
-      await settleMail(database(), mail.id, {
-        state: 'queued',
-        words,
-        nextTry: new Date(Date.now() + wait * 60_000),
-      });
-  } finally {
-    transport.close();
+    if (wait === undefined) await settle({ state: 'refused', words });
+    else await settle({ state: 'queued', words, nextTry: new Date(Date.now() + wait * 60_000) });
   }
   return true;
 }

@@ -21,36 +21,30 @@ export async function keepDraft(
 ): Promise<KeptDraft> {
   requireRole(actor, ...makers);
   const { sheetId, version, draft } = input.parse(raw);
-  return inTransaction(
-    { officeId: actor.officeId, person: actor.name },
-    async (trx, record): Promise<KeptDraft> => {
-      const newest = await newestDraft(trx, actor.officeId, sheetId, true);
-      const sheet = await sheetById(trx, actor.officeId, sheetId);
-      if (!newest || !sheet) throw new NotFound(`sheet ${sheetId}`);
-      const name = `${sheetName(sheet.number)} draft`;
-      if (newest.version !== version) {
-        await record('met another version', name);
-        return {
-          ok: false,
-          version: newest.version,
-          draft: newest.body,
-          by: newest.name,
-          at: newest.kept_at,
-        };
-      }
-      const at = new Date();
-      await insertDraft(trx, {
-        sheetId,
-        officeId: actor.officeId,
-        version: version + 1,
-        body: draft,
-        by: actor.personId,
-        at,
-      });
-      if (draft.title !== sheet.title && draft.title.trim() !== '')
-        await renameSheet(trx, actor.officeId, sheetId, draft.title);
-      await record('kept', `${name} ${version + 1}`);
-      return { ok: true, version: version + 1, keptAt: at };
-    },
-  );
+  const { officeId, personId } = actor;
+  const kept = await inTransaction(actor, async (trx, record): Promise<KeptDraft> => {
+    const newest = await newestDraft(trx, officeId, sheetId, true);
+    const sheet = await sheetById(trx, officeId, sheetId);
+    if (!newest || !sheet) throw new NotFound(`sheet ${sheetId}`);
+    const name = `${sheetName(sheet.number)} draft`;
+    const about = { jobId: sheet.job_id, aboutId: sheetId };
+    if (newest.version !== version) {
+      await record('met another version', name, about);
+      return {
+        ok: false,
+        version: newest.version,
+        draft: newest.body,
+        by: newest.name,
+        at: newest.kept_at,
+      };
+    }
+    const at = new Date();
+    await insertDraft(trx, { sheetId, officeId, version: version + 1, body: draft, by: personId, at });
+    const title = draft.title.trim().slice(0, 120);
+    if (title !== sheet.title && title !== '') await renameSheet(trx, officeId, sheetId, title);
+    await record('kept', `${name} ${version + 1}`, about);
+    return { ok: true, version: version + 1, keptAt: at };
+  });
+  if (!kept.ok) throw new Error('keeping a draft is never refused');
+  return kept.value;
 }

@@ -2,11 +2,13 @@
 import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { checkById, insertMark, removeMark } from '@/db/queries/checks';
+import { revisionById } from '@/db/queries/revisions';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { requireRole } from './require-role';
-import { done, mend, type Result, unread } from './result';
-import { NotAllowed, NotFound } from './service-error';
+import { type Result, unread } from './result';
+import { NotAllowed, NotFound, refuse } from './service-error';
+import { sheetName } from './sheet-state';
 
 const input = z
   .object({
@@ -26,34 +28,29 @@ export async function markLine(actor: Actor, raw: unknown): Promise<Result<null>
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { checkId, line, kind, text } = parsed.data;
-  return inTransaction(
-    { officeId: actor.officeId, person: actor.name },
-    async (trx, record): Promise<Result<null>> => {
-      const check = await checkById(trx, actor.officeId, checkId, true);
-      if (!check) throw new NotFound(`check ${checkId}`);
-      if (check.checker_id !== actor.personId) throw new NotAllowed('only its checker marks a sheet');
-      if (check.state !== 'open') {
-        await record('could not mark', `line ${line}`);
-        return mend(
-          '',
-          check.state === 'void'
-            ? 'The sheet changed meanwhile: this check is void.'
-            : 'This check is closed.',
-        );
-      }
-      await removeMark(trx, actor.officeId, checkId, line);
-      await insertMark(trx, {
-        id: randomUUID(),
-        office_id: actor.officeId,
-        check_id: checkId,
-        line,
-        kind,
-        text,
-        answer: null,
-        at: new Date(),
-      });
-      await record(`marked ${kind}`, `line ${line} of check ${checkId}`);
-      return done(null);
-    },
-  );
+  const { officeId } = actor;
+  return inTransaction(actor, async (trx, record) => {
+    const check = await checkById(trx, officeId, checkId, true);
+    const r = check && (await revisionById(trx, officeId, check.revision_id));
+    if (!check || !r) throw new NotFound(`check ${checkId}`);
+    if (check.checker_id !== actor.personId) throw new NotAllowed('only its checker marks a sheet');
+    if (check.state === 'void') refuse('check-void', '', 'The sheet changed meanwhile: this check is void.');
+    if (check.state !== 'open') refuse('check-closed', '', 'This check is closed.');
+    await removeMark(trx, officeId, checkId, line);
+    const id = randomUUID();
+    await insertMark(trx, {
+      id,
+      office_id: officeId,
+      check_id: checkId,
+      line,
+      kind,
+      text,
+      at: new Date(),
+    });
+    const where = `${sheetName(r.sheet_number)} revision ${r.number}, line ${line}`;
+    const words = text === '' ? where : `${where}: ${text}`;
+    const about = { digest: r.digest, jobId: r.job_id, aboutId: r.sheet_id };
+    await record(`marked ${kind}`, words.slice(0, 400), about);
+    return null;
+  });
 }

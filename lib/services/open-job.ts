@@ -1,6 +1,6 @@
 // server only
 import { database } from '@/db/connection';
-import { jobById } from '@/db/queries/jobs';
+import { jobById, jobPeople } from '@/db/queries/jobs';
 import { sheetLines } from '@/db/queries/sheets';
 import { submittalsOf } from '@/db/queries/submittals';
 import type { Actor } from './actor';
@@ -13,9 +13,10 @@ export async function openJob(actor: Actor, jobId: string) {
   requireRole(actor, ...everyone);
   const job = await jobById(database(), actor.officeId, jobId);
   if (!job) throw new NotFound(`job ${jobId}`);
-  const [sheets, submittals] = await Promise.all([
+  const [sheets, submittals, people] = await Promise.all([
     sheetLines(database(), actor.officeId, [jobId]),
     submittalsOf(database(), actor.officeId, jobId),
+    jobPeople(database(), actor.officeId, jobId),
   ]);
   return {
     job: {
@@ -29,7 +30,9 @@ export async function openJob(actor: Actor, jobId: string) {
       authority: job.authority,
       authorityId: job.authority_id,
       codes: job.codes,
+      state: job.state,
     },
+    people: people.map((p) => ({ personId: p.person_id, part: p.part, name: p.name, initials: p.initials })),
     sheets: sheets.map((s) => ({
       id: s.id,
       number: sheetName(s.number),
@@ -48,6 +51,7 @@ export async function openJob(actor: Actor, jobId: string) {
       number: s.number,
       state: s.state,
       createdAt: s.created_at,
+      voidReason: s.void_reason,
       decision: s.decision,
     })),
   };

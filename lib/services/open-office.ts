@@ -21,14 +21,22 @@ export async function openOffice(actor: Actor) {
       email: p.email,
       initials: p.initials,
       roles: role.array().parse(p.roles),
+      active: Number(p.active) === 1,
       licences: licences
         .filter((l) => l.person_id === p.id)
         .map((l) => ({
+          id: l.id,
           jurisdiction: l.jurisdiction,
           number: l.number,
           expires: l.expires.toISOString().slice(0, 10),
         })),
     })),
-    authorities: authorities.map((a) => ({ id: a.id, name: a.name, decisions: a.decisions })),
+    authorities: authorities.map((a) => ({
+      id: a.id,
+      name: a.name,
+      decisions: a.decisions,
+      reviewer: a.reviewer,
+      email: a.email,
+    })),
   };
 }

@@ -1,15 +1,24 @@
 // server only
 import { database } from '@/db/connection';
 import { authorityById, jobById } from '@/db/queries/jobs';
-import { commentsOf, decisionOf, noteOpened, type ReviewLinkRow, reviewLink } from '@/db/queries/reviews';
+import {
+  commentsOf,
+  commentsOfJob,
+  decisionOf,
+  noteOpened,
+  type ReviewLinkRow,
+  reviewLink,
+} from '@/db/queries/reviews';
 import { revisionsOfSubmittal } from '@/db/queries/revisions';
 import { fileOf, submittalById } from '@/db/queries/submittals';
 import { blocks } from '@/templates/block';
 import { inTransaction } from './in-transaction';
 import { allowAttempt } from './limit-attempts';
-import { NotFound } from './service-error';
+import { reviewer } from './reviewer';
+import { NotFound, refuse } from './service-error';
 import { sheetName } from './sheet-state';
 import { tokenHash } from './token';
+import { usualDecisions } from './usual-decisions';
 
 export type ReviewDoor =
   | { open: true; link: ReviewLinkRow }
@@ -34,9 +43,11 @@ export async function openReview(link: ReviewLinkRow) {
   const job = submittal && (await jobById(db, link.office_id, submittal.job_id));
   if (!submittal || !job) throw new NotFound('submittal of a link');
   if (!link.opened_at) {
-    await inTransaction({ officeId: link.office_id, person: link.reviewer }, async (trx, record) => {
-      await noteOpened(trx, link.id, new Date());
-      await record('opened the review', `${job.number} submittal ${submittal.number}`);
+    await inTransaction(reviewer(link), async (trx, record) => {
+      // Of several that open it at the same instant the first is recorded.
+      if ((await noteOpened(trx, link.id, new Date())) !== 1) refuse('opened', '', 'It was opened already.');
+      const about = { jobId: job.id, aboutId: submittal.id };
+      await record('opened the review', `${job.number} submittal ${submittal.number}`, about);
     });
   }
   const authority = job.authority_id ? await authorityById(db, link.office_id, job.authority_id) : undefined;
@@ -59,7 +70,9 @@ export async function openReview(link: ReviewLinkRow) {
       blocks: blocks.parse(r.blocks),
     })),
     comments: await commentsOf(db, link.office_id, link.submittal_id),
-    decisions: authority?.decisions ?? ['Approved', 'Approved as Noted', 'Revise and Resubmit'],
+    decisions: authority?.decisions ?? usualDecisions,
+    /** Comments on earlier submittals of the job, for the back-check. */
+    earlier: (await commentsOfJob(db, link.office_id, job.id)).filter((c) => c.submittal < submittal.number),
     decision: await decisionOf(db, link.office_id, link.submittal_id),
   };
 }

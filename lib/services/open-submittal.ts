@@ -22,9 +22,9 @@ export async function openSubmittal(actor: Actor, id: string) {
   const file = (await fileOf(db, officeId, id, 'sealed')) ?? (await fileOf(db, officeId, id, 'unsigned'));
   if (!file) throw new Error(`submittal ${id} has no file`);
   const authority = job.authority_id ? await authorityById(db, officeId, job.authority_id) : undefined;
-  const mine = (await licencesOf(db, officeId)).find(
-    (l) => l.person_id === actor.personId && l.jurisdiction === job.jurisdiction,
-  );
+  const mine = (await licencesOf(db, officeId))
+    .filter((l) => l.person_id === actor.personId && l.jurisdiction === job.jurisdiction)
+    .toSorted((a, b) => b.expires.getTime() - a.expires.getTime())[0];
   return {
     job: { id: job.id, number: job.number, title: job.title, jurisdiction: job.jurisdiction },
     submittal: {
@@ -35,6 +35,9 @@ export async function openSubmittal(actor: Actor, id: string) {
       remarks: submittal.remarks,
       pages: submittal.pages,
       createdAt: submittal.created_at,
+      voidReason: submittal.void_reason,
+      /** Whether the actor is the engineer of record named on its cover. */
+      mine: submittal.engineer_id === actor.personId,
     },
     sheets: (await revisionsOfSubmittal(db, officeId, id)).map((r) => ({
       number: sheetName(r.sheet_number),

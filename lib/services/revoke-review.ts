@@ -1,10 +1,12 @@
 // server only
 import { z } from 'zod';
 import { revokeLinks } from '@/db/queries/reviews';
+import { submittalById } from '@/db/queries/submittals';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { makers, requireRole } from './require-role';
-import { done, type Result, unread } from './result';
+import { type Result, unread } from './result';
+import { NotFound } from './service-error';
 
 const input = z.object({ submittalId: z.string().max(36) });
 
@@ -13,10 +15,13 @@ export async function revokeReview(actor: Actor, raw: unknown): Promise<Result<{
   requireRole(actor, ...makers);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const links = await inTransaction({ officeId: actor.officeId, person: actor.name }, async (trx, record) => {
-    const n = await revokeLinks(trx, actor.officeId, parsed.data.submittalId, new Date());
-    await record('revoked review links', `${n} of ${parsed.data.submittalId}`);
-    return n;
+  const { submittalId } = parsed.data;
+  return inTransaction(actor, async (trx, record) => {
+    const submittal = await submittalById(trx, actor.officeId, submittalId);
+    if (!submittal) throw new NotFound(`submittal ${submittalId}`);
+    const links = await revokeLinks(trx, actor.officeId, submittalId, new Date());
+    const about = { jobId: submittal.job_id, aboutId: submittalId };
+    await record('revoked review links', `${links} of submittal ${submittal.number}`, about);
+    return { links };
   });
-  return done({ links });
 }

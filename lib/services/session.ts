@@ -2,9 +2,16 @@
 import { Mysql2Adapter } from '@lucia-auth/adapter-mysql';
 import { Lucia, TimeSpan } from 'lucia';
 import { database } from '@/db/connection';
-import { personWithOffice } from '@/db/queries/people';
-import { type Actor, role } from './actor';
+import type { Actor } from './actor';
+import { actorById } from './read-actor';
 import { newToken, tokenHash } from './token';
+
+declare module 'lucia' {
+  interface Register {
+    Lucia: typeof lucia;
+    DatabaseSessionAttributes: { office_id: string };
+  }
+}
 
 /** Lucia's adapter needs only these two of a mysql2 pool; Knex's pool answers both. */
 const pool = {
@@ -21,33 +28,30 @@ const lucia = new Lucia(new Mysql2Adapter(pool as never, { user: 'people', sessi
 });
 
 /** Starts a session. The token goes into the cookie; the database knows only its hash. */
-export async function startSession(personId: string): Promise<{ token: string; expiresAt: Date }> {
+export async function startSession(
+  personId: string,
+  officeId: string,
+): Promise<{ token: string; expiresAt: Date }> {
   const token = newToken();
-  const session = await lucia.createSession(personId, {}, { sessionId: tokenHash(token) });
+  const session = await lucia.createSession(
+    personId,
+    { office_id: officeId },
+    { sessionId: tokenHash(token) },
+  );
   return { token, expiresAt: session.expiresAt };
 }
 
+/** Whose session this is, while it lasts and the person is active. */
 export async function readSession(token: string): Promise<Actor | undefined> {
   const { session } = await lucia.validateSession(tokenHash(token));
-  if (!session) return undefined;
-  const row = await personWithOffice(database(), session.userId);
-  if (!row?.active) return undefined;
-  return {
-    personId: row.id,
-    officeId: row.office_id,
-    officeName: row.office_name,
-    zone: row.zone,
-    roles: role.array().parse(row.roles),
-    name: row.name,
-    initials: row.initials,
-    email: row.email,
-  };
+  return session ? actorById(session.userId) : undefined;
 }
 
 export async function endSession(token: string): Promise<void> {
   await lucia.invalidateSession(tokenHash(token));
 }
 
+/** Signs a person out everywhere. */
 export async function endAllSessions(personId: string): Promise<void> {
   await lucia.invalidateUserSessions(personId);
 }

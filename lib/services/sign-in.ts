@@ -4,7 +4,7 @@ import { z } from 'zod';
 import { database } from '@/db/connection';
 import { personByEmail } from '@/db/queries/people';
 import { inTransaction } from './in-transaction';
-import { allowAttempt, tooOften } from './limit-attempts';
+import { allowAttempt, forgiveAttempts, tooOften } from './limit-attempts';
 import { mend, type Result, unread } from './result';
 import { startSession } from './session';
 
@@ -15,7 +15,7 @@ const input = z.object({
 
 /** A hash of nobody's password, so that an unknown address takes as long as a wrong password. */
 const nobody =
-  '$argon2id$v=19$m=19456,t=2,p=1$3Yk0zKqk0bq6QkQkqk0bqw$2oU0m2cZ4pTqLr2m6Gq3J3v3m1o0o9J5k6b7c8d9e0f';
+  '$argon2id$v=19$m=19456,t=2,p=1$WviAjEgGEl4P8WwypbrP+A$W4gYzK1WqumbEcGQMdkJtwm2re2LBdYO05zXA/YYSfQ';
 
 /** Signs a person in by e-mail and password (argon2id). Wrong address and wrong password are answered alike. */
 export async function signIn(
@@ -26,14 +26,17 @@ export async function signIn(
   if (!parsed.success) return unread(parsed.error);
   const { email, password } = parsed.data;
   if (!(await allowAttempt(`sign-in:${email}`, 8)) || !(await allowAttempt(`sign-in-from:${from}`, 60)))
-    return mend('', tooOften);
+    return mend('too-often', '', tooOften);
   const person = await personByEmail(database(), email);
-  const right = await verify(person?.password_hash ?? nobody, password).catch(() => false);
-  if (!person?.active || !right)
-    return mend('', 'E-mail and password do not go together. Check both, or ask for a new password.');
-  const session = await startSession(person.id);
-  await inTransaction({ officeId: person.office_id, person: person.name }, async (_, record) =>
-    record('signed in', person.id),
-  );
-  return { ok: true, value: session };
+  const right = await verify(person?.password_hash ?? nobody, password);
+  if (!person?.active || !person.password_hash || !right)
+    return mend(
+      'sign-in',
+      '',
+      'E-mail and password do not go together. Check both, or ask for a new password.',
+    );
+  await forgiveAttempts(`sign-in:${email}`);
+  const who = { officeId: person.office_id, personId: person.id, name: person.name };
+  await inTransaction(who, (_, record) => record('signed in', person.name, { aboutId: person.id }));
+  return { ok: true, value: await startSession(person.id, person.office_id) };
 }

@@ -1,19 +1,39 @@
 // server only
 import { database } from '@/db/connection';
-import { auditRows } from '@/db/queries/audit';
+import { auditAfter, auditHead, firstHash } from '@/db/queries/audit';
 import type { Actor } from './actor';
-import { auditHash } from './in-transaction';
+import { auditHash } from './audit-hash';
 import { requireRole } from './require-role';
 
-/** Walks the office's record from its first entry; `broken` is the place of the first entry whose hash does not follow. */
-export async function verifyAudit(actor: Actor): Promise<{ entries: number; broken: number | undefined }> {
+export interface AuditReport {
+  entries: number;
+  /** Place, from 0, of the first entry that does not follow from the one before it; the count when the end is missing. */
+  broken: number | undefined;
+}
+
+/** Walks the office's record from its first entry to its end, a thousand entries at a time. */
+export async function verifyAudit(actor: Actor): Promise<AuditReport> {
   requireRole(actor, 'administrator');
-  const rows = await auditRows(database(), actor.officeId);
-  let before = '0'.repeat(64);
-  const broken = rows.findIndex((row) => {
-    const follows = row.before_hash === before && row.hash === auditHash(row);
-    before = row.hash;
-    return !follows;
-  });
-  return { entries: rows.length, broken: broken === -1 ? undefined : broken };
+  return walkAudit(actor.officeId);
+}
+
+export async function walkAudit(officeId: string): Promise<AuditReport> {
+  let before = firstHash;
+  let entries = 0;
+  let broken: number | undefined;
+  for (let after: string | number = 0; ; ) {
+    const rows = await auditAfter(database(), officeId, after, 1000);
+    for (const row of rows) {
+      if (broken === undefined && (row.before_hash !== before || row.hash !== auditHash(row)))
+        broken = entries;
+      before = row.hash;
+      entries++;
+    }
+    const last = rows.at(-1);
+    if (!last) break;
+    after = last.id;
+  }
+  const head = await auditHead(database(), officeId);
+  if (broken === undefined && entries > 0 && head !== before) broken = entries;
+  return { entries, broken };
 }

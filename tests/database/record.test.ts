@@ -190,7 +190,7 @@ describe('the audit log', () => {
 
   it('undoes a verb that left no entry', async () => {
     const office = await makeOffice();
-    const who = { officeId: office.id, person: 'nobody' };
+    const who = { officeId: office.id, name: 'nobody' };
     const silent = inTransaction(who, async (trx) => {
       await trx('offices').where({ id: office.id }).update({ name: 'changed' });
     });

@@ -9,6 +9,7 @@ const words = {
   sealed: 'sealed, not sent',
   sent: 'with the reviewer',
   decided: 'decided',
+  void: 'void',
 } as const satisfies Record<Submittal['state'], string>;
 
 /** The submittals of a job, newest first, each with how it stands. */

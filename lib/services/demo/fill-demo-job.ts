@@ -1,11 +1,10 @@
 // server only
-import { database } from '@/db/connection';
-import { personWithOffice } from '@/db/queries/people';
 import type { Draft } from '@/lib/model/draft';
-import { type Actor, role } from '../actor';
+import type { Actor } from '../actor';
 import { concludeCheck } from '../conclude-check';
 import { addSheet } from '../create-sheet';
 import { freezeSheet } from '../freeze-sheet';
+import { actorById } from '../read-actor';
 import type { Result } from '../result';
 import { sendToCheck } from '../send-to-check';
 import { pinnedPortal, threeSpanBeam, twoStoreyFrame } from './demo-sheets';
@@ -47,18 +46,9 @@ export async function fillDemoJob(
 }
 
 async function actorOf(personId: string): Promise<Actor> {
-  const row = await personWithOffice(database(), personId);
-  if (!row) throw new Error(`no person ${personId}`);
-  return {
-    personId: row.id,
-    officeId: row.office_id,
-    officeName: row.office_name,
-    zone: row.zone,
-    roles: role.array().parse(row.roles),
-    name: row.name,
-    initials: row.initials,
-    email: row.email,
-  };
+  const actor = await actorById(personId);
+  if (!actor) throw new Error(`no person ${personId}`);
+  return actor;
 }
 
 function need<T>(result: Result<T>): T {

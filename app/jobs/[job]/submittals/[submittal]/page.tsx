@@ -22,7 +22,6 @@ export default async function SubmittalPage({ params }: Props) {
   const { job, submittal, sheets, file, authority, transmittals, mails, links, comments, decision } =
     await orRefuse(openSubmittal(actor, id));
   const path = `/jobs/${job.id}/submittals/${id}`;
-  const mine = actor.roles.includes('engineer-of-record');
   return (
     <Page
       actor={actor}
@@ -68,7 +67,7 @@ export default async function SubmittalPage({ params }: Props) {
             </p>
           ) : null}
           {submittal.state === 'drafted' ? (
-            mine ? (
+            submittal.mine ? (
               <Link className="btn" href={`${path}/seal`}>
                 Go to the seal
               </Link>
@@ -84,7 +83,10 @@ export default async function SubmittalPage({ params }: Props) {
             ))}
           </ul>
         </section>
-        {submittal.state === 'drafted' ? null : (
+        {submittal.state === 'void' ? (
+          <p className="message e">This submittal is void: {submittal.voidReason}. Gather a new one.</p>
+        ) : null}
+        {submittal.state === 'drafted' || submittal.state === 'void' ? null : (
           <section>
             <h2>Delivery</h2>
             <ul className="plain">
