@@ -25,7 +25,7 @@ export interface Solution {
   /** In order X1, X2, …; `proposed` tells whether it is the engine's own set. */
   redundants: Quantity[];
   proposed: boolean;
-  /** 2-norm condition of the flexibility matrix scaled to a unit diagonal (1 when n = 0). */
+  /** 2-norm condition of the flexibility matrix scaled to a unit diagonal (1 when n = 0); of the local states' own where those took the place of unit states. */
   condition: number;
   primary: PrimaryStructure;
   work: VirtualWork;
@@ -58,6 +58,11 @@ export interface Determinacy {
   tolerance: number;
 }
 
+/**
+ * With more than 30 redundants lines and rows are left out. With more than 150, where unit states would reach far
+ * (frames of many storeys), the compatibility equations are written for self-stress states around single cells: then pieces, states,
+ * parts, flexibility and gaps are all empty, and only redundants, results and checks stand.
+ */
 export interface PrimaryStructure {
   /** Rigid pieces between hinges and cuts: member ids of each. */
   pieces: string[][];

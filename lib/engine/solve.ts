@@ -8,6 +8,7 @@ import { envelopes } from './combinations/envelopes';
 import { askedDisplacements } from './force-method/asked-displacements';
 import { chooseBasis } from './force-method/choose-basis';
 import { refuseOpenAxial } from './force-method/open-axial';
+import { poorChoice } from './force-method/poor-choice';
 import { proposeRedundants } from './force-method/propose-redundants';
 import { referenceStiffness, withReference } from './force-method/reference';
 import { fixedQuantities, type PrimaryBasis } from './force-method/self-stress';
@@ -17,7 +18,7 @@ import { primaryStructure } from './primary-structure';
 import { refuseForm } from './refuse-form';
 import { refuseCoupleOnHinge, refuseUnstable } from './refuse-unstable';
 import { snapPlaces } from './snap-places';
-import type { Solution } from './solution';
+import type { Choice, Solution } from './solution';
 import { describeDeterminacy } from './statics/determinacy';
 import { type Equilibrium, equilibrium } from './statics/equilibrium';
 import { validate } from './validate';
@@ -57,12 +58,11 @@ function solveValid(analysis: Analysis): Outcome<Solution> {
   const chosen = analysis.redundants
     ? chooseBasis(eq, proposed, analysis.redundants)
     : { good: true as const, basis: proposed };
-  if (!chosen.good) {
-    const { code, message, mechanism } = chosen;
-    return refused({ code, message, place: { path: 'redundants' }, mechanism });
-  }
+  if (!chosen.good) return refused(badChoice(chosen));
   const { basis } = chosen;
   const solved = solveRedundants(eq, basis, analysis.cases, reference.EI0);
+  const poor = analysis.redundants && poorChoice(solved?.condition ?? Number.POSITIVE_INFINITY);
+  if (poor) return refused(badChoice(poor));
   if (!solved) return refused(checkFailed('the flexibility matrix is positive definite'));
   const open = refuseOpenAxial(eq, basis, solved);
   if (open) return refused(open);
@@ -91,6 +91,10 @@ function solveValid(analysis: Analysis): Outcome<Solution> {
       checks,
     },
   };
+}
+
+function badChoice({ code, message, mechanism }: Extract<Choice, { good: false }>): Refusal {
+  return { code, message, place: { path: 'redundants' }, mechanism };
 }
 
 function checkFailed(subject: string, id?: string): Refusal {

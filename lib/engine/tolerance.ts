@@ -8,6 +8,8 @@ export const tolerance = {
   entry: 1e-12,
   /** Axial force or strain along members that are held lengthwise, relative to its parts, that bending would leave open. */
   along: 1e-9,
+  /** Condition of a chosen set of redundants beyond which half of all figures would be lost on the way. */
+  poorest: 1e8,
   /** Agreement of the two ways, joint equilibrium, reciprocity and gaps, relative to the largest value of their kind. */
   check: 1e-7,
 } as const;

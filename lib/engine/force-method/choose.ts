@@ -5,6 +5,7 @@ import { type Equilibrium, equilibrium } from '../statics/equilibrium';
 import { validate } from '../validate';
 import { chooseBasis } from './choose-basis';
 import { flexibilityMatrix } from './flexibility-matrix';
+import { poorChoice } from './poor-choice';
 import { proposeRedundants } from './propose-redundants';
 import { type Reference, referenceStiffness, withReference } from './reference';
 import type { PrimaryBasis } from './self-stress';
@@ -25,7 +26,8 @@ export function chooser(analysis: Analysis): (quantities: readonly Quantity[]) =
   return (quantities) => {
     const chosen = chooseBasis(eq, proposed, quantities);
     if (!chosen.good) return chosen;
-    return { good: true, condition: flexibilityMatrix(eq, chosen.basis, reference.EI0).condition };
+    const { condition } = flexibilityMatrix(eq, chosen.basis, reference.EI0);
+    return poorChoice(condition) ?? { good: true, condition };
   };
 }
 

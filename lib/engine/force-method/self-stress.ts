@@ -16,7 +16,7 @@ export interface PrimaryBasis {
   redundants: number[];
   /** As many independent states as redundants: states[i] is Xi = 1 (scaled), or a local one when `local`. */
   states: SelfStress[];
-  /** More redundants than are written out, and unit states that reach far: states around single cells stand for them. */
+  /** Many redundants, and unit states that reach far: states around single cells stand for them. */
   local: boolean;
   /** Something can move: there are no states. */
   unstable: boolean;
@@ -27,7 +27,8 @@ export interface PrimaryBasis {
 /** Up to here every state, shape and line of statics is written out; beyond it the results stand alone. */
 export const writtenRedundants = 30;
 
-/** Beyond `writtenRedundants`, quantities that a unit state may reach on average before local ones take its place. */
+/** With more redundants than this, unit states that reach more than so many quantities on average give way to local ones. */
+const unitStatesUpTo = 150;
 const widestStates = 16;
 
 /**
@@ -60,7 +61,7 @@ export function primaryBasis(
     const state = unitState(k);
     states.push(state);
     entries += state.size;
-    if (redundants.length > writtenRedundants && entries > widestStates * redundants.length) return undefined;
+    if (redundants.length > unitStatesUpTo && entries > widestStates * redundants.length) return undefined;
   }
   return { lu, redundants, states, local, unstable, open };
 }
