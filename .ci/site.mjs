@@ -1,16 +1,26 @@
 import { spawn } from 'node:child_process';
-import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { remember } from './left-over.mjs';
 import { run } from './run-command.mjs';
+import { sourceDigest } from './source-digest.mjs';
 
 const tsx = ['--import', 'tsx'];
+const quiet = ['ignore', 'ignore', 'inherit'];
 
-/** Brings the database to the newest shape, and fills an empty one with the demo office. */
-export async function prepareDatabase(env, { demo }) {
+/** Ends with a plain sentence when a setting makes no sense or the database does not answer. */
+export async function checkSettings(env) {
+  const said = new Error('The settings above have to be mended first.');
+  await run('node', [...tsx, 'db/check-settings.ts'], { env }).catch(() => {
+    throw said;
+  });
+}
+
+/** Brings the database to the newest shape; `seed` then fills an empty one. */
+export async function prepareDatabase(env, seed) {
   const knex = [...tsx, 'node_modules/knex/bin/cli.js', '--knexfile', 'knexfile.ts'];
-  await run('node', [...knex, 'migrate:latest'], { env, stdio: ['ignore', 'ignore', 'inherit'] });
-  if (demo) await run('node', [...knex, 'seed:run'], { env, stdio: ['ignore', 'ignore', 'inherit'] });
+  await run('node', [...knex, 'migrate:latest'], { env, stdio: quiet });
+  if (seed) await run('node', [...knex, 'seed:run', `--specific=${seed}.ts`], { env, stdio: quiet });
 }
 
 /** Builds when a source changed since the last build. */
@@ -22,51 +32,45 @@ export async function build(env) {
   writeFileSync(stamp, digest);
 }
 
-function sourceDigest() {
-  const hash = createHash('sha256');
-  const walk = (path) => {
-    for (const name of readdirSync(path).sort()) {
-      const at = join(path, name);
-      if (statSync(at).isDirectory()) walk(at);
-      else hash.update(at).update(readFileSync(at));
-    }
-  };
-  for (const folder of ['app', 'lib', 'db', 'templates', 'fonts']) walk(folder);
-  for (const file of ['package-lock.json', 'next.config.ts', 'tailwind.config.ts', 'tsconfig.json'])
-    hash.update(readFileSync(file));
-  return hash.digest('hex');
-}
-
 /** Starts the local stand-ins for mail and time stamps; answers the settings that point at them. */
 export async function startFakes(folder, env) {
   mkdirSync(join(folder, 'demo'), { recursive: true });
+  // Its input stays open as long as this process lives; the stand-ins end with it.
   const child = spawn('node', [...tsx, 'lib/mail/run-fakes.ts', join(folder, 'demo')], {
     env,
-    stdio: ['ignore', 'pipe', 'inherit'],
+    stdio: ['pipe', 'pipe', 'inherit'],
   });
+  const forget = remember(folder, 'stand-ins', child.pid);
   const line = await new Promise((resolve, reject) => {
     child.stdout.once('data', (data) => resolve(String(data)));
     child.once('exit', (code) =>
       reject(new Error(`The local mail and time-stamp servers ended with ${code}.`)),
     );
   });
-  return { settings: JSON.parse(line), stop: () => child.kill('SIGTERM') };
+  return { settings: JSON.parse(line), child, stop: () => end(child, forget) };
 }
 
 /** Serves the built application; resolves when it answers. */
-export async function serve(env, port) {
-  const child = spawn(
-    'node',
-    ['node_modules/next/dist/bin/next', 'start', '-H', '127.0.0.1', '-p', String(port)],
-    { env, stdio: ['ignore', 'ignore', 'inherit'] },
-  );
+export async function serve(folder, env, port) {
+  const next = ['node_modules/next/dist/bin/next', 'start', '-H', '127.0.0.1', '-p', String(port)];
+  const child = spawn('node', next, { env, stdio: quiet });
+  const forget = remember(folder, 'site', child.pid);
   const address = `http://127.0.0.1:${port}`;
   for (let i = 0; i < 150; i++) {
     if (child.exitCode !== null) throw new Error(`The server ended with ${child.exitCode} while starting.`);
     const answer = await fetch(`${address}/sign-in`).catch(() => undefined);
-    if (answer?.ok) return { address, child, stop: () => child.kill('SIGTERM') };
+    if (answer?.ok) return { address, child, stop: () => end(child, forget) };
     await new Promise((resolve) => setTimeout(resolve, 200));
   }
-  child.kill('SIGTERM');
+  await end(child, forget);
   throw new Error('The server did not answer within thirty seconds.');
+}
+
+async function end(child, forget) {
+  if (child.exitCode === null && child.signalCode === null) {
+    const ended = new Promise((resolve) => child.once('exit', resolve));
+    child.kill('SIGTERM');
+    await ended;
+  }
+  forget();
 }

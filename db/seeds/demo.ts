@@ -3,7 +3,8 @@ import { hash } from '@node-rs/argon2';
 import type { Knex } from 'knex';
 import { fillDemoJob } from '../../lib/services/demo/fill-demo-job';
 import { demoEngineer } from '../../lib/signing/demo-keys';
-import { insertAuthority, insertJob } from '../queries/jobs';
+import { insertAuthority, insertJob, setJobPeople } from '../queries/jobs';
+import { anyOffice, insertOffice } from '../queries/offices';
 import { insertLicence, insertPerson } from '../queries/people';
 
 const password = 'plumb-line-and-level';
@@ -22,9 +23,9 @@ const people = [
 
 /** The invented demo office, once, in an empty database. */
 export async function seed(knex: Knex): Promise<void> {
-  if (await knex('offices').first()) return;
+  if (await anyOffice(knex)) return;
   const office = randomUUID();
-  await knex('offices').insert({ id: office, name: 'Lindqvist & Arrow', zone: 'America/Chicago' });
+  await insertOffice(knex, { id: office, name: 'Lindqvist & Arrow', zone: 'America/Chicago' });
   const passwordHash = await hash(password);
   const ids = new Map<string, string>();
   for (const p of people) {
@@ -73,5 +74,8 @@ export async function seed(knex: Knex): Promise<void> {
     codes: 'ASCE/SEI 7-16\nLocal code of the City of Orrin (invented)',
     changed_at: new Date(),
   });
+  for (const part of ['engineer-of-record', 'checker'] as const)
+    await setJobPeople(knex, office, job, part, [id(part)]);
+  await setJobPeople(knex, office, job, 'originator', [id('engineer')]);
   await fillDemoJob(office, job, { engineer: id('engineer'), checker: id('checker') });
 }

@@ -7,7 +7,8 @@ import { startLocalMailServer } from './local-mail-server';
 
 /**
  * The demo's stand-ins for what is hosted outside: an SMTP server that keeps mail as files, and a time-stamping authority.
- * Prints the settings that point at them as one line of JSON, then stays until it is stopped.
+ * Prints the settings that point at them as one line of JSON, then stays until it is
+ * stopped or its input closes, as it does when the one who started it is gone.
  */
 async function main(folder: string): Promise<void> {
   mkdirSync(folder, { recursive: true });
@@ -21,6 +22,7 @@ async function main(folder: string): Promise<void> {
     DEMO_FOLDER: folder,
   };
   process.stdout.write(`${JSON.stringify(settings)}\n`);
+  process.stdin.resume().once('end', () => process.exit(0));
 }
 
 await main(process.argv[2] as string);
