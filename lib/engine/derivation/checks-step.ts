@@ -43,7 +43,7 @@ function equilibriumOf(ctx: Context): ChecksStep['equilibrium'] {
   );
   const free = ctx.analysis.joints.filter((j) => !used.has(j.id));
   const about = free.at(-1) ?? ctx.analysis.joints.at(-1);
-  if (!about) return undefined;
+  if (!about || hasBareCouple(ctx, id)) return undefined;
   const sums: Sum[] = [
     { kind: 'force', x: 1, y: 0 },
     { kind: 'force', x: 0, y: 1 },
@@ -63,6 +63,12 @@ function equilibriumOf(ctx: Context): ChecksStep['equilibrium'] {
     ];
   });
   return lines.length === 0 ? undefined : { id, about, used: used.has(about.id), lines };
+}
+
+/** A distributed load that changes sign and sums to nothing has a couple for its resultant, which the lines do not write. */
+function hasBareCouple({ analysis }: Context, id: string): boolean {
+  const loads = analysis.cases.find((c) => c.id === id)?.loads ?? [];
+  return loads.some((l) => l.kind === 'distributed' && l.w1 !== 0 && l.w1 + l.w2 === 0);
 }
 
 function gapOf(ctx: Context): ChecksStep['gap'] {

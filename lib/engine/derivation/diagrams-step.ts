@@ -81,45 +81,52 @@ export function deriveDiagrams(ctx: Context): DiagramsStep {
     before: figures.length,
     after: figures.length,
   };
-  const first = fitColumns<Column>(
-    loaded.map((s) => ({
-      from: s.from,
-      M: s.startM,
-      V: s.V,
-      w: s.w,
-      x: s.x,
-      top: s.top,
-      e: s.e,
-      before: s.before,
-      after: s.after,
-      zero: undefined,
-      length: undefined,
-    })),
-    start,
-    [
-      { column: 'before', from: ['from', 'x', 'e'], work: (r) => r.from + r.x - r.e },
-      { column: 'after', from: ['from', 'x', 'e'], work: (r) => r.from + r.x + r.e },
-      { column: 'e', from: ['top', 'w'], work: (r) => Math.sqrt((2 * r.top) / r.w) },
-      { column: 'top', from: ['M', 'V', 'w'], work: (r) => r.M + r.V ** 2 / (2 * r.w) },
-      { column: 'x', from: ['V', 'w'], work: (r) => r.V / r.w },
-    ],
-  );
-  const decimals = fitColumns<Column>(
-    straight.map((s) => ({
-      from: s.from,
-      M: s.startM,
-      V: s.V,
-      length: s.to - s.from,
-      top: s.endM,
-      zero: s.zero,
-    })),
-    first,
-    [
-      { column: 'zero', from: ['from', 'M', 'V'], work: (r) => r.from - r.M / r.V },
-      { column: 'top', from: ['M', 'V', 'length'], work: (r) => r.M + r.V * r.length },
-    ],
-  );
+  // The two kinds of table share their columns, so what one asks for is looked over again in the other.
+  let decimals = start;
+  let before: string;
+  do {
+    before = JSON.stringify(decimals);
+    decimals = fitStraight(straight, fitLoaded(loaded, decimals));
+  } while (JSON.stringify(decimals) !== before);
   return { kind: 'diagrams', cases, decimals };
+}
+
+type Decimals = Record<Column, number>;
+
+function fitLoaded(loaded: readonly LoadedStretch[], start: Decimals): Decimals {
+  const rows = loaded.map((s) => ({
+    from: s.from,
+    M: s.startM,
+    V: s.V,
+    w: s.w,
+    x: s.x,
+    top: s.top,
+    e: s.e,
+    before: s.before,
+    after: s.after,
+  }));
+  return fitColumns<Column>(rows, start, [
+    { column: 'before', from: ['from', 'x', 'e'], work: (r) => r.from + r.x - r.e },
+    { column: 'after', from: ['from', 'x', 'e'], work: (r) => r.from + r.x + r.e },
+    { column: 'e', from: ['top', 'w'], work: (r) => Math.sqrt((2 * r.top) / r.w) },
+    { column: 'top', from: ['M', 'V', 'w'], work: (r) => r.M + r.V ** 2 / (2 * r.w) },
+    { column: 'x', from: ['V', 'w'], work: (r) => r.V / r.w },
+  ]);
+}
+
+function fitStraight(straight: readonly StraightStretch[], start: Decimals): Decimals {
+  const rows = straight.map((s) => ({
+    from: s.from,
+    M: s.startM,
+    V: s.V,
+    length: s.to - s.from,
+    top: s.endM,
+    zero: s.zero,
+  }));
+  return fitColumns<Column>(rows, start, [
+    { column: 'zero', from: ['from', 'M', 'V'], work: (r) => r.from - r.M / r.V },
+    { column: 'top', from: ['M', 'V', 'length'], work: (r) => r.M + r.V * r.length },
+  ]);
 }
 
 interface Stretches {

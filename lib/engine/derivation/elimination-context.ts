@@ -1,10 +1,22 @@
 import type { Context } from './context';
 import { deriveSolution } from './solution-step';
 
-/** The gaps are printed with the figures that the elimination of step 10 asks of its right sides. */
+/** Rounds of asking for figures; each round can only ask for more. */
+const most = 8;
+
+/** The gaps and coefficients are printed with the figures that the elimination of step 10 asks of them. */
 export function withEnoughFigures(ctx: Context): Context {
-  const rows = deriveSolution(ctx).elimination?.rows ?? [];
-  const given = rows.filter((r) => !r.less && !r.back);
-  const gap = Math.max(ctx.figures.gap, ...given.map((r) => r.decimals));
-  return { ...ctx, figures: { ...ctx.figures, gap } };
+  let enough = ctx;
+  for (let round = 0; round < most; round++) {
+    const { elimination } = deriveSolution(enough);
+    if (!elimination) break;
+    const { figures } = enough;
+    const given = elimination.rows.filter((r) => !r.less && !r.back);
+    const gap = Math.max(figures.gap, ...given.map((r) => r.decimals));
+    const settled = gap === figures.gap;
+    if (settled && elimination.works) break;
+    const flexibility = settled ? figures.flexibility + 1 : figures.flexibility;
+    enough = { ...enough, figures: { ...figures, gap, flexibility } };
+  }
+  return enough;
 }

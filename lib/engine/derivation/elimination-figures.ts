@@ -14,22 +14,37 @@ const most = 12;
 export function fitRows(rows: readonly EliminationRow[]): EliminationRow[] {
   const fitted = rows.map((r) => ({ ...r }));
   const byLabel = new Map(fitted.map((r) => [symbolKey(r.label), r]));
-  for (const row of [...fitted].reverse()) {
-    const sources = sourcesOf(row).flatMap((s) => byLabel.get(symbolKey(s)) ?? []);
-    row.cells.forEach((_, k) => {
-      while (misses(row, byLabel, k)) {
-        const open = sources.filter((s) => s.decimals < most);
-        const [first] = open;
-        if (!first) break;
-        const coarsest = open.reduce((a, b) => (b.decimals < a.decimals ? b : a), first);
-        coarsest.decimals += 1;
-      }
-    });
-  }
   const given = fitted.filter((r) => !r.less && !r.back);
-  const shared = Math.max(...given.map((r) => r.decimals), 0);
-  for (const r of given) r.decimals = shared;
+  const printed = () => fitted.map((r) => r.decimals).join();
+  let before: string;
+  do {
+    before = printed();
+    for (const row of [...fitted].reverse()) fitRow(row, byLabel);
+    const shared = Math.max(...given.map((r) => r.decimals), 0);
+    for (const r of given) r.decimals = shared;
+  } while (printed() !== before);
   return fitted;
+}
+
+function fitRow(row: EliminationRow, byLabel: ReadonlyMap<string, EliminationRow>): void {
+  const sources = sourcesOf(row).flatMap((s) => byLabel.get(symbolKey(s)) ?? []);
+  row.cells.forEach((_, k) => {
+    // Where the factors' own rounding is what misses, more figures in the rows would not help.
+    if (misses(row, byLabel, k, 'full')) return;
+    while (misses(row, byLabel, k)) {
+      const open = sources.filter((s) => s.decimals < most);
+      const [first] = open;
+      if (!first) break;
+      const coarsest = open.reduce((a, b) => (b.decimals < a.decimals ? b : a), first);
+      coarsest.decimals += 1;
+    }
+  });
+}
+
+/** Whether every row worked from the printed rows above it gives what is printed. */
+export function rowsWork(rows: readonly EliminationRow[]): boolean {
+  const byLabel = new Map(rows.map((r) => [symbolKey(r.label), r]));
+  return rows.every((row) => row.cells.every((_, k) => !misses(row, byLabel, k)));
 }
 
 function sourcesOf(row: EliminationRow) {
@@ -37,10 +52,16 @@ function sourcesOf(row: EliminationRow) {
   return row.back ? [row.back.from, ...row.back.terms.map((t) => t.X)] : [];
 }
 
-function misses(row: EliminationRow, byLabel: ReadonlyMap<string, EliminationRow>, k: number): boolean {
+function misses(
+  row: EliminationRow,
+  byLabel: ReadonlyMap<string, EliminationRow>,
+  k: number,
+  figures: 'printed' | 'full' = 'printed',
+): boolean {
   const at = (label: EliminationRow['label']) => {
     const source = byLabel.get(symbolKey(label));
-    return source ? roundTo(source.cells[k] ?? Number.NaN, source.decimals) : Number.NaN;
+    const cell = source?.cells[k] ?? Number.NaN;
+    return source && figures === 'printed' ? roundTo(cell, source.decimals) : cell;
   };
   const shown = roundTo(row.cells[k] ?? Number.NaN, row.decimals);
   const { less, back } = row;

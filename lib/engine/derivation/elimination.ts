@@ -1,7 +1,7 @@
 import { deriveCompatibility } from './compatibility-step';
 import { type Context, pureValue } from './context';
 import { per } from './dimensions';
-import { fitRows } from './elimination-figures';
+import { fitRows, rowsWork } from './elimination-figures';
 import { negative, product, quotient, sum, type Value } from './expression';
 import { decimalsFor } from './figure-plan';
 import { type Relation, relate } from './relation';
@@ -14,6 +14,8 @@ export interface Elimination {
   entries: Relation[];
   /** Rows of the table: right sides as they stand, then less a multiple of an earlier row, then the redundants. */
   rows: EliminationRow[];
+  /** Every row follows from the printed rows above it. */
+  works: boolean;
 }
 
 export interface EliminationRow {
@@ -32,10 +34,19 @@ interface Entry {
   changes: number;
 }
 
-/** Significant figures of multipliers and reduced entries, so that the last figure of a right side stands. */
-const multiplierFigures = 8;
+/** Significant figures of multipliers and reduced entries: the fewest and the most. */
+const factorFigures = { least: 8, most: 13 };
 
+/** The elimination with as many figures in its factors as its right sides need. */
 export function eliminate(ctx: Context, values: SolutionStep['values']): Elimination {
+  let found = eliminateWith(ctx, values, factorFigures.least);
+  for (let figures = factorFigures.least + 1; !found.works && figures <= factorFigures.most; figures++) {
+    found = eliminateWith(ctx, values, figures);
+  }
+  return found;
+}
+
+function eliminateWith(ctx: Context, values: SolutionStep['values'], figures: number): Elimination {
   const { matrix, cases } = deriveCompatibility(ctx);
   const n = matrix.length;
   const entries = matrix.map((row) =>
@@ -51,11 +62,11 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
   }));
   const multipliers: Relation[] = [];
   const changed: Relation[] = [];
-  const decimals = ctx.figures.gap;
+  const decimals = ctx.figures.rightSide;
   const rows: EliminationRow[] = right.map((r) => ({
     label: r.symbol,
     cells: [...r.cells],
-    decimals,
+    decimals: ctx.figures.gap,
     dimension: r.dimension,
   }));
   for (let j = 0; j < n; j++) {
@@ -65,9 +76,9 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
       // The matrix stays symmetric: the entry below the pivot is the one to its right.
       const beside = entries[j]?.[i];
       if (!beside || beside.value.value === 0) continue;
-      const multiplier = multiplierOf(beside.value, pivot.value, i, j);
+      const multiplier = multiplierOf(beside.value, pivot.value, i, j, figures);
       multipliers.push(multiplier);
-      changed.push(...reduceRow(ctx, entries, i, j, multiplier.result));
+      changed.push(...reduceRow(ctx, entries, i, j, multiplier.result, figures));
       const [mine, theirs] = [right[i], right[j]];
       if (!mine || !theirs) continue;
       const from = mine.symbol;
@@ -96,18 +107,19 @@ export function eliminate(ctx: Context, values: SolutionStep['values']): Elimina
       dimension: X.dimension,
     });
   }
-  return { multipliers, entries: changed, rows: fitRows(rows) };
+  const fitted = fitRows(rows);
+  return { multipliers, entries: changed, rows: fitted, works: rowsWork(fitted) };
 }
 
 const plain = (i: number): SymbolName => ({ letter: 'X', sub: [`${i + 1}`] });
 
-function multiplierOf(beside: Value, pivot: Value, i: number, j: number): Relation {
+function multiplierOf(beside: Value, pivot: Value, i: number, j: number, figures: number): Relation {
   const symbol = { letter: 'μ', sub: i > 8 || j > 8 ? [`${i + 1}`, ',', `${j + 1}`] : [`${i + 1}${j + 1}`] };
   const value = beside.value / pivot.value;
   const dimension = per(beside.dimension, pivot.dimension);
   return relate(symbol, quotient(beside, pivot), {
     dimension,
-    decimals: decimalsFor([value], multiplierFigures, 0, 10),
+    decimals: decimalsFor([value], figures, 0, 12),
   });
 }
 
@@ -117,6 +129,7 @@ function reduceRow(
   i: number,
   j: number,
   multiplier: Value,
+  figures: number,
 ): Relation[] {
   const changed: Relation[] = [];
   const [mine, theirs] = [entries[i], entries[j]];
@@ -138,7 +151,7 @@ function reduceRow(
         : sum(before, negative(product(multiplier, above.value)));
     const line = relate(symbol, formula, {
       dimension: before.dimension,
-      decimals: decimalsFor([value], multiplierFigures, 0, 8),
+      decimals: decimalsFor([value], figures, 0, 12),
     });
     changed.push(line);
     mine[k] = { value: line.result, changes };

@@ -2,6 +2,7 @@ import type { Analysis } from '@/lib/model/analysis';
 import { valueAt } from '../diagrams/piecewise';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
 import type { Solution } from '../solution';
+import { dimensionOf } from './dimensions';
 
 /** Decimals by kind of number, the same through one sheet; a line that needs more figures takes them for itself. */
 export interface FigurePlan {
@@ -21,6 +22,8 @@ export interface FigurePlan {
   area: number;
   /** EI0 δ and EI0 f. */
   gap: number;
+  /** Right sides of the elimination once they are reduced. */
+  rightSide: number;
   flexibility: number;
   /** Deflections in inches or millimetres. */
   deflection: number;
@@ -60,6 +63,7 @@ export function planFigures(solution: Solution): FigurePlan {
     ...Object.values(u.members).flatMap((m) => [...endsOf(m.N), ...endsOf(m.V)]),
   ]);
   const gaps = solution.work.gaps.map((g) => g.total);
+  const gap = noMoreThan(gaps, decimalsFor(gaps, 7, 0, 4));
   const flexibilities = solution.work.flexibility.map((f) => f.total);
   const parts = Object.values(solution.work.parts).flat();
   return {
@@ -77,8 +81,12 @@ export function planFigures(solution: Solution): FigurePlan {
       0,
       3,
     ),
-    gap: noMoreThan(gaps, decimalsFor(gaps, 7, 0, 4)),
-    flexibility: noMoreThan(flexibilities, decimalsFor(flexibilities, 7, 0, 6)),
+    gap,
+    rightSide: gap,
+    flexibility: noMoreThan(
+      flexibilities,
+      decimalsFor(flexibilities, supportingFigures(solution, force, moment), 0, 9),
+    ),
     deflection: analysis.units === 'US' ? 3 : 2,
     load: 2,
   };
@@ -87,6 +95,18 @@ export function planFigures(solution: Solution): FigurePlan {
 /** Fewer decimals where fewer print every value as it is. */
 const noMoreThan = (values: readonly number[], most: number): number =>
   exactDecimals(values, Math.min(2, most), most);
+
+/** Significant figures of the coefficients: two more than the longest redundant is printed with. */
+function supportingFigures(solution: Solution, force: number, moment: number): number {
+  const lengths = Object.values(solution.X).flatMap((X) =>
+    X.map((x, i) => {
+      const q = solution.redundants[i];
+      const decimals = q && dimensionOf(q).length === 1 ? moment + 1 : force + 1;
+      return Math.log10(Math.max(1, Math.abs(x) * 10 ** decimals));
+    }),
+  );
+  return Math.max(7, Math.ceil(Math.max(0, ...lengths)) + 2);
+}
 
 /** Decimals of a factor of the redundants, so that Σ X times it keeps its place: what it may miss is X times its rounding. */
 function supporting(solution: Solution, decimals: number): number {

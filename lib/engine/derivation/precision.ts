@@ -88,7 +88,14 @@ function fitRow<K extends string>(row: Row<K>, rule: ColumnRule<K>, decimals: Re
   };
   const unit = 10 ** -decimals[rule.column];
   const printed = roundTo(target, decimals[rule.column]);
-  while (Math.abs(print(rule.from) - printed) > reworkTolerance * unit) {
+  // Written so that a figure too coarse to work with at all (0/0) counts as a miss.
+  while (!(Math.abs(print(rule.from) - printed) <= reworkTolerance * unit)) {
+    if (Number.isNaN(print(rule.from))) {
+      const open = rule.from.filter((k) => decimals[k] < most);
+      if (open.length === 0) return;
+      for (const k of open) decimals[k] += 1;
+      continue;
+    }
     const effects = rule.from
       .filter((k) => decimals[k] < most)
       .map((k) => ({ k, effect: Math.abs(print(rule.from.filter((o) => o !== k)) - print(rule.from)) }));

@@ -38,7 +38,7 @@ export function derivePrimary(ctx: Context): PrimaryStep {
       const state = solution.primary.loaded[id];
       if (!state) return [];
       const lines = usedLines(state.lines);
-      const written = k < most.cases && lines.length <= most.lines;
+      const written = k < most.cases && lines.length <= most.lines && agree(lines, state.reactions);
       return [
         {
           id,
@@ -51,6 +51,17 @@ export function derivePrimary(ctx: Context): PrimaryStep {
       ];
     }),
   };
+}
+
+/** The lines give the reactions of the state. Where they do not (a load whose resultant is a couple), tables stand alone. */
+function agree(lines: Lines, reactions: readonly { quantity: Quantity; value: number }[]): boolean {
+  const size = Math.max(...reactions.map((r) => Math.abs(r.value)), 0);
+  return lines.every((line) => {
+    if (line.kind !== 'equation' || line.unknown.kind !== 'quantity') return true;
+    const key = quantityKey(line.unknown.quantity);
+    const found = reactions.find((r) => quantityKey(r.quantity) === key);
+    return found !== undefined && Math.abs(found.value - line.value) <= 1e-9 * size;
+  });
 }
 
 /** A reaction with its symbol and the decimals of its kind. */

@@ -49,7 +49,18 @@ function loadForce(ctx: Context, term: StaticsTerm, acting: Acting): Expression 
   }
   const load = loadAt(ctx, acting.id, index);
   if (load.kind === 'distributed') return varyingForce(ctx, acting.id, index, load, size);
-  return loadValue(ctx, acting.id, index, undefined, size);
+  const part = load.kind === 'joint' ? jointPart(ctx, load, term, acting) : undefined;
+  return loadValue(ctx, acting.id, index, part, size);
+}
+
+function jointPart(
+  ctx: Context,
+  load: Extract<ReturnType<typeof loadAt>, { kind: 'joint' }>,
+  term: StaticsTerm,
+  acting: Acting,
+) {
+  if (isCouple(ctx, term, acting)) return 'couple';
+  return term.value === load.x ? 'x' : 'y';
 }
 
 /** ½ w l of a triangle, ½ (w₁ + w₂) l of a trapezoid. */

@@ -179,6 +179,7 @@ export const odd = {
     ...spans(20),
     cases: dead(Array.from({ length: 20 }, (_, i) => down(`${i + 1}-${i + 2}`, 8 + i))),
   }),
+  loadThatIsACouple: form({ units: 'SI', ...spans(2), cases: dead([down('1-2', 6, -6)]) }),
   loadless: form({ units: 'SI', ...spans(2), cases: [] }),
   emptyCase: form({ units: 'SI', ...spans(2), cases: dead([]) }),
 } satisfies Record<string, Analysis>;

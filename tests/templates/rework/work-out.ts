@@ -119,7 +119,7 @@ export function roundingOf(node: Node, lookup: Lookup): number {
   collect(node);
   const plain = workOut(node, lookup).value;
   return numbers.reduce((total, n) => {
-    if (n.decimals === 0) return total;
+    if (n.decimals === 0 && n.unit === '') return total;
     const before = n.value;
     n.value = before + 0.5 * 10 ** -n.decimals;
     const moved = Math.abs(workOut(node, lookup).value - plain);
