@@ -3,7 +3,8 @@ import { type PrimaryBasis, writtenRedundants } from './force-method/self-stress
 import type { SolvedForces } from './force-method/solve-redundants';
 import type { Solution, StaticState } from './solution';
 import type { Action } from './statics/acting-forces';
-import type { Equilibrium, LoadState } from './statics/equilibrium';
+import type { Equilibrium } from './statics/equilibrium';
+import type { LoadState } from './statics/load-state';
 import { planStatics } from './statics/plan-statics';
 import { writeStatics } from './statics/write-statics';
 

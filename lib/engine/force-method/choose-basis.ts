@@ -1,13 +1,12 @@
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Choice } from '../solution';
-import { describeMechanism } from '../statics/describe-mechanism';
 import type { Equilibrium } from '../statics/equilibrium';
-import { mechanismOf } from '../statics/mechanism';
-import { forceName, listed } from '../statics/name-force';
-import { leftNullVector, solveBasis, solveBasisTransposed } from '../statics/solve-lu';
+import { forceName } from '../statics/name-force';
+import { leftNullVector, solveBasis } from '../statics/solve-lu';
 import { factorColumns } from '../statics/sparse-lu';
 import { tolerance } from '../tolerance';
-import { releasesNothing, sameForce } from './idle-release';
+import { releasesNothing } from './idle-release';
+import { refuseRelease } from './refuse-release';
 import { fixedQuantities, type PrimaryBasis, type SelfStress } from './self-stress';
 
 /** The primary structure that a choice of redundants leaves, or why it cannot be used. */
@@ -46,7 +45,7 @@ export function chooseBasis(
   const [free] = lu.freeRows;
   if (free !== undefined) {
     const opened = leftNullVector(lu, free);
-    const refusal = refusalOf(eq, proposed, columns, opened);
+    const refusal = refuseRelease(eq, proposed, columns, opened);
     if (columns.length > degree && refusal.code !== 'same-force')
       return {
         ...refusal,
@@ -117,45 +116,13 @@ function faultOf(
   if (!fixed.has(column)) return undefined;
   const idle = releasesNothing(eq, q);
   if (idle) return bad('nothing-released', idle);
-  const opened = refusalOf(eq, proposed, [column], Float64Array.of(1));
+  const opened = refuseRelease(eq, proposed, [column], Float64Array.of(1));
   return { ...opened, code: 'fixed', message: `${opened.message} Equilibrium alone gives ${name}.` };
 }
 
 function missing(eq: Equilibrium, q: Quantity): Extract<Choice, { good: false }> {
   const idle = releasesNothing(eq, q);
   return bad('nothing-released', idle ?? `There is no force ${forceName(eq, q)} in this structure.`);
-}
-
-/**
- * The motion that releasing a set allows: the set opens by `opened`, everything else keeps its length and angle. The
- * joints move as the kept quantities of the known primary structure say.
- */
-function refusalOf(
-  eq: Equilibrium,
-  proposed: PrimaryBasis,
-  columns: readonly number[],
-  opened: Float64Array,
-): Extract<Choice, { good: false }> {
-  const openings = new Map(columns.map((c, i) => [c, opened[i] as number]));
-  const y = solveBasisTransposed(
-    proposed.lu,
-    proposed.lu.basis.map((q) => openings.get(q) ?? 0),
-  );
-  const largest = Math.max(...opened.map(Math.abs));
-  const released = columns.filter((_, i) => Math.abs(opened[i] as number) > tolerance.fixed * largest);
-  const names = released.map((q) => eq.quantities[q] as Quantity);
-  const mechanism = mechanismOf(eq, y);
-  const same = sameForce(eq, names, mechanism);
-  if (same) return bad('same-force', same);
-  const said = describeMechanism(
-    eq,
-    mechanism,
-    columns.map((q) => eq.quantities[q] as Quantity),
-  );
-  const all = names.map((q) => forceName(eq, q));
-  const who =
-    all.length > 1 ? `${listed(all)} cannot be released together.` : `${all[0]} cannot be the redundant.`;
-  return { good: false, code: said.code, message: `${who} ${said.message}`, mechanism };
 }
 
 function tooFew(n: number, degree: number): string {

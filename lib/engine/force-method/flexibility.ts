@@ -1,6 +1,7 @@
 import type { Restraint } from '@/lib/model/structure';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
-import type { Bar, Equilibrium, LoadState } from '../statics/equilibrium';
+import type { Bar, Equilibrium } from '../statics/equilibrium';
+import type { LoadState } from '../statics/load-state';
 import { endForces, memberDiagram } from './member-state';
 import { momentParts } from './moment-parts';
 import type { MomentPart, WorkRow } from './work';

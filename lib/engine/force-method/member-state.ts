@@ -1,5 +1,6 @@
 import { memberForces } from '../diagrams/member-forces';
-import type { Equilibrium, LoadState } from '../statics/equilibrium';
+import type { Equilibrium } from '../statics/equilibrium';
+import type { LoadState } from '../statics/load-state';
 
 /** N at the start and both end moments of every member, true values, in the order of the members. */
 export interface EndForces {

@@ -1,6 +1,7 @@
 import type { LoadCase } from '@/lib/model/load';
 import { quantityKey } from '@/lib/model/quantity';
-import { type Equilibrium, type LoadState, loadState } from '../statics/equilibrium';
+import type { Equilibrium } from '../statics/equilibrium';
+import { type LoadState, loadState } from '../statics/load-state';
 import { solveEnvelope } from './envelope-cholesky';
 import { gapRows, type LoadedPrimary, loadedPrimary, type Movement } from './flexibility';
 import { type FlexibilityMatrix, flexibilityMatrix } from './flexibility-matrix';
