@@ -4,7 +4,7 @@ import { freePort, readPort } from './free-port.mjs';
 import { installDebian, installPackages, requireNode } from './install.mjs';
 import { endLeftOver, remember, running } from './left-over.mjs';
 import { startMariadb } from './mariadb.mjs';
-import { build, checkSettings, prepareDatabase, serve, startFakes } from './site.mjs';
+import { build, prepareDatabase, serve, startFakes } from './site.mjs';
 import { welcome } from './welcome.mjs';
 
 const say = (text) => process.stdout.write(`${text}\n`);
@@ -63,7 +63,6 @@ async function launch() {
     watch(fakes.child, 'The local mail and time-stamp server');
     env = { ...fakes.settings, ...base };
   }
-  await checkSettings(env);
   await prepareDatabase(env, demo ? 'demo' : 'office');
   await build(env);
   const site = await serve(folder, env, port);

@@ -6,21 +6,16 @@ import { run } from './run-command.mjs';
 import { sourceDigest } from './source-digest.mjs';
 
 const tsx = ['--import', 'tsx'];
+
+/** Next.js is asked to report to nobody. */
+const silent = (env) => ({ ...env, NEXT_TELEMETRY_DISABLED: '1' });
 const quiet = ['ignore', 'ignore', 'inherit'];
 
-/** Ends with a plain sentence when a setting makes no sense or the database does not answer. */
-export async function checkSettings(env) {
-  const said = new Error('The settings above have to be mended first.');
-  await run('node', [...tsx, 'db/check-settings.ts'], { env }).catch(() => {
-    throw said;
+/** Checks the settings, brings the database to the newest shape, and fills an empty one: "demo", "office" or "none". */
+export async function prepareDatabase(env, fill) {
+  await run('node', [...tsx, 'db/prepare.ts', fill], { env }).catch(() => {
+    throw new Error('The database could not be prepared; the lines above say why.');
   });
-}
-
-/** Brings the database to the newest shape; `seed` then fills an empty one. */
-export async function prepareDatabase(env, seed) {
-  const knex = [...tsx, 'node_modules/knex/bin/cli.js', '--knexfile', 'knexfile.ts'];
-  await run('node', [...knex, 'migrate:latest'], { env, stdio: quiet });
-  if (seed) await run('node', [...knex, 'seed:run', `--specific=${seed}.ts`], { env, stdio: quiet });
 }
 
 /** Builds when a source changed since the last build. */
@@ -28,7 +23,7 @@ export async function build(env) {
   const digest = sourceDigest();
   const stamp = '.next/fairhand-sources';
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === digest) return;
-  await run('node', ['node_modules/next/dist/bin/next', 'build'], { env });
+  await run('node', ['node_modules/next/dist/bin/next', 'build'], { env: silent(env) });
   writeFileSync(stamp, digest);
 }
 
@@ -53,7 +48,7 @@ export async function startFakes(folder, env) {
 /** Serves the built application; resolves when it answers. */
 export async function serve(folder, env, port) {
   const next = ['node_modules/next/dist/bin/next', 'start', '-H', '127.0.0.1', '-p', String(port)];
-  const child = spawn('node', next, { env, stdio: quiet });
+  const child = spawn('node', next, { env: silent(env), stdio: quiet });
   const forget = remember(folder, 'site', child.pid);
   const address = `http://127.0.0.1:${port}`;
   for (let i = 0; i < 150; i++) {

@@ -13,6 +13,12 @@ export function connectionSettings(url: string): Knex.Config {
   };
 }
 
+/** Closes the pool of this process, so that it can end. */
+export async function closeDatabase(): Promise<void> {
+  await place.fairhandDatabase?.destroy();
+  place.fairhandDatabase = undefined;
+}
+
 /** The pool of this process; development reloads keep it. */
 export function database(): Knex {
   place.fairhandDatabase ??= knex(connectionSettings(env().databaseUrl));

@@ -1,6 +1,7 @@
 // server only
 import { existsSync } from 'node:fs';
 import { z } from 'zod';
+import { Unusable } from './unusable';
 
 const address = (scheme: RegExp, said: string) =>
   z.string().refine((text) => URL.canParse(text) && scheme.test(new URL(text).protocol), said);
@@ -70,13 +71,13 @@ export function env(): Env {
   return read;
 }
 
-/** Reads settings; one that is empty counts as not set. Throws an Error with one plain sentence a setting. */
+/** Reads settings; one that is empty counts as not set. Throws Unusable with one plain sentence a setting. */
 export function readSettings(from: Record<string, string | undefined>): Env {
   const set = Object.fromEntries(Object.entries(from).filter(([, value]) => value !== ''));
   const parsed = schema.safeParse(set);
   if (!parsed.success) {
     const said = parsed.error.issues.map((i) => `${i.path.join('.')} ${i.message}.`);
-    throw new Error(`Settings in the environment cannot be used. ${said.join(' ')}`);
+    throw new Unusable(`Settings in the environment cannot be used. ${said.join(' ')}`);
   }
   const e = parsed.data;
   return {

@@ -13,7 +13,7 @@ const layers: Record<string, readonly string[]> = {
   'lib/typeset': ['lib/typeset', 'lib/figures', 'lib/engine', 'lib/model', 'lib/units'],
   'lib/signing': ['lib/signing'],
   templates: ['templates', 'lib/typeset', 'lib/figures', 'lib/engine', 'lib/model', 'lib/units'],
-  db: ['db', 'lib/env', 'lib/signing', 'lib/services/demo', 'lib/services/found-office'],
+  db: ['db', 'lib/env', 'lib/unusable', 'lib/signing', 'lib/services/demo', 'lib/services/found-office'],
   'lib/mail': ['lib/mail', 'lib/signing', 'lib/env'],
   'lib/services': ['lib/', 'db', 'templates'],
   app: ['app', 'lib/', 'templates'],
