@@ -69,11 +69,14 @@ export async function submittalsWithSheet(
   officeId: string,
   sheetId: string,
 ): Promise<SubmittalRow[]> {
-  const holding = trx('submittal_revisions as sr')
+  // Joined and not asked in a subquery, which would read past the lock.
+  const rows: SubmittalRow[] = await trx('submittals as s')
+    .join('submittal_revisions as sr', 'sr.submittal_id', 's.id')
     .join('revisions as r', 'r.id', 'sr.revision_id')
-    .where({ 'r.office_id': officeId, 'r.sheet_id': sheetId })
-    .select('sr.submittal_id');
-  return trx('submittals').where({ office_id: officeId }).whereIn('id', holding).forUpdate();
+    .where({ 's.office_id': officeId, 'r.sheet_id': sheetId })
+    .forUpdate()
+    .select('s.*');
+  return [...new Map(rows.map((s) => [s.id, s])).values()];
 }
 
 export async function voidSubmittal(trx: Knex, officeId: string, id: string, reason: string): Promise<void> {

@@ -27,7 +27,8 @@ const triesAfterDeadlock = 6;
 /**
  * Runs a verb in one transaction with its audit row. Each row is bound to the one before it in the office by its hash;
  * a verb that records nothing is undone, and so is one that refuses. A deadlock undoes the whole verb, which then runs
- * again; `work` must therefore touch nothing but the transaction.
+ * again; `work` must therefore touch nothing but the transaction. Isolation is "read committed": what is read after a lock
+ * was taken is what stands there, not what stood there when the transaction began.
  */
 export async function inTransaction<T>(
   who: Author,
@@ -35,7 +36,10 @@ export async function inTransaction<T>(
 ): Promise<Result<T>> {
   for (let tries = 1; ; tries++) {
     try {
-      return done(await database().transaction((trx) => runRecorded(trx, who, work)));
+      const value = await database().transaction((trx) => runRecorded(trx, who, work), {
+        isolationLevel: 'read committed',
+      });
+      return done(value);
     } catch (error) {
       if (error instanceof Refused) return mend(error.code, error.path, error.message);
       if (!isDeadlock(error) || tries === triesAfterDeadlock) throw error;

@@ -53,9 +53,9 @@ export async function makeOffice(): Promise<Office> {
   return { id, authorityId, people };
 }
 
-export async function makeJob(office: Office): Promise<string> {
+export async function makeJob(office: Office, number = '26-001'): Promise<string> {
   const made = await createJob(office.people.engineer, {
-    number: '26-001',
+    number,
     title: 'Invented Hall',
     place: '',
     units: 'SI',
