@@ -1,13 +1,15 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useState } from 'react';
 import type { FormState } from '@/app/components/form-state';
-import { StatusMark } from '@/app/components/status-mark';
+import { LinePicker } from '@/app/components/line-picker';
 import type { Block } from '@/templates/block';
 import { SheetView } from '@/templates/screen/sheet-view';
 import { ConcludeForm } from './conclude-form';
+import { LineMark } from './line-mark';
 import { MarkForm } from './mark-form';
 import { MarkList } from './mark-list';
+import { useCheckKeys } from './use-check-keys';
 
 export interface CheckMark {
   id: string;
@@ -16,6 +18,8 @@ export interface CheckMark {
   text: string;
   answer: string | null;
 }
+
+export type MarkDraft = Pick<CheckMark, 'kind' | 'text'>;
 
 export type FormAction = (state: FormState, form: FormData) => Promise<FormState>;
 
@@ -30,60 +34,46 @@ interface Props {
   mayAnswer: boolean;
 }
 
-const keys: Record<string, CheckMark['kind']> = { a: 'agrees', c: 'correct', q: 'query' };
+const noMark = { kind: 'agrees', text: '' } as const;
 
 /** Lines to go through one by one: J and K move, A agrees, C corrects, Q asks. */
 export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onAnswer, mayAnswer }: Props) {
   const lines = blocks.map((b) => b.id);
   const [line, setLine] = useState(lines[0] ?? '');
-  const [kind, setKind] = useState<CheckMark['kind']>('agrees');
+  // What is being written at each line, so that moving on and coming back loses nothing.
+  const [drafts, setDrafts] = useState<Record<string, MarkDraft>>({});
   const working = check.mine && check.state === 'open';
-
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent) => {
-      const typing =
-        event.target instanceof HTMLElement && /^(INPUT|TEXTAREA|SELECT)$/.test(event.target.tagName);
-      if (!working || typing || event.ctrlKey || event.metaKey || event.altKey) return;
-      const at = lines.indexOf(line);
-      const key = event.key.toLowerCase();
-      const next = key === 'j' ? lines[at + 1] : key === 'k' ? lines[at - 1] : undefined;
-      if (next !== undefined) setLine(next);
-      const mark = keys[key];
-      if (mark) setKind(mark);
-    };
-    window.addEventListener('keydown', onKey);
-    return () => window.removeEventListener('keydown', onKey);
-  }, [working, line, lines]);
-
+  const draft = drafts[line] ?? marks.find((m) => m.line === line) ?? noMark;
+  const write = (part: Partial<MarkDraft>) =>
+    setDrafts((all) => ({ ...all, [line]: { kind: draft.kind, text: draft.text, ...part } }));
+  const go = (to: string | undefined) => {
+    if (to === undefined) return;
+    setLine(to);
+    document.getElementById(`line-${to}`)?.scrollIntoView({ block: 'nearest' });
+  };
+  const step = (by: number) => go(lines[lines.indexOf(line) + by]);
+  useCheckKeys({ working, onStep: step, onKind: (kind) => write({ kind }) });
+  const sheet = (
+    <SheetView
+      blocks={blocks}
+      on={working ? line : undefined}
+      wideMargin
+      marks={(block) => (
+        <LineMark
+          line={block.id}
+          mark={marks.find((m) => m.line === block.id)}
+          onPick={working ? setLine : undefined}
+        />
+      )}
+    />
+  );
   return (
     <div className="frozenzones">
       <section className="frozenpage" aria-label="Sheet">
-        <SheetView
-          blocks={blocks}
-          on={working ? line : undefined}
-          wideMargin
-          marks={(block) => {
-            const mark = marks.find((m) => m.line === block.id);
-            return (
-              <span className="linemark">
-                {mark ? <StatusMark mark={mark.kind} alone /> : null}
-                {working ? (
-                  <button
-                    type="button"
-                    className="linepick"
-                    aria-label={`Mark line ${block.id}`}
-                    onClick={() => setLine(block.id)}
-                  >
-                    ›
-                  </button>
-                ) : null}
-              </span>
-            );
-          }}
-        />
+        <h1>{title}</h1>
+        {working ? <LinePicker onPick={setLine}>{sheet}</LinePicker> : sheet}
       </section>
       <aside className="frozenside">
-        <h1>{title}</h1>
         <p>{sentence(check)}</p>
         {check.note === '' ? null : <p>{check.note}</p>}
         {working ? (
@@ -91,15 +81,24 @@ export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onA
             <MarkForm
               action={onMark}
               line={line}
-              lines={lines}
-              kind={kind}
-              onLine={setLine}
-              onKind={setKind}
+              draft={draft}
+              onWrite={write}
+              onStep={step}
+              onLeft={(left) =>
+                setDrafts((all) => Object.fromEntries(Object.entries(all).filter(([at]) => at !== left)))
+              }
             />
+            <p className="ans">
+              {new Set(marks.map((m) => m.line)).size} of {lines.length} lines marked.
+            </p>
             <ConcludeForm action={onConclude} />
           </>
         ) : null}
-        <MarkList marks={marks} mayAnswer={mayAnswer && check.state === 'open'} onAnswer={onAnswer} />
+        <MarkList
+          marks={marks}
+          mayAnswer={mayAnswer && (check.state === 'open' || check.state === 'returned')}
+          onAnswer={onAnswer}
+        />
       </aside>
     </div>
   );

@@ -2,62 +2,89 @@
 
 import { useActionState, useId } from 'react';
 import { FormMessage } from '@/app/components/form-message';
-import { untouched } from '@/app/components/form-state';
-import { SubmitButton } from '@/app/components/submit-button';
-import { TextField } from '@/app/components/text-field';
-import type { CheckMark, FormAction } from './check-desk';
+import { type FormState, messageAt, untouched } from '@/app/components/form-state';
+import { keepTyped } from '@/app/components/keep-typed';
+import { StatusMark } from '@/app/components/status-mark';
+import type { CheckMark, FormAction, MarkDraft } from './check-desk';
 
-const kinds: { value: CheckMark['kind']; label: string; key: string }[] = [
-  { value: 'agrees', label: 'agrees', key: 'A' },
-  { value: 'correct', label: 'correct this', key: 'C' },
-  { value: 'query', label: 'query', key: 'Q' },
+const kinds: { kind: CheckMark['kind']; key: string; asks: string }[] = [
+  { kind: 'agrees', key: 'A', asks: 'Remark, if any' },
+  { kind: 'correct', key: 'C', asks: 'What is to be corrected' },
+  { kind: 'query', key: 'Q', asks: 'What you ask' },
 ];
 
 interface Props {
   action: FormAction;
   line: string;
-  lines: string[];
-  kind: CheckMark['kind'];
-  onLine: (line: string) => void;
-  onKind: (kind: CheckMark['kind']) => void;
+  draft: MarkDraft;
+  onWrite: (part: Partial<MarkDraft>) => void;
+  onStep: (by: number) => void;
+  onLeft: (line: string) => void;
 }
 
 /** The mark for the line in hand. */
-export function MarkForm({ action, line, lines, kind, onLine, onKind }: Props) {
+export function MarkForm({ action, line, draft, onWrite, onStep, onLeft }: Props) {
   const id = useId();
-  const [state, send] = useActionState(action, untouched);
+  const leave: FormAction = async (before, form) => {
+    const after: FormState = await action(before, form);
+    if (after.errors.length === 0) onLeft(String(form.get('line')));
+    return after;
+  };
+  const [state, send, pending] = useActionState(leave, untouched);
+  const error = messageAt(state, 'text');
+  const asks = kinds.find((k) => k.kind === draft.kind)?.asks;
   return (
-    <form action={send} aria-label="Mark" className="grid gap-3">
-      <div className="fld">
-        <label htmlFor={id}>Line</label>
-        <div className="wr">
-          <select id={id} name="line" className="val" value={line} onChange={(e) => onLine(e.target.value)}>
-            {lines.map((l) => (
-              <option key={l} value={l}>
-                {l}
-              </option>
-            ))}
-          </select>
-        </div>
-      </div>
-      <fieldset>
+    <form onSubmit={keepTyped(send)} aria-label={`Mark line ${line}`} className="grid gap-3">
+      <h2 aria-live="polite">Line {line}</h2>
+      <input type="hidden" name="line" value={line} />
+      <fieldset className="kinds">
         <legend className="sr-only">Kind of mark</legend>
-        {kinds.map((k) => (
-          <label key={k.value} className="block py-1">
+        {kinds.map(({ kind, key }) => (
+          <label key={kind}>
             <input
               type="radio"
               name="kind"
-              value={k.value}
-              checked={kind === k.value}
-              onChange={() => onKind(k.value)}
-            />{' '}
-            {k.label} <kbd>{k.key}</kbd>
+              value={kind}
+              checked={draft.kind === kind}
+              onChange={() => onWrite({ kind })}
+            />
+            <StatusMark mark={kind} /> <kbd>{key}</kbd>
           </label>
         ))}
       </fieldset>
-      <TextField name="text" label="Reason" state={state} lines={3} maxLength={1000} />
+      <div className="fld">
+        <label htmlFor={id}>{asks}</label>
+        <div className={error ? 'wr err' : 'wr'}>
+          <textarea
+            id={id}
+            name="text"
+            className="val"
+            rows={3}
+            maxLength={1000}
+            value={draft.text}
+            onChange={(e) => onWrite({ text: e.target.value })}
+            aria-invalid={error ? true : undefined}
+            aria-describedby={error ? `${id}-says` : undefined}
+          />
+        </div>
+        {error ? (
+          <p id={`${id}-says`} className="ans e">
+            {error}
+          </p>
+        ) : null}
+      </div>
       <FormMessage state={state} />
-      <SubmitButton tone="plain">Leave the mark</SubmitButton>
+      <div className="flex flex-wrap gap-2">
+        <button type="submit" className={pending ? 'btn p wait' : 'btn p'} disabled={pending}>
+          Leave the mark
+        </button>
+        <button type="button" className="btn q" onClick={() => onStep(-1)}>
+          Line before <kbd>K</kbd>
+        </button>
+        <button type="button" className="btn q" onClick={() => onStep(1)}>
+          Next line <kbd>J</kbd>
+        </button>
+      </div>
     </form>
   );
 }

@@ -2,8 +2,10 @@ import type { Metadata } from 'next';
 import Link from 'next/link';
 import { Page } from '@/app/components/page-layout';
 import { sayMoment } from '@/app/components/say-date';
+import { type Mark, StatusMark } from '@/app/components/status-mark';
 import { orRefuse, requireActor } from '@/app/session';
 import { openRevision } from '@/lib/services/open-revision';
+import { makers } from '@/lib/services/require-role';
 import { giveToChecker } from './actions';
 import { CheckForm } from './check-form';
 import { FrozenSheet } from './frozen-sheet';
@@ -31,7 +33,11 @@ export default async function RevisionPage({ params }: Props) {
       margin={
         <>
           <div className="bigno">{revision.sheet}</div>
-          <div className="under">revision {revision.number}</div>
+          <div className="under">
+            revision {revision.number}
+            <br />
+            {revision.digest.slice(0, 8)}
+          </div>
         </>
       }
       foot={[
@@ -45,16 +51,26 @@ export default async function RevisionPage({ params }: Props) {
     >
       <div className="frozenzones">
         <section className="frozenpage" aria-label="Sheet">
+          <h1>
+            {revision.sheet} {revision.title}, revision {revision.number}
+          </h1>
           <FrozenSheet blocks={blocks} />
         </section>
         <aside className="frozenside">
-          <h1>
-            {revision.sheet} revision {revision.number}
-          </h1>
-          <p>{revision.reason}</p>
-          <p className="ans">
-            Frozen by {revision.originator}, engine {revision.engine}. It is never changed again.
-          </p>
+          <StatusMark mark={standing(check?.state)} />
+          <dl className="facts3">
+            <dt>Reason</dt>
+            <dd>{revision.reason}</dd>
+            <dt>Frozen</dt>
+            <dd>
+              {sayMoment(revision.frozenAt, actor.zone)} by {revision.originator}
+            </dd>
+            <dt>Engine</dt>
+            <dd>{revision.engine}</dd>
+            <dt>Digest, SHA-256</dt>
+            <dd className="digest">{revision.digest}</dd>
+          </dl>
+          <p className="ans">A frozen revision is never changed again.</p>
           {check ? (
             <p>
               <Link className="t" href={`/jobs/${job.id}/checks/${check.id}`}>
@@ -63,8 +79,10 @@ export default async function RevisionPage({ params }: Props) {
                   : `Check by ${check.checker}: ${check.state}`}
               </Link>
             </p>
-          ) : (
+          ) : actor.roles.some((r) => makers.includes(r)) ? (
             <CheckForm action={giveToChecker.bind(null, job.id, id)} checkers={checkers} />
+          ) : (
+            <p>An engineer of the office sends it to a checker.</p>
           )}
           <p>
             <Link className="t" href={`/jobs/${job.id}/sheets/${revision.sheetId}`}>
@@ -75,4 +93,17 @@ export default async function RevisionPage({ params }: Props) {
       </div>
     </Page>
   );
+}
+
+function standing(check: 'open' | 'agreed' | 'returned' | 'void' | undefined): Mark {
+  switch (check) {
+    case undefined:
+      return 'frozen';
+    case 'open':
+      return 'checking';
+    case 'agreed':
+      return 'checked';
+    default:
+      return check;
+  }
 }
