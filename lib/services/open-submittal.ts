@@ -40,6 +40,7 @@ export async function openSubmittal(actor: Actor, id: string) {
       mine: submittal.engineer_id === actor.personId,
     },
     sheets: (await revisionsOfSubmittal(db, officeId, id)).map((r) => ({
+      revisionId: r.id,
       number: sheetName(r.sheet_number),
       title: r.title,
       revision: r.number,

@@ -39,7 +39,8 @@ export async function answer(
   form: FormData,
 ): Promise<FormState> {
   const actor = await requireActor();
-  const given = await orRefuse(answerComment(actor, { commentId, answer: form.get('answer') ?? '' }));
+  const input = { commentId, answer: form.get('answer') ?? '', place: form.get('place') ?? '' };
+  const given = await orRefuse(answerComment(actor, input));
   if (!given.ok) return afterRefusal(given, form);
   revalidatePath(path);
   return { errors: [], typed: {}, done: 'The answer is recorded.' };

@@ -24,6 +24,12 @@ export function AnswerForm({
         lines={3}
         maxLength={2000}
       />
+      <TextField
+        name="place"
+        label="Where it is answered, such as S-03 line 2.5"
+        state={state}
+        maxLength={120}
+      />
       <FormMessage state={state} />
       <SubmitButton small>Record the answer</SubmitButton>
     </form>

@@ -2,11 +2,15 @@ import type { Metadata } from 'next';
 import Link from 'next/link';
 import { Page } from '@/app/components/page-layout';
 import { sayDate, sayMoment } from '@/app/components/say-date';
+import { SubmitButton } from '@/app/components/submit-button';
 import { orRefuse, requireActor } from '@/app/session';
 import { openSubmittal } from '@/lib/services/open-submittal';
+import { makers } from '@/lib/services/require-role';
 import { answer, revoke, send } from './actions';
-import { AnswerForm } from './answer-form';
+import { CommentList } from './comment-list';
+import { Delivery } from './delivery';
 import { SendForm } from './send-form';
+import { SheetTable } from './sheet-table';
 import './submittal.css';
 
 interface Props {
@@ -21,6 +25,7 @@ export default async function SubmittalPage({ params }: Props) {
   const { submittal: id } = await params;
   const { job, submittal, sheets, file, authority, transmittals, mails, links, comments, decision } =
     await orRefuse(openSubmittal(actor, id));
+  const mayMake = actor.roles.some((r) => makers.includes(r));
   const path = `/jobs/${job.id}/submittals/${id}`;
   return (
     <Page
@@ -52,15 +57,16 @@ export default async function SubmittalPage({ params }: Props) {
             {decision.author} decided on {sayDate(decision.at, actor.zone)}: <b>{decision.words}</b>
           </p>
         ) : null}
+        {submittal.remarks === '' ? null : <p>{submittal.remarks}</p>}
         <section>
           <h2>Package</h2>
           <p>
             <a className="t" href={`${path}/file`}>
               {file.kind === 'sealed' ? 'The sealed package' : 'The package, not sealed yet'}
             </a>
-            , {submittal.pages} pages, {(file.size / 1024).toFixed(0)} kB, SHA-256 {file.sha256.slice(0, 16)}{' '}
-            …
+            , {submittal.pages} pages, {(file.size / 1024).toFixed(0)} kB
           </p>
+          <p className="ans digest">SHA-256 {file.sha256}</p>
           {file.signedBy ? (
             <p>
               Sealed by {file.signedBy}, {sayMoment(file.madeAt, actor.zone)}.
@@ -75,13 +81,7 @@ export default async function SubmittalPage({ params }: Props) {
               <p>It waits for the seal of the engineer of record.</p>
             )
           ) : null}
-          <ul className="plain">
-            {sheets.map((s) => (
-              <li key={s.number}>
-                {s.number} {s.title}, revision {s.revision}, by {s.originator}, checked by {s.checker}
-              </li>
-            ))}
-          </ul>
+          <SheetTable jobId={job.id} sheets={sheets} zone={actor.zone} />
         </section>
         {submittal.state === 'void' ? (
           <p className="message e">This submittal is void: {submittal.voidReason}. Gather a new one.</p>
@@ -89,61 +89,27 @@ export default async function SubmittalPage({ params }: Props) {
         {submittal.state === 'drafted' || submittal.state === 'void' ? null : (
           <section>
             <h2>Delivery</h2>
-            <ul className="plain">
-              {transmittals.map((t) => (
-                <li key={t.id}>
-                  Transmittal {t.number} to {t.recipient}, {sayMoment(t.sent_at, actor.zone)}
-                </li>
-              ))}
-              {mails.map((m) => (
-                <li key={m.id}>
-                  Letter to {m.recipient}: {m.state}
-                  {m.server_words === '' ? '' : `; the server said: ${m.server_words}`}
-                </li>
-              ))}
-              {links.map((l) => (
-                <li key={`${l.email}${l.expiresAt.getTime()}`}>
-                  Link for {l.reviewer}:{' '}
-                  {l.revokedAt
-                    ? 'revoked'
-                    : l.openedAt
-                      ? `opened ${sayMoment(l.openedAt, actor.zone)}`
-                      : 'not opened yet'}
-                  , good until {sayDate(l.expiresAt, actor.zone)}
-                </li>
-              ))}
-            </ul>
-            {links.some((l) => !l.revokedAt) ? (
-              <form action={revoke.bind(null, path, id)}>
-                <button type="submit" className="btn">
-                  Revoke the links
-                </button>
+            <Delivery transmittals={transmittals} mails={mails} links={links} zone={actor.zone} />
+            {mayMake && links.some((l) => !l.revokedAt) ? (
+              <form action={revoke.bind(null, path, id)} className="row">
+                <SubmitButton tone="plain">Revoke the links</SubmitButton>
               </form>
             ) : null}
-            <SendForm
-              action={send.bind(null, path, id)}
-              reviewer={authority?.reviewer ?? ''}
-              email={authority?.email ?? ''}
-            />
+            {mayMake ? (
+              <SendForm
+                action={send.bind(null, path, id)}
+                reviewer={authority?.reviewer ?? ''}
+                email={authority?.email ?? ''}
+              />
+            ) : null}
           </section>
         )}
         {comments.length === 0 ? null : (
-          <section>
-            <h2>Comments</h2>
-            <ol className="plain">
-              {comments.map((c) => (
-                <li key={c.id}>
-                  <b>{c.number}</b> Line {c.line}
-                  {c.code === '' ? '' : `, ${c.code}`}: {c.text}
-                  {c.answer === null ? (
-                    <AnswerForm action={answer.bind(null, path, c.id)} number={c.number} />
-                  ) : (
-                    <p>Answer: {c.answer}</p>
-                  )}
-                </li>
-              ))}
-            </ol>
-          </section>
+          <CommentList
+            comments={comments}
+            sheets={sheets}
+            answer={mayMake ? answer.bind(null, path) : undefined}
+          />
         )}
       </div>
     </Page>

@@ -16,12 +16,17 @@ export default async function NewSubmittalPage({ params }: Props) {
   const actor = await requireActor();
   const { job: id } = await params;
   const { job, sheets, submittals } = await orRefuse(openJob(actor, id));
-  const number = submittals.length + 1;
+  const number = Math.max(0, ...submittals.map((s) => s.number)) + 1;
   return (
     <Page
       actor={actor}
       path={[{ label: `${job.number} ${job.title}`, href: `/jobs/${id}` }, { label: 'New submittal' }]}
-      margin={<div className="bigno">{number}</div>}
+      margin={
+        <>
+          <div className="bigno">{number}</div>
+          <div className="under">submittal</div>
+        </>
+      }
       foot={[actor.officeName, job.number]}
     >
       <div className="in">
@@ -32,11 +37,27 @@ export default async function NewSubmittalPage({ params }: Props) {
             number: s.number,
             title: s.title,
             revisionId: s.checkState === 'agreed' ? s.revisionId : null,
-            why: s.revisionId === null ? 'not frozen yet' : s.checkState === 'agreed' ? '' : 'not checked',
+            why: whyNot(s.revisionId, s.checkState),
             revision: s.revision,
           }))}
         />
       </div>
     </Page>
   );
+}
+
+function whyNot(revision: string | null, check: 'open' | 'agreed' | 'returned' | 'void' | null): string {
+  if (revision === null) return 'not frozen yet';
+  switch (check) {
+    case 'agreed':
+      return '';
+    case 'open':
+      return 'with its checker';
+    case 'returned':
+      return 'returned by its checker';
+    case 'void':
+      return 'changed since its check';
+    default:
+      return 'not sent to check yet';
+  }
 }

@@ -89,8 +89,12 @@ export default async function SealPage({ params }: Props) {
               You have no licence for {job.jurisdiction} in the register of the office.
             </p>
           )}
-          {submittal.state !== 'drafted' ? (
+          {submittal.state === 'void' ? (
+            <p>This submittal is void: {submittal.voidReason}. Gather a new one.</p>
+          ) : submittal.state !== 'drafted' ? (
             <p>This submittal is sealed. A sealed file is stored once and never written again.</p>
+          ) : !submittal.mine ? (
+            <p>Only the engineer of record named on its cover seals this submittal.</p>
           ) : inForce ? (
             <SealForm submittalId={id} pages={submittal.pages} back={`/jobs/${job.id}/submittals/${id}`} />
           ) : (

@@ -2,8 +2,9 @@
 
 import { useRouter } from 'next/navigation';
 import { useEffect, useId, useRef, useState } from 'react';
+import { KeyFileError } from '@/lib/signing/key-file-error';
 import type { CertificateFacts } from '@/lib/signing/signer';
-import { SignerClient } from '@/lib/signing/signer-client';
+import { SignerClient, SignerError } from '@/lib/signing/signer-client';
 import { complete, prepare } from './actions';
 
 interface Props {
@@ -11,6 +12,11 @@ interface Props {
   pages: number;
   back: string;
 }
+
+/** What went wrong, in words for whoever seals. */
+class Said extends Error {}
+
+const lost = 'The server did not answer. Open the submittal to see whether it is sealed, then try again.';
 
 const day = (d: Date) => d.toLocaleDateString('en-GB', { day: 'numeric', month: 'short', year: 'numeric' });
 
@@ -33,7 +39,8 @@ export function SealForm({ submittalId, pages, back }: Props) {
     try {
       await work();
     } catch (error) {
-      setSaid(error instanceof Error ? error.message : 'Nothing was sealed.');
+      const own = error instanceof Said || error instanceof KeyFileError || error instanceof SignerError;
+      setSaid(own ? error.message : lost);
     } finally {
       setBusy(undefined);
     }
@@ -41,11 +48,12 @@ export function SealForm({ submittalId, pages, back }: Props) {
   const open = () =>
     during('Opening the key …', async () => {
       const chosen = file.current?.files?.[0];
-      if (!chosen) throw new Error('Choose your key file, such as name.p12.');
+      if (!chosen) throw new Said('Choose your key file, such as name.p12.');
       client.current?.close();
       client.current = new SignerClient();
-      setFacts(await client.current.open(chosen, password));
+      // The password is not kept, whether it opens the key or not.
       setPassword('');
+      setFacts(await client.current.open(chosen, password));
     });
   const close = () => {
     client.current?.close();
@@ -55,15 +63,15 @@ export function SealForm({ submittalId, pages, back }: Props) {
   const seal = () =>
     during('Sealing …', async () => {
       const signer = client.current;
-      if (!signer) throw new Error('Open your key first.');
+      if (!signer) throw new Said('Open your key first.');
       const prepared = await prepare(submittalId);
-      if (!prepared.ok) throw new Error(prepared.message);
+      if (!prepared.ok) throw new Said(prepared.message);
       const { preparedId, hole } = prepared.value;
       const answer = await fetch(`${back}/prepared/${preparedId}`);
-      if (!answer.ok) throw new Error('The prepared file did not arrive. Nothing was sealed.');
+      if (!answer.ok) throw new Said('The prepared file did not arrive. Nothing was sealed.');
       const { cms } = await signer.sign(await answer.arrayBuffer(), hole);
       const done = await complete(preparedId, [...cms]);
-      if (!done.ok) throw new Error(done.message);
+      if (!done.ok) throw new Said(done.message);
       close();
       router.push(back);
       router.refresh();
@@ -76,7 +84,8 @@ export function SealForm({ submittalId, pages, back }: Props) {
         <dl className="facts2">
           <dt>Holder</dt>
           <dd>
-            {facts.holder.name}, {facts.holder.licenceNumber}
+            {facts.holder.name}
+            {facts.holder.licenceNumber === undefined ? '' : `, licence ${facts.holder.licenceNumber}`}
           </dd>
           <dt>Issued by</dt>
           <dd>{facts.issuer}</dd>
