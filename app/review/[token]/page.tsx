@@ -3,8 +3,8 @@ import { Page } from '@/app/components/page-layout';
 import { sayDate } from '@/app/components/say-date';
 import { requestAddress } from '@/app/session';
 import { openReview, reviewDoor } from '@/lib/services/open-review';
-import { comment, decide } from './actions';
-import { ReviewDesk } from './review-desk';
+import { comment, decide, settle } from './actions';
+import { type ReviewComment, ReviewDesk } from './review-desk';
 import './review.css';
 
 interface Props {
@@ -37,6 +37,8 @@ export default async function ReviewPage({ params }: Props) {
   }
   const review = await openReview(door.link);
   const { job, submittal, sealed } = review;
+  const at = (revisionId: string | null, line: string) =>
+    `${review.sheets.find((s) => s.revisionId === revisionId)?.number ?? 'package'}, line ${line}`;
   return (
     <Page
       path={[{ label: `${job.number} ${job.title}` }, { label: `Submittal ${submittal.number}` }]}
@@ -64,15 +66,8 @@ export default async function ReviewPage({ params }: Props) {
         purpose={submittal.purpose}
         remarks={submittal.remarks}
         sheets={review.sheets}
-        comments={review.comments.map(({ id, number, revision_id, line, code, text, answer }) => ({
-          id,
-          number,
-          revisionId: revision_id,
-          line,
-          code,
-          text,
-          answer,
-        }))}
+        comments={review.comments.map((c) => seen(c, at(c.revision_id, c.line)))}
+        earlier={review.earlier.map((c) => seen(c, `submittal ${c.submittal}, line ${c.line}`))}
         decisions={review.decisions}
         decision={
           review.decision && {
@@ -84,7 +79,15 @@ export default async function ReviewPage({ params }: Props) {
         file={`/review/${token}/file`}
         onComment={comment.bind(null, token)}
         onDecide={decide.bind(null, token)}
+        onSettle={settle.bind(null, token)}
       />
     </Page>
   );
+}
+
+type Comment = Awaited<ReturnType<typeof openReview>>['comments'][number];
+
+function seen(c: Comment, where: string): ReviewComment {
+  const { id, number, revision_id: revisionId, line, code, text, answer, state } = c;
+  return { id, number, revisionId, line, code, text, answer, state, where };
 }

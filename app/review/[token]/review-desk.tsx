@@ -2,10 +2,13 @@
 
 import { useState } from 'react';
 import type { FormState } from '@/app/components/form-state';
+import { LinePicker } from '@/app/components/line-picker';
 import type { Block } from '@/templates/block';
 import { SheetView } from '@/templates/screen/sheet-view';
 import { CommentForm } from './comment-form';
+import { CommentList } from './comment-list';
 import { DecisionForm } from './decision-form';
+import { LinePins } from './line-pins';
 
 export interface ReviewComment {
   id: string;
@@ -15,21 +18,31 @@ export interface ReviewComment {
   code: string;
   text: string;
   answer: string | null;
+  state: 'open' | 'answered' | 'accepted' | 'reopened';
+  /** Where it is pinned, in words. */
+  where: string;
 }
 
 export type ReviewAction = (state: FormState, form: FormData) => Promise<FormState>;
+
+export type SettleAction = (commentId: string, state: FormState, form: FormData) => Promise<FormState>;
 
 interface Props {
   purpose: string;
   remarks: string;
   sheets: { revisionId: string; number: string; title: string; revision: number; blocks: Block[] }[];
   comments: ReviewComment[];
+  /** Comments on earlier submittals of the job, for the back-check. */
+  earlier: ReviewComment[];
   decisions: string[];
   decision: { words: string; author: string; at: string } | undefined;
   file: string;
   onComment: ReviewAction;
   onDecide: ReviewAction;
+  onSettle: SettleAction;
 }
+
+const ignore = () => undefined;
 
 /** The package sheet by sheet, with its comments in the margin of the page and the decision beside it. */
 export function ReviewDesk({
@@ -37,11 +50,13 @@ export function ReviewDesk({
   remarks,
   sheets,
   comments,
+  earlier,
   decisions,
   decision,
   file,
   onComment,
   onDecide,
+  onSettle,
 }: Props) {
   const [place, setPlace] = useState<{ revisionId: string; line: string } | undefined>();
   const first = sheets[0];
@@ -62,19 +77,23 @@ export function ReviewDesk({
             <h2 className="leafhead">
               {s.number} {s.title} <span className="text-ink3">revision {s.revision}</span>
             </h2>
-            <SheetView
-              blocks={s.blocks}
-              on={place?.revisionId === s.revisionId ? place.line : undefined}
-              wideMargin
-              marks={(block) => (
-                <LineMarks
-                  line={block.id}
-                  closed={decision !== undefined}
-                  pins={comments.filter((c) => c.revisionId === s.revisionId && c.line === block.id)}
-                  onPick={() => setPlace({ revisionId: s.revisionId, line: block.id })}
-                />
-              )}
-            />
+            <LinePicker onPick={decision ? ignore : (line) => setPlace({ revisionId: s.revisionId, line })}>
+              <SheetView
+                blocks={s.blocks}
+                on={place?.revisionId === s.revisionId ? place.line : undefined}
+                wideMargin
+                marks={(block) => (
+                  <LinePins
+                    line={block.id}
+                    closed={decision !== undefined}
+                    pins={comments
+                      .filter((c) => c.revisionId === s.revisionId && c.line === block.id)
+                      .map((c) => c.number)}
+                    onPick={() => setPlace({ revisionId: s.revisionId, line: block.id })}
+                  />
+                )}
+              />
+            </LinePicker>
           </section>
         ))}
       </div>
@@ -94,7 +113,8 @@ export function ReviewDesk({
             onPlace={setPlace}
           />
         )}
-        <CommentList comments={comments} sheets={sheets} />
+        <CommentList title="Comments" comments={comments} onSettle={onSettle} />
+        <CommentList title="Comments on earlier submittals" comments={earlier} onSettle={onSettle} />
         {decision ? (
           <section>
             <h2>Decision</h2>
@@ -107,54 +127,5 @@ export function ReviewDesk({
         )}
       </aside>
     </div>
-  );
-}
-
-function LineMarks({
-  line,
-  pins,
-  closed,
-  onPick,
-}: {
-  line: string;
-  pins: ReviewComment[];
-  closed: boolean;
-  onPick: () => void;
-}) {
-  return (
-    <span className="pins">
-      {pins.map((p) => (
-        <span key={p.id} className="pin">
-          {p.number}
-        </span>
-      ))}
-      {closed ? null : (
-        <button type="button" className="pinhere" aria-label={`Comment on line ${line}`} onClick={onPick}>
-          +
-        </button>
-      )}
-    </span>
-  );
-}
-
-function CommentList({ comments, sheets }: { comments: ReviewComment[]; sheets: Props['sheets'] }) {
-  if (comments.length === 0) return null;
-  const sheetOf = (id: string | null) => sheets.find((s) => s.revisionId === id)?.number ?? '';
-  return (
-    <section>
-      <h2>Comments</h2>
-      <ol className="commentlist">
-        {comments.map((c) => (
-          <li key={c.id}>
-            <span className="pin">{c.number}</span> {c.text}
-            <small>
-              {sheetOf(c.revisionId)}, line {c.line}
-              {c.code === '' ? '' : `, ${c.code}`}
-              {c.answer === null ? ', open' : `. Answer: ${c.answer}`}
-            </small>
-          </li>
-        ))}
-      </ol>
-    </section>
   );
 }
