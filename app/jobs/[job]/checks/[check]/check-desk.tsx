@@ -3,6 +3,7 @@
 import { useState } from 'react';
 import type { FormState } from '@/app/components/form-state';
 import { LinePicker } from '@/app/components/line-picker';
+import { ReadingPage } from '@/app/components/reading-page';
 import type { Block } from '@/templates/block';
 import { SheetView } from '@/templates/screen/sheet-view';
 import { ConcludeForm } from './conclude-form';
@@ -69,10 +70,10 @@ export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onA
   );
   return (
     <div className="frozenzones">
-      <section className="frozenpage" aria-label="Sheet">
+      <ReadingPage className="frozenpage" label="Sheet" focusable={!working}>
         <h1>{title}</h1>
         {working ? <LinePicker onPick={setLine}>{sheet}</LinePicker> : sheet}
-      </section>
+      </ReadingPage>
       <aside className="frozenside">
         <p>{sentence(check)}</p>
         {check.note === '' ? null : <p>{check.note}</p>}

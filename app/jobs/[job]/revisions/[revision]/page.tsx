@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { Page } from '@/app/components/page-layout';
+import { ReadingPage } from '@/app/components/reading-page';
 import { sayMoment } from '@/app/components/say-date';
 import { type Mark, StatusMark } from '@/app/components/status-mark';
 import { orRefuse, requireActor } from '@/app/session';
@@ -50,12 +51,12 @@ export default async function RevisionPage({ params }: Props) {
       ]}
     >
       <div className="frozenzones">
-        <section className="frozenpage" aria-label="Sheet">
+        <ReadingPage className="frozenpage" label="Sheet" focusable>
           <h1>
             {revision.sheet} {revision.title}, revision {revision.number}
           </h1>
           <FrozenSheet blocks={blocks} />
-        </section>
+        </ReadingPage>
         <aside className="frozenside">
           <StatusMark mark={standing(check?.state)} />
           <dl className="facts3">
