@@ -9,6 +9,7 @@ export default defineConfig({
     include: ['tests/**/*.test.{ts,tsx}'],
     exclude: ['tests/database/**', 'tests/browser/**', 'node_modules/**'],
     execArgv: ['--import', 'tsx'],
+    setupFiles: ['tests/fixed-seed.ts'],
     testTimeout: 30_000,
   },
 });

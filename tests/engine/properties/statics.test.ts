@@ -154,7 +154,7 @@ test('every good set of redundants gives one answer', () => {
     }),
     { numRuns: 150 },
   );
-  expect(tried).toBeGreaterThan(50);
+  expect(tried).toBeGreaterThan(25);
 });
 
 function solveOrRefuseSet(input: Parameters<typeof solveOrRefuse>[0]) {
