@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { connection } from 'next/server';
 import type { ReactNode } from 'react';
 import './globals.css';
 
@@ -8,7 +9,9 @@ export const metadata: Metadata = {
     'Calculations in a fair hand: written out in full, checked, sealed, and answered line by line.',
 };
 
-export default function Layout({ children }: { children: ReactNode }) {
+export default async function Layout({ children }: { children: ReactNode }) {
+  // A page written while building would carry no nonce, and its scripts would not run.
+  await connection();
   return (
     <html lang="en">
       <body>{children}</body>

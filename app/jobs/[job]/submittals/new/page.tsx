@@ -1,7 +1,9 @@
 import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
 import { Page } from '@/app/components/page-layout';
 import { orRefuse, requireActor } from '@/app/session';
 import { openJob } from '@/lib/services/open-job';
+import { makers } from '@/lib/services/require-role';
 import { gather } from './actions';
 import { GatherForm } from './gather-form';
 
@@ -14,6 +16,7 @@ export const metadata: Metadata = { title: 'New submittal' };
 /** Which checked sheets go out, and for what. */
 export default async function NewSubmittalPage({ params }: Props) {
   const actor = await requireActor();
+  if (!actor.roles.some((r) => makers.includes(r))) forbidden();
   const { job: id } = await params;
   const { job, sheets, submittals } = await orRefuse(openJob(actor, id));
   const number = Math.max(0, ...submittals.map((s) => s.number)) + 1;

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { forbidden } from 'next/navigation';
 import { Page } from '@/app/components/page-layout';
 import { sayDate } from '@/app/components/say-date';
 import { orRefuse, requireActor } from '@/app/session';
@@ -15,6 +16,7 @@ export const metadata: Metadata = { title: 'Seal' };
 /** What is sealed, by whom, with which key. */
 export default async function SealPage({ params }: Props) {
   const actor = await requireActor();
+  if (!actor.roles.includes('engineer-of-record')) forbidden();
   const { submittal: id } = await params;
   const { job, submittal, sheets, file, licence } = await orRefuse(openSubmittal(actor, id));
   const inForce = licence !== undefined && licence.expires >= new Date();
