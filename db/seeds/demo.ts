@@ -1,9 +1,11 @@
 import { randomUUID } from 'node:crypto';
 import { hash } from '@node-rs/argon2';
 import type { Knex } from 'knex';
+import { fillAnsweredJob } from '../../lib/services/demo/fill-answered-job';
 import { fillDemoJob } from '../../lib/services/demo/fill-demo-job';
+import { actorById } from '../../lib/services/read-actor';
 import { demoEngineer } from '../../lib/signing/demo-keys';
-import { insertAuthority, insertJob, setJobPeople } from '../queries/jobs';
+import { insertAuthority, insertJob, type JobRow, setJobPeople } from '../queries/jobs';
 import { anyOffice, insertOffice } from '../queries/offices';
 import { insertLicence, insertPerson } from '../queries/people';
 
@@ -60,22 +62,34 @@ export async function seed(knex: Knex): Promise<void> {
     reviewer: 'Dana Pell',
     email: 'dana.pell@orrin.example',
   });
-  const job = randomUUID();
-  await insertJob(knex, {
-    id: job,
-    office_id: office,
-    number: '26-014',
-    title: 'Mill Race Boathouse',
-    place: '4 Weir Lane, Orrin',
-    jurisdiction: 'Orrin',
-    authority_id: authority,
-    units: 'US',
-    page_size: 'Letter',
-    codes: 'ASCE/SEI 7-16\nLocal code of the City of Orrin (invented)',
-    changed_at: new Date(),
-  });
-  for (const part of ['engineer-of-record', 'checker'] as const)
-    await setJobPeople(knex, office, job, part, [id(part)]);
-  await setJobPeople(knex, office, job, 'originator', [id('engineer')]);
-  await fillDemoJob(office, job, { engineer: id('engineer'), checker: id('checker') });
+  const addJob = async (job: Pick<JobRow, 'number' | 'title' | 'place' | 'units' | 'page_size'>) => {
+    const jobId = randomUUID();
+    await insertJob(knex, {
+      ...job,
+      id: jobId,
+      office_id: office,
+      jurisdiction: 'Orrin',
+      authority_id: authority,
+      codes: 'ASCE/SEI 7-16\nLocal code of the City of Orrin (invented)',
+      changed_at: new Date(),
+    });
+    for (const part of ['engineer-of-record', 'checker'] as const)
+      await setJobPeople(knex, office, jobId, part, [id(part)]);
+    await setJobPeople(knex, office, jobId, 'originator', [id('engineer')]);
+    return jobId;
+  };
+  const actor = async (key: (typeof people)[number]['key']) => {
+    const found = await actorById(id(key));
+    if (!found) throw new Error(`the demo has no ${key}`);
+    return found;
+  };
+  const demo = {
+    engineer: await actor('engineer'),
+    checker: await actor('checker'),
+    engineerOfRecord: await actor('engineer-of-record'),
+  };
+  const library = { number: '26-009', title: 'Corn Row Library', place: '18 Corn Row, Orrin' };
+  await fillAnsweredJob(await addJob({ ...library, units: 'SI', page_size: 'A4' }), demo);
+  const boathouse = { number: '26-014', title: 'Mill Race Boathouse', place: '4 Weir Lane, Orrin' };
+  await fillDemoJob(await addJob({ ...boathouse, units: 'US', page_size: 'Letter' }), demo);
 }
