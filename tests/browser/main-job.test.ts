@@ -12,11 +12,13 @@ beforeAll(async () => {
 });
 afterAll(() => browser.close());
 
-/** The newest letter to an address that the local mail server kept. */
-async function letterTo(address: string, part: string): Promise<string> {
+/** The newest letter to an address since a moment, as the local mail server kept it; its names begin with the time. */
+async function letterTo(address: string, part: string, since: Date): Promise<string> {
+  const from = since.toISOString().replace(/[:.]/g, '-');
   const folder = join(process.env.DEMO_FOLDER as string, 'mail');
   for (let i = 0; i < 60; i++) {
     const letters = readdirSync(folder)
+      .filter((name) => name >= from)
       .sort()
       .reverse()
       .map((name) => readFileSync(join(folder, name), 'utf8'));
@@ -99,10 +101,11 @@ describe('the main job', () => {
     await sealer.page.getByRole('button', { name: /^Seal \d+ pages$/ }).click();
     await sealer.page.waitForURL(submittalUrl);
     await sealer.page.getByText('The sealed package').waitFor();
+    const sending = new Date();
     await sealer.page.getByRole('button', { name: 'Send the submittal' }).click();
     await sealer.page.getByText(/is on its way/).waitFor();
 
-    const letter = await letterTo('dana.pell@orrin.example', '/review/');
+    const letter = await letterTo('dana.pell@orrin.example', 'Mill Race Boathouse', sending);
     const token = /\/review\/(\S+)/.exec(letter)?.[1] as string;
     const reviewer = await openPage(browser, 390);
     await reviewer.page.goto(`${site()}/review/${token}`);
