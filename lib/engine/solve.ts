@@ -7,20 +7,18 @@ import { combineResults } from './combinations/combine-results';
 import { envelopes } from './combinations/envelopes';
 import { askedDisplacements } from './force-method/asked-displacements';
 import { chooseBasis } from './force-method/choose-basis';
+import { layGround } from './force-method/ground';
 import { refuseOpenAxial } from './force-method/open-axial';
 import { poorChoice } from './force-method/poor-choice';
-import { proposeRedundants } from './force-method/propose-redundants';
-import { referenceStiffness, withReference } from './force-method/reference';
 import { fixedQuantities, type PrimaryBasis } from './force-method/self-stress';
 import { type SolvedForces, solveRedundants } from './force-method/solve-redundants';
 import type { Outcome } from './outcome';
 import { primaryStructure } from './primary-structure';
 import { refuseForm } from './refuse-form';
 import { refuseCoupleOnHinge, refuseUnstable } from './refuse-unstable';
-import { snapPlaces } from './snap-places';
 import type { Choice, Solution } from './solution';
 import { describeDeterminacy } from './statics/determinacy';
-import { type Equilibrium, equilibrium } from './statics/equilibrium';
+import type { Equilibrium } from './statics/equilibrium';
 import { validate } from './validate';
 
 /** Version of the engine, frozen with every revision. Raised whenever a result or a written step could change. */
@@ -50,9 +48,7 @@ export function solve(input: unknown): Outcome<Solution> {
 }
 
 function solveValid(analysis: Analysis): Outcome<Solution> {
-  const reference = referenceStiffness(analysis);
-  const eq = equilibrium(withReference(snapPlaces(analysis), reference));
-  const proposed = proposeRedundants(eq);
+  const { reference, eq, proposed } = layGround(analysis);
   const unstable = refuseUnstable(eq, proposed) ?? refuseCoupleOnHinge(eq);
   if (unstable) return refused(unstable);
   const chosen = analysis.redundants

@@ -5,9 +5,11 @@ import { dimensions } from './dimensions';
 import { endForcesOf } from './end-forces';
 import { type Expression, number, product, sum, type Value } from './expression';
 import { exactDecimals } from './figure-plan';
+import { reworkTolerance } from './precision';
 import { reactionValue } from './primary-step';
 import { type Relation, relate } from './relation';
-import { inCase, type SymbolName } from './symbol-name';
+import { roundTo } from './round-to';
+import { inCase, type SymbolName, symbolKey } from './symbol-name';
 
 /** A quantity in every case and combination. Terms that are factored before they are summed carry a figure more. */
 export interface CombinedRow {
@@ -125,7 +127,7 @@ function endRows(ctx: Context): CombinedRow[] {
           : which === 'V'
             ? names.shear(e.member, e.end)
             : names.axial(e.member, e.end);
-      const key = JSON.stringify(symbol);
+      const key = symbolKey(symbol);
       if (seen.has(key)) return [];
       seen.add(key);
       const cases = pick(byCase, k, which);
@@ -162,16 +164,19 @@ function rowOf(
 
 /** One figure more where the printed cases, factored and summed, would miss a printed sum by a unit. */
 function neededDecimals(ctx: Context, cases: Record<string, number>, decimals: number): number {
-  const round = (v: number, d: number) => Number(v.toFixed(d));
+  const sumOf = ({ factors }: Combination, figures?: number) => {
+    let total = 0;
+    for (const id of Object.keys(factors)) {
+      const value = cases[id] ?? Number.NaN;
+      total += (factors[id] as number) * (figures === undefined ? value : roundTo(value, figures));
+    }
+    return total;
+  };
+  const sums = ctx.analysis.combinations.map((c) => roundTo(sumOf(c), decimals));
   for (let d = decimals; d < decimals + 3; d++) {
-    const misses = ctx.analysis.combinations.some(({ factors }) => {
-      const exact = Object.entries(factors).reduce((t, [id, f]) => t + f * (cases[id] ?? Number.NaN), 0);
-      const printed = Object.entries(factors).reduce(
-        (t, [id, f]) => t + f * round(cases[id] ?? Number.NaN, d),
-        0,
-      );
-      return Math.abs(printed - round(exact, decimals)) > 0.9 * 10 ** -decimals;
-    });
+    const misses = ctx.analysis.combinations.some(
+      (c, i) => Math.abs(sumOf(c, d) - (sums[i] as number)) > reworkTolerance * 10 ** -decimals,
+    );
     if (!misses) return d;
   }
   return decimals + 3;

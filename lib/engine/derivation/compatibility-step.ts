@@ -21,26 +21,22 @@ export interface CompatibilityStep {
 export function deriveCompatibility(ctx: Context): CompatibilityStep {
   const { redundants, work } = ctx.solution;
   const { figures } = ctx;
-  const matrix = redundants.map((_, i) =>
-    redundants.map((_, j): Value | undefined => {
-      const [a, b] = i >= j ? [i, j] : [j, i];
-      const found = work.flexibility.find((f) => f.i === a && f.j === b);
-      if (!found) return undefined;
-      const [qa, qb] = [redundants[i], redundants[j]];
-      if (!qa || !qb) return undefined;
-      const dimension = flexibilityDimension(qa, qb);
-      return {
-        kind: 'value',
-        symbol: flexibilitySymbol(i, j),
-        value: found.total,
-        dimension,
-        decimals: figures.flexibility,
-      };
-    }),
-  );
+  const matrix = redundants.map(() => redundants.map((): Value | undefined => undefined));
+  for (const { i, j, total } of work.flexibility) {
+    const [qa, qb] = [redundants[i], redundants[j]];
+    if (!qa || !qb) continue;
+    const dimension = flexibilityDimension(qa, qb);
+    const put = (r: number, c: number) => {
+      const [row, symbol] = [matrix[r], flexibilitySymbol(r, c)];
+      if (row) row[c] = { kind: 'value', symbol, value: total, dimension, decimals: figures.flexibility };
+    };
+    put(i, j);
+    if (i !== j) put(j, i);
+  }
+  const gaps = new Map(work.gaps.map((g) => [`${g.case} ${g.i}`, g]));
   const cases = ctx.analysis.cases.map(({ id }) => {
     const of = (i: number) => {
-      const gap = work.gaps.find((g) => g.case === id && g.i === i);
+      const gap = gaps.get(`${id} ${i}`);
       const q = redundants[i];
       if (!gap || !q) throw new Error(`case ${id} has no gap ${i + 1}`);
       const common = { kind: 'value', dimension: gapDimension(q), decimals: figures.gap } as const;

@@ -2,11 +2,13 @@ import type { Analysis } from '@/lib/model/analysis';
 import type { Solution } from '../solution';
 import { ArmNames } from './arm-names';
 import { dimensions } from './dimensions';
+import type { EndForces } from './end-forces';
 import type { Value } from './expression';
 import { exactDecimals, type FigurePlan, planFigures } from './figure-plan';
 import { type Placed, placeMembers } from './geometry';
 import { type LoadPart, type LoadSymbol, nameLoads } from './load-symbols';
 import { type Names, nameQuantities } from './names';
+import type { SolutionStep } from './solution-step';
 import type { SymbolName } from './symbol-name';
 
 /** What every step of one derivation reads. */
@@ -18,6 +20,10 @@ export interface Context {
   loads: readonly LoadSymbol[];
   figures: FigurePlan;
   arms: ArmNames;
+  /** End forces of the states met so far, by their diagrams. */
+  ends: WeakMap<object, EndForces[]>;
+  /** Step 10, worked out with the figures it asks for. */
+  solved?: SolutionStep;
 }
 
 export function contextOf(solution: Solution): Context {
@@ -26,7 +32,16 @@ export function contextOf(solution: Solution): Context {
   const names = nameQuantities(analysis, placed);
   const figures = planFigures(solution);
   const arms = new ArmNames(figures.length);
-  return { solution, analysis, placed, names, loads: nameLoads(analysis), figures, arms };
+  return {
+    solution,
+    analysis,
+    placed,
+    names,
+    loads: nameLoads(analysis),
+    figures,
+    arms,
+    ends: new WeakMap(),
+  };
 }
 
 export function placedMember(ctx: Context, id: string): Placed {

@@ -8,13 +8,14 @@ const most = 8;
 export function withEnoughFigures(ctx: Context): Context {
   let enough = ctx;
   for (let round = 0; round < most; round++) {
-    const { elimination } = deriveSolution(enough);
-    if (!elimination) break;
+    const solved = deriveSolution(enough);
+    const { elimination } = solved;
     const { figures } = enough;
+    if (!elimination) return { ...enough, solved };
     const given = elimination.rows.filter((r) => !r.less && !r.back);
     const gap = Math.max(figures.gap, ...given.map((r) => r.decimals));
     const settled = gap === figures.gap;
-    if (settled && elimination.works) break;
+    if (settled && elimination.works) return { ...enough, solved };
     const flexibility = settled ? figures.flexibility + 1 : figures.flexibility;
     enough = { ...enough, figures: { ...figures, gap, flexibility } };
   }

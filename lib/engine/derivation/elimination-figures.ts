@@ -13,26 +13,44 @@ const most = 12;
  */
 export function fitRows(rows: readonly EliminationRow[]): EliminationRow[] {
   const fitted = rows.map((r) => ({ ...r }));
-  const byLabel = new Map(fitted.map((r) => [symbolKey(r.label), r]));
+  const traced = traceRows(fitted);
   const given = fitted.filter((r) => !r.less && !r.back);
-  const printed = () => fitted.map((r) => r.decimals).join();
-  let before: string;
+  const printed = () => fitted.reduce((t, r) => t + r.decimals, 0);
+  let before: number;
   do {
     before = printed();
-    for (const row of [...fitted].reverse()) fitRow(row, byLabel);
+    for (const row of [...traced].reverse()) fitRow(row);
     const shared = Math.max(...given.map((r) => r.decimals), 0);
     for (const r of given) r.decimals = shared;
   } while (printed() !== before);
   return fitted;
 }
 
-function fitRow(row: EliminationRow, byLabel: ReadonlyMap<string, EliminationRow>): void {
-  const sources = sourcesOf(row).flatMap((s) => byLabel.get(symbolKey(s)) ?? []);
-  row.cells.forEach((_, k) => {
+/** A row with the rows that it is worked from, in the order of its formula. */
+interface Traced {
+  row: EliminationRow;
+  sources: EliminationRow[];
+}
+
+function traceRows(rows: readonly EliminationRow[]): Traced[] {
+  const byLabel = new Map(rows.map((r) => [symbolKey(r.label), r]));
+  return rows.map((row) => ({
+    row,
+    sources: sourcesOf(row).flatMap((s) => byLabel.get(symbolKey(s)) ?? []),
+  }));
+}
+
+function sourcesOf(row: EliminationRow) {
+  if (row.less) return [row.less.from, row.less.other];
+  return row.back ? [row.back.from, ...row.back.terms.map((t) => t.X)] : [];
+}
+
+function fitRow(traced: Traced): void {
+  traced.row.cells.forEach((_, k) => {
     // Where the factors' own rounding is what misses, more figures in the rows would not help.
-    if (misses(row, byLabel, k, 'full')) return;
-    while (misses(row, byLabel, k)) {
-      const open = sources.filter((s) => s.decimals < most);
+    if (misses(traced, k, 'full')) return;
+    while (misses(traced, k)) {
+      const open = traced.sources.filter((s) => s.decimals < most);
       const [first] = open;
       if (!first) break;
       const coarsest = open.reduce((a, b) => (b.decimals < a.decimals ? b : a), first);
@@ -43,33 +61,23 @@ function fitRow(row: EliminationRow, byLabel: ReadonlyMap<string, EliminationRow
 
 /** Whether every row worked from the printed rows above it gives what is printed. */
 export function rowsWork(rows: readonly EliminationRow[]): boolean {
-  const byLabel = new Map(rows.map((r) => [symbolKey(r.label), r]));
-  return rows.every((row) => row.cells.every((_, k) => !misses(row, byLabel, k)));
+  return traceRows(rows).every((traced) => traced.row.cells.every((_, k) => !misses(traced, k)));
 }
 
-function sourcesOf(row: EliminationRow) {
-  if (row.less) return [row.less.from, row.less.other];
-  return row.back ? [row.back.from, ...row.back.terms.map((t) => t.X)] : [];
-}
-
-function misses(
-  row: EliminationRow,
-  byLabel: ReadonlyMap<string, EliminationRow>,
-  k: number,
-  figures: 'printed' | 'full' = 'printed',
-): boolean {
-  const at = (label: EliminationRow['label']) => {
-    const source = byLabel.get(symbolKey(label));
-    const cell = source?.cells[k] ?? Number.NaN;
-    return source && figures === 'printed' ? roundTo(cell, source.decimals) : cell;
-  };
-  const shown = roundTo(row.cells[k] ?? Number.NaN, row.decimals);
-  const { less, back } = row;
+function misses({ row, sources }: Traced, k: number, figures: 'printed' | 'full' = 'printed'): boolean {
+  const { less, back, decimals } = row;
+  if (!less && !back) return false;
+  const [from = Number.NaN, ...others] = sources.map(({ cells, decimals: own }) => {
+    const cell = cells[k] ?? Number.NaN;
+    return figures === 'printed' ? roundTo(cell, own) : cell;
+  });
+  const shown = roundTo(row.cells[k] ?? Number.NaN, decimals);
+  const other = (i: number) => others[i] ?? Number.NaN;
   let worked = shown;
-  if (less) worked = at(less.from) - printedValue(less.multiplier) * at(less.other);
+  if (less) worked = from - printedValue(less.multiplier) * other(0);
   if (back) {
-    const over = back.terms.reduce((t, { f, X }) => t - printedValue(f) * at(X), at(back.from));
+    const over = back.terms.reduce((t, { f }, i) => t - printedValue(f) * other(i), from);
     worked = over / printedValue(back.pivot);
   }
-  return Math.abs(worked - shown) > reworkTolerance * 10 ** -row.decimals;
+  return Math.abs(worked - shown) > reworkTolerance * 10 ** -decimals;
 }

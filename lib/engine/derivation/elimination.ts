@@ -1,4 +1,4 @@
-import { deriveCompatibility } from './compatibility-step';
+import { type CompatibilityStep, deriveCompatibility } from './compatibility-step';
 import { type Context, pureValue } from './context';
 import { per } from './dimensions';
 import { fitRows, rowsWork } from './elimination-figures';
@@ -39,15 +39,20 @@ const factorFigures = { least: 8, most: 13 };
 
 /** The elimination with as many figures in its factors as its right sides need. */
 export function eliminate(ctx: Context, values: SolutionStep['values']): Elimination {
-  let found = eliminateWith(ctx, values, factorFigures.least);
+  const equations = deriveCompatibility(ctx);
+  let found = eliminateWith(ctx, equations, values, factorFigures.least);
   for (let figures = factorFigures.least + 1; !found.works && figures <= factorFigures.most; figures++) {
-    found = eliminateWith(ctx, values, figures);
+    found = eliminateWith(ctx, equations, values, figures);
   }
   return found;
 }
 
-function eliminateWith(ctx: Context, values: SolutionStep['values'], figures: number): Elimination {
-  const { matrix, cases } = deriveCompatibility(ctx);
+function eliminateWith(
+  ctx: Context,
+  { matrix, cases }: CompatibilityStep,
+  values: SolutionStep['values'],
+  figures: number,
+): Elimination {
   const n = matrix.length;
   const entries = matrix.map((row) =>
     row.map((v): Entry | undefined =>

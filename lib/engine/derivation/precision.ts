@@ -66,14 +66,15 @@ export function fitColumns<K extends string>(
   rules: readonly ColumnRule<K>[],
 ): Record<K, number> {
   const decimals: Record<K, number> = { ...start };
-  let before: string;
+  const given = () => rules.reduce((t, r) => r.from.reduce((sum, k) => sum + decimals[k], t), 0);
+  let before: number;
   do {
     // A figure that one row gets is printed in all, so rows looked over before are looked over again.
-    before = JSON.stringify(decimals);
+    before = given();
     for (const rule of rules) {
       for (const row of rows) fitRow(row, rule, decimals);
     }
-  } while (JSON.stringify(decimals) !== before);
+  } while (given() !== before);
   return decimals;
 }
 
@@ -81,16 +82,19 @@ function fitRow<K extends string>(row: Row<K>, rule: ColumnRule<K>, decimals: Re
   const target = row[rule.column];
   if (target === undefined || rule.from.some((k) => row[k] === undefined)) return;
   const full = row as Readonly<Record<K, number>>;
-  const print = (keys: readonly K[]) => {
-    const printed: Record<K, number> = { ...full };
-    for (const k of keys) printed[k] = roundTo(full[k], decimals[k]);
+  const printed: Record<K, number> = { ...full };
+  /** The cell worked from what is printed of its row, one column left at full precision if so asked. */
+  const print = (exact?: K) => {
+    for (const k of rule.from) printed[k] = k === exact ? full[k] : roundTo(full[k], decimals[k]);
     return rule.work(printed);
   };
   const unit = 10 ** -decimals[rule.column];
-  const printed = roundTo(target, decimals[rule.column]);
+  const shown = roundTo(target, decimals[rule.column]);
   // Written so that a figure too coarse to work with at all (0/0) counts as a miss.
-  while (!(Math.abs(print(rule.from) - printed) <= reworkTolerance * unit)) {
-    if (Number.isNaN(print(rule.from))) {
+  for (;;) {
+    const worked = print();
+    if (Math.abs(worked - shown) <= reworkTolerance * unit) return;
+    if (Number.isNaN(worked)) {
       const open = rule.from.filter((k) => decimals[k] < most);
       if (open.length === 0) return;
       for (const k of open) decimals[k] += 1;
@@ -98,7 +102,7 @@ function fitRow<K extends string>(row: Row<K>, rule: ColumnRule<K>, decimals: Re
     }
     const effects = rule.from
       .filter((k) => decimals[k] < most)
-      .map((k) => ({ k, effect: Math.abs(print(rule.from.filter((o) => o !== k)) - print(rule.from)) }));
+      .map((k) => ({ k, effect: Math.abs(print(k) - worked) }));
     const worst = effects.reduce(
       (a, b) => (b.effect > a.effect ? b : a),
       effects[0] ?? { k: rule.column, effect: 0 },

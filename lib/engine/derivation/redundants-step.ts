@@ -1,6 +1,6 @@
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
 import type { Mechanism } from '@/lib/model/refusal';
-import { chooser } from '../force-method/choose';
+import { trier } from '../force-method/choose';
 import { type Context, redundantSymbol } from './context';
 import { dimensionOf } from './dimensions';
 import { endForcesOf } from './end-forces';
@@ -85,7 +85,7 @@ function refusedExchanges(ctx: Context): RefusedSets[] {
   });
   const byMotion: Motions = new Map();
   let trials = 0;
-  const ask = chooser(analysis);
+  const ask = trier(analysis);
   for (const { quantity, values } of oncePerSymbol(ctx)) {
     if (quantity.kind === 'axial' || Object.values(values).every((v) => v === 0)) continue;
     const choice = ask(redundants.map((q, k) => (k === 0 ? quantity : q)));
@@ -94,6 +94,7 @@ function refusedExchanges(ctx: Context): RefusedSets[] {
   for (let i = 0; i < n; i++) {
     for (const other of others) {
       if (++trials > most.trials) break;
+      if (callsUp(ctx, i, other)) continue;
       const set = redundants.map((q, k) => (k === i ? other : q));
       const choice = ask(set);
       if (choice.good || !choice.mechanism) continue;
@@ -101,6 +102,20 @@ function refusedExchanges(ctx: Context): RefusedSets[] {
     }
   }
   return [...byMotion.values()];
+}
+
+/** Beside the largest force of a unit state: what is surely called up. */
+const clear = 1e-6;
+
+/** A force that a unit state calls up can take the place of its redundant, so such sets need no trial. */
+function callsUp(ctx: Context, i: number, q: Quantity): boolean {
+  const unit = ctx.solution.primary.units[i];
+  if (!unit) return false;
+  const ends = endForcesOf(ctx, unit.members);
+  const own = new Map(unit.reactions.map((r) => [quantityKey(r.quantity), r.value]));
+  for (const e of ends) own.set(quantityKey({ kind: 'moment', member: e.member, end: e.end }), e.M);
+  const largest = Math.max(...[...own.values()].map(Math.abs));
+  return Math.abs(own.get(quantityKey(q)) ?? 0) > clear * largest;
 }
 
 /** Quantities that equilibrium fixes; moments on both sides of a joint that are one stand once. */

@@ -19,6 +19,7 @@ export interface SolutionStep {
 const most = 12;
 
 export function deriveSolution(ctx: Context): SolutionStep {
+  if (ctx.solved) return ctx.solved;
   const { solution, figures, analysis } = ctx;
   const values = analysis.cases.map(({ id }) => ({
     id,

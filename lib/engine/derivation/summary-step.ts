@@ -85,32 +85,33 @@ export function deriveSummary(ctx: Context): SummaryStep {
 type Three = Pick<MemberDiagrams, 'N' | 'V' | 'M'>;
 
 function demandsOf(list: readonly { by: string; d: Three }[]) {
-  const all = (which: 'N' | 'V' | 'M') =>
-    list.flatMap(({ by, d }) => {
-      const { max, min } = extremes(d[which]);
-      return [
-        { by, value: max.value },
-        { by, value: min.value },
-      ];
-    });
-  const pick = (values: Demand[], better: (a: Demand, b: Demand) => boolean): Demand =>
-    values.reduce((a, b) => (better(b, a) ? b : a), values[0] ?? { by: '', value: 0 });
-  const size = Math.max(...all('M').map((d) => Math.abs(d.value)), 1e-300);
-  const force = Math.max(...all('N').map((d) => Math.abs(d.value)), 1e-300);
-  const kept = (d: Demand, sign: number, scale: number) => (sign * d.value > 1e-9 * scale ? d : undefined);
-  const [least, greatest] = [
-    pick(all('N'), (a, b) => a.value < b.value),
-    pick(all('N'), (a, b) => a.value > b.value),
-  ];
-  const [low, high] = [
-    pick(all('M'), (a, b) => a.value < b.value),
-    pick(all('M'), (a, b) => a.value > b.value),
-  ];
+  const [N, V, M] = [rangeOf(list, 'N'), rangeOf(list, 'V'), rangeOf(list, 'M')];
+  const kept = (d: Demand, sign: number, size: number) => (sign * d.value > 1e-9 * size ? d : undefined);
   return {
-    compression: kept(least, -1, force),
-    tension: kept(greatest, 1, force),
-    V: pick(all('V'), (a, b) => Math.abs(a.value) > Math.abs(b.value)),
-    positive: kept(high, 1, size),
-    negative: kept(low, -1, size),
+    compression: kept(N.least, -1, N.size),
+    tension: kept(N.greatest, 1, N.size),
+    V: V.largest,
+    positive: kept(M.greatest, 1, M.size),
+    negative: kept(M.least, -1, M.size),
+  };
+}
+
+/** The greatest, the least and the largest by size of one kind of force, each the first of its value in the list. */
+function rangeOf(list: readonly { by: string; d: Three }[], which: 'N' | 'V' | 'M') {
+  const all = list.flatMap(({ by, d }): Demand[] => {
+    const { max, min } = extremes(d[which]);
+    return [
+      { by, value: max.value },
+      { by, value: min.value },
+    ];
+  });
+  const pick = (better: (a: Demand, b: Demand) => boolean): Demand =>
+    all.reduce((a, b) => (better(b, a) ? b : a), all[0] ?? { by: '', value: 0 });
+  const largest = pick((a, b) => Math.abs(a.value) > Math.abs(b.value));
+  return {
+    greatest: pick((a, b) => a.value > b.value),
+    least: pick((a, b) => a.value < b.value),
+    largest,
+    size: Math.max(Math.abs(largest.value), 1e-300),
   };
 }

@@ -87,17 +87,22 @@ export interface Place {
 
 /** Greatest and least value with their places: ends and jumps of pieces and zeros of the slope are all there can be. */
 export function extremes(f: PiecewisePolynomial): { max: Place; min: Place } {
-  const places = f.flatMap((p): Place[] => {
-    const h = p.to - p.from;
-    const inner = rootsBetween(derive(p.c), 0, h);
-    return [0, ...inner, h].map((x) => ({ s: p.from + x, value: evaluate(p.c, x) }));
-  });
-  const [first] = places;
+  const [first] = f;
   if (!first) throw new Error('a diagram without pieces has no extreme');
-  return {
-    max: places.reduce((a, b) => (b.value > a.value ? b : a), first),
-    min: places.reduce((a, b) => (b.value < a.value ? b : a), first),
+  let max: Place = { s: first.from, value: evaluate(first.c, 0) };
+  let min = max;
+  const look = (p: Piece, x: number) => {
+    const value = evaluate(p.c, x);
+    if (value > max.value) max = { s: p.from + x, value };
+    if (value < min.value) min = { s: p.from + x, value };
   };
+  for (const p of f) {
+    const h = p.to - p.from;
+    look(p, 0);
+    if (p.c.length > 2) for (const x of rootsBetween(derive(p.c), 0, h)) look(p, x);
+    look(p, h);
+  }
+  return { max, min };
 }
 
 /** Places where the function is zero or jumps through zero; stretches that are zero throughout are left out. */

@@ -1,14 +1,12 @@
 import type { Analysis } from '@/lib/model/analysis';
 import type { Quantity } from '@/lib/model/quantity';
 import type { Choice } from '../solution';
-import { type Equilibrium, equilibrium } from '../statics/equilibrium';
 import { validate } from '../validate';
 import { chooseBasis } from './choose-basis';
 import { flexibilityMatrix } from './flexibility-matrix';
+import { type Ground, layGround } from './ground';
 import { poorChoice } from './poor-choice';
-import { proposeRedundants } from './propose-redundants';
-import { type Reference, referenceStiffness, withReference } from './reference';
-import type { PrimaryBasis } from './self-stress';
+import { tryRedundants } from './try-redundants';
 
 /**
  * The answer about a set of redundants, for a form: whether it leaves a stable primary structure and how well
@@ -31,24 +29,25 @@ export function chooser(analysis: Analysis): (quantities: readonly Quantity[]) =
   };
 }
 
-interface Ground {
-  eq: Equilibrium;
-  proposed: PrimaryBasis;
-  reference: Reference;
+/** Whether sets of one analysis leave a stable structure, and the motion where they do not; without their condition. */
+export function trier(analysis: Analysis): (quantities: readonly Quantity[]) => Tried {
+  const ground = groundOf(analysis);
+  if ('good' in ground) return () => ground;
+  return (quantities) => tryRedundants(ground.eq, ground.proposed, quantities);
 }
+
+type Tried = { good: true } | Extract<Choice, { good: false }>;
 
 /** What every answer starts from, or why there can be none. */
 export function groundOf(analysis: Analysis): Ground | Extract<Choice, { good: false }> {
   const fault = validate(analysis);
   if (fault) return { good: false, code: fault.code, message: fault.message };
-  const reference = referenceStiffness(analysis);
-  const eq = equilibrium(withReference(analysis, reference));
-  const proposed = proposeRedundants(eq);
-  if (proposed.unstable)
+  const ground = layGround(analysis);
+  if (ground.proposed.unstable)
     return {
       good: false,
       code: 'unstable',
       message: 'The structure is unstable before anything is released.',
     };
-  return { eq, proposed, reference };
+  return ground;
 }

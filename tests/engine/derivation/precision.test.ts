@@ -95,4 +95,15 @@ describe('roundTo', () => {
     expect(Object.is(roundTo(-0.0004, 3), 0)).toBe(true);
     expect(roundTo(-0.0006, 3)).toBe(-0.001);
   });
+
+  it('gives the very number that the print reads as, on halves and off them', () => {
+    const double = fc.double({ min: -1e9, max: 1e9, noNaN: true });
+    const half = fc.integer({ min: -1e6, max: 1e6 }).map((n) => (2 * n + 1) / 2000);
+    fc.assert(
+      fc.property(fc.oneof(double, half), fc.integer({ min: 0, max: 12 }), (v, decimals) => {
+        expect(Math.abs(roundTo(v, decimals))).toBe(Number(Math.abs(v).toFixed(decimals)));
+      }),
+      { numRuns: 5000 },
+    );
+  });
 });
