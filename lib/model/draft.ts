@@ -9,7 +9,7 @@ import { quantity } from './quantity';
  */
 export const draftForm = 'fairhand.draft/1';
 
-const text = z.string().max(200);
+const text = z.string().max(200, 'That is longer than 200 characters.');
 const name = z.string().max(17);
 
 export const draftStiffness = z.object({
@@ -52,7 +52,9 @@ export const draftGeometry = z.discriminatedUnion('shape', [
   /** Spans from left to right; one support more than spans; a free end is an overhang. */
   z.object({
     shape: z.literal('beam'),
-    spans: z.array(draftSpan).max(200),
+    spans: z
+      .array(draftSpan)
+      .max(200, 'A sheet takes at most 200 spans. Split the structure into several sheets.'),
     supports: z.array(draftSupport).max(201),
   }),
   /** Two columns and a beam; the heights may differ, then the beam slopes. */
@@ -69,8 +71,12 @@ export const draftGeometry = z.discriminatedUnion('shape', [
   }),
   z.object({
     shape: z.literal('frame'),
-    joints: z.array(draftJoint).max(2_000),
-    members: z.array(draftMember).max(2_000),
+    joints: z
+      .array(draftJoint)
+      .max(2_000, 'A sheet takes at most 2,000 joints. Split the structure into several sheets.'),
+    members: z
+      .array(draftMember)
+      .max(2_000, 'A sheet takes at most 2,000 members. Split the structure into several sheets.'),
   }),
 ]);
 
@@ -119,7 +125,7 @@ export const draftCase = z.object({
   nature,
   category: z.string().max(16).default(''),
   reversible: z.boolean().default(false),
-  loads: z.array(draftLoad).max(5_000),
+  loads: z.array(draftLoad).max(5_000, 'A case takes at most 5,000 loads.'),
 });
 
 /** A combination of the office's own, written as a sum: "1.2 D + 1.6 L". */
@@ -143,7 +149,7 @@ export const draft = z.object({
   units: unitSet,
   title: z.string().max(120),
   /** Assumptions and references in the engineer's own words, printed in step 1. */
-  basis: z.string().max(4_000).default(''),
+  basis: z.string().max(4_000, 'The basis is longer than 4,000 characters.').default(''),
   stiffness: z.object({
     kind: z.enum(['absolute', 'relative']),
     EI0: text.default(''),
@@ -152,10 +158,10 @@ export const draft = z.object({
     alpha: text.default(''),
   }),
   geometry: draftGeometry,
-  cases: z.array(draftCase).max(64),
+  cases: z.array(draftCase).max(64, 'A sheet takes at most 64 cases.'),
   /** Key of a published set of combinations, or blank; the office's own come after it. */
   combinationSet: z.string().max(40).default(''),
-  combinations: z.array(draftCombination).max(256).default([]),
+  combinations: z.array(draftCombination).max(256, 'A sheet takes at most 256 sums of its own.').default([]),
   redundants: z.array(quantity).max(2_000).optional(),
   displacements: z.array(draftAsk).max(64).default([]),
 });

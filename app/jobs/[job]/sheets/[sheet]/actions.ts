@@ -1,5 +1,6 @@
 'use server';
 
+import { z } from 'zod';
 import { orRefuse, requireActor } from '@/app/session';
 import type { Draft } from '@/lib/model/draft';
 import { draft as draftSchema } from '@/lib/model/draft';
@@ -10,10 +11,19 @@ import type { Keeping, Trial, Writing } from './_desk/writing';
 import { describeTrial } from './describe-trial';
 import { describeWriting } from './describe-writing';
 
+const chosen = quantitySchema.array().max(2_000, 'At most 2,000 redundants can be chosen.');
+
+/** Every sentence of what a schema refuses, once. */
+function sayIssues(error: z.ZodError): string {
+  return [...new Set(error.issues.map((i) => i.message))].join(' ');
+}
+
 /** Keeps a draft on top of the version it was made from. */
 export async function keepDraft(sheetId: string, version: number, draft: Draft): Promise<Keeping> {
   const actor = await requireActor();
-  const kept = await orRefuse(keep(actor, { sheetId, version, draft }));
+  const parsed = draftSchema.safeParse(draft);
+  if (!parsed.success) return { ok: false, reason: 'refused', message: sayIssues(parsed.error) };
+  const kept = await orRefuse(keep(actor, { sheetId, version, draft: parsed.data }));
   return kept.ok
     ? { ok: true, version: kept.version, keptAt: kept.keptAt.toISOString() }
     : {
@@ -42,7 +52,9 @@ export async function writeCalculation(draft: Draft): Promise<Writing> {
 /** Tries another set of redundants on a draft. */
 export async function tryRedundants(draft: Draft, quantities: Quantity[]): Promise<Trial> {
   await requireActor();
-  return describeTrial(draftSchema.parse(draft), quantitySchema.array().max(2_000).parse(quantities));
+  const parsed = z.object({ draft: draftSchema, quantities: chosen }).safeParse({ draft, quantities });
+  if (!parsed.success) return { good: false, message: sayIssues(parsed.error), drawing: undefined };
+  return describeTrial(parsed.data.draft, parsed.data.quantities);
 }
 
 /** Freezes the sheet; answers where the revision can be read. */
