@@ -66,6 +66,8 @@ export function useKeeping(
           theirs: answer.draft,
         });
       } else {
+        // It stays in this browser; the next change is handed over again.
+        handed.current = sent;
         setState({ state: 'refused', message: answer.message });
       }
     } catch {
@@ -75,7 +77,7 @@ export function useKeeping(
     }
   }, [keep, sheetId]);
 
-  const stopped = state.state === 'conflict' || state.state === 'refused';
+  const stopped = state.state === 'conflict';
   useEffect(() => {
     if (handed.current === draft) return;
     window.localStorage.setItem(backupKey(sheetId), JSON.stringify({ version: version.current, draft }));
