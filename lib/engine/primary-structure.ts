@@ -1,5 +1,5 @@
 import { endForces, memberDiagram } from './force-method/member-state';
-import { type PrimaryBasis, writtenRedundants } from './force-method/self-stress';
+import { type PrimaryBasis, writtenMembers, writtenRedundants } from './force-method/self-stress';
 import type { SolvedForces } from './force-method/solve-redundants';
 import type { Solution, StaticState } from './solution';
 import type { Action } from './statics/acting-forces';
@@ -8,9 +8,6 @@ import type { LoadState } from './statics/load-state';
 import { planStatics } from './statics/plan-statics';
 import { writeStatics } from './statics/write-statics';
 
-/** Up to here the statics of every state is written out; beyond it the tables of its forces stand alone. */
-const writtenMembers = 150;
-
 /** The primary structure with its states and work integrals, in the form the written calculation takes them. */
 export function primaryStructure(
   eq: Equilibrium,
@@ -18,7 +15,10 @@ export function primaryStructure(
   solved: SolvedForces,
 ): Pick<Solution, 'primary' | 'work'> {
   if (basis.local)
-    return { primary: { pieces: [], loaded: {}, units: [] }, work: { parts: {}, flexibility: [], gaps: [] } };
+    return {
+      primary: { written: 'results', pieces: [], loaded: {}, units: [] },
+      work: { parts: {}, flexibility: [], gaps: [] },
+    };
   const names = basis.redundants.map((q) => eq.quantities[q] as Solution['redundants'][number]);
   const written = names.length <= writtenRedundants && eq.bars.length <= writtenMembers;
   const plan = written ? planStatics(eq, names) : undefined;
@@ -48,7 +48,10 @@ export function primaryStructure(
   );
   const flexibility = solved.entries.map((f) => (written ? f : { ...f, rows: [] }));
   const pieces = plan?.bodies.list.map((b) => b.members) ?? [];
-  return { primary: { pieces, loaded, units }, work: { parts, flexibility, gaps } };
+  return {
+    primary: { written: written ? 'lines' : 'tables', pieces, loaded, units },
+    work: { parts, flexibility, gaps },
+  };
 }
 
 /** N, V, M and reactions of a state of scaled quantities; with `only`, those that it reaches. */

@@ -58,12 +58,14 @@ export interface Determinacy {
   tolerance: number;
 }
 
-/**
- * With more than 30 redundants lines and rows are left out. With more than 150, where unit states would reach far
- * (frames of many storeys), the compatibility equations are written for self-stress states around single cells: then pieces, states,
- * parts, flexibility and gaps are all empty, and only redundants, results and checks stand.
- */
 export interface PrimaryStructure {
+  /**
+   * `lines`: every line of statics and every row of work. `tables`, with more than 30 redundants or 150 members: states
+   * and totals without lines and rows. `results`, with more than 150 redundants where unit states would reach far (frames
+   * of many storeys): the compatibility equations are set for self-stress states around single cells, and pieces, states,
+   * parts, flexibility and gaps are all empty.
+   */
+  written: 'lines' | 'tables' | 'results';
   /** Rigid pieces between hinges and cuts: member ids of each. */
   pieces: string[][];
   /** Member forces and reactions under each case, redundants zero, and how a person finds them. */

@@ -38,6 +38,10 @@ export function composeCombinations(step: CombinationsStep, out: StepWriter, sce
     out,
     scene,
   );
+  if (step.notWritten)
+    out.paragraph(
+      `The end forces of ${scene.analysis.members.length} members in every combination are not tabled; the greatest of each member follow below and in step 16.`,
+    );
   spans(step, out, scene);
   if (scene.figures) figures(step, out, scene);
 }

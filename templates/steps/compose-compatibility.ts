@@ -3,6 +3,7 @@ import { quantityTex } from '@/lib/typeset/quantity-tex';
 import { caseTex, symbolTex } from '@/lib/typeset/write-symbol';
 import { unitHead } from '@/lib/typeset/write-unit';
 import type { EquationRow } from '../block';
+import { notWrittenWords } from './not-written';
 import { runsOf, type Scene } from './scene';
 import type { StepWriter } from './step-writer';
 import { countWords, plain } from './words';
@@ -21,6 +22,10 @@ export function composeCompatibility(step: CompatibilityStep, out: StepWriter, s
     out.paragraph(
       'There is nothing to solve: the structure is determinate, and equilibrium has already given every force.',
     );
+    return;
+  }
+  if (step.notWritten) {
+    out.paragraph(notWrittenWords(step.notWritten));
     return;
   }
   const moved = step.cases.some((c) => c.rightSides.some((r) => r.value !== 0));

@@ -12,7 +12,11 @@ export function composeForces(step: ForcesStep, out: StepWriter, scene: Scene): 
   const { units, solution } = scene;
   out.heading('Reactions and end forces');
   if (solution.redundants.length === 0) out.paragraph('They are those of step 5.');
-  else {
+  else if (step.notWritten) {
+    out.paragraph(
+      'The forces under the loads and those of the self-stress states around single cells, times what the solution gives each, add up to those of the tables.',
+    );
+  } else {
     out.paragraph(
       'Everything follows by superposition: $R=R_0+\\sum X_i\\bar{R}_i$, and $N$, $V$, $M$ in the same way from the tables of steps 5, 7 and 10.',
     );

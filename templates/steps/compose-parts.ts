@@ -3,6 +3,7 @@ import type { MomentPart, PartShape } from '@/lib/engine/force-method/work';
 import { drawMomentParts } from '@/lib/figures/draw-moment-parts';
 import { fractionTex } from '@/lib/typeset/number';
 import { unitHead } from '@/lib/typeset/write-unit';
+import { notWrittenWords } from './not-written';
 import { narrow, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { memberWords, plain } from './words';
@@ -11,6 +12,10 @@ import { cell, relationRow } from './write-lines';
 /** Step 6: the primary moments as named shapes with their areas and centroids. */
 export function composeParts(step: PartsStep, out: StepWriter, scene: Scene): void {
   out.heading('Moments of the primary structure, by parts');
+  if (step.notWritten) {
+    out.paragraph(notWrittenWords(step.notWritten));
+    return;
+  }
   const filled = step.cases.filter((c) => c.parts.length > 0);
   if (filled.length === 0) {
     out.paragraph('No load bends the primary structure.');

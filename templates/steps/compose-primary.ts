@@ -4,6 +4,7 @@ import { quantityNumber } from '@/lib/typeset/quantity-tex';
 import { caseTex } from '@/lib/typeset/write-symbol';
 import { unitHead } from '@/lib/typeset/write-unit';
 import { endTable } from './end-table';
+import { notWrittenWords } from './not-written';
 import { narrow, runsOf, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { capital, listWords, plain, releaseWords } from './words';
@@ -29,7 +30,14 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
     );
   }
   if (scene.figures) figures(step, out, scene);
+  if (step.notWritten) {
+    out.paragraph(notWrittenWords(step.notWritten));
+    return;
+  }
   step.cases.forEach((c, k) => {
+    // What keeps one case from being written keeps all; cases like those before it need no word.
+    if (c.notWritten && c.notWritten.why !== 'alike' && (k === 0 || c.notWritten.why === 'couple'))
+      out.paragraph(`**Case ${plain(c.id)}.** ${notWrittenWords(c.notWritten)}`);
     if (c.steps.length === 0) return;
     if (k === 0) {
       c.steps.forEach((s, i) => {

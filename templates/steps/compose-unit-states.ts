@@ -2,6 +2,7 @@ import { dimensionOf } from '@/lib/engine/derivation/dimensions';
 import type { UnitStatesStep } from '@/lib/engine/derivation/unit-states-step';
 import { drawUnit } from '@/lib/figures/draw-unit';
 import { endTable } from './end-table';
+import { notWrittenWords } from './not-written';
 import { narrow, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { listWords } from './words';
@@ -14,6 +15,10 @@ const drawn = 8;
 export function composeUnitStates(step: UnitStatesStep, out: StepWriter, scene: Scene): void {
   const { states } = step;
   out.heading(states.length === 1 ? 'Unit-load structure' : 'Unit-load structures');
+  if (states.length === 0 && step.notWritten) {
+    out.paragraph(notWrittenWords(step.notWritten));
+    return;
+  }
   if (states.length === 0) {
     out.paragraph('There is no redundant, so there is no unit-load structure.');
     return;
@@ -23,6 +28,7 @@ export function composeUnitStates(step: UnitStatesStep, out: StepWriter, scene: 
   out.paragraph(
     `$X_i=1$ acts alone on the primary structure. A bar marks its effects: $\\bar{R}$, $\\bar{N}$, $\\bar{V}$ and $\\bar{m}$ are per unit of $X_i$. No load acts between the joints, so every $\\bar{m}$ is straight on each member.${hinged ? ' $\\bar{F}$ with the name of a member is the force on its end at a hinge.' : ''}`,
   );
+  if (step.notWritten) out.paragraph(notWrittenWords(step.notWritten));
   for (const s of states) {
     if (s.steps.length > 0) {
       s.steps.forEach((line, k) => {

@@ -1,5 +1,6 @@
 import type { WorkStep } from '@/lib/engine/derivation/work-step';
 import { unitHead } from '@/lib/typeset/write-unit';
+import { notWrittenWords } from './not-written';
 import type { Scene } from './scene';
 import type { StepWriter } from './step-writer';
 import { listWords, plain } from './words';
@@ -40,6 +41,10 @@ export function composeWork(step: WorkStep, out: StepWriter, scene: Scene): void
     ],
     theorem,
   );
+  if (step.notWritten) {
+    out.paragraph(notWrittenWords(step.notWritten));
+    return;
+  }
   explain(step, out);
   if (step.rows) {
     for (const table of step.flexibility) {

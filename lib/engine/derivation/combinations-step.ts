@@ -5,6 +5,7 @@ import { dimensions } from './dimensions';
 import { endForcesOf } from './end-forces';
 import { type Expression, number, product, sum, type Value } from './expression';
 import { exactDecimals } from './figure-plan';
+import { type NotWritten, tooLong } from './not-written';
 import { reworkTolerance } from './precision';
 import { reactionValue } from './primary-step';
 import { type Relation, relate } from './relation';
@@ -33,6 +34,8 @@ export interface CombinationsStep {
   example?: { id: string; lines: Relation[] };
   reactions: CombinedRow[];
   ends: CombinedRow[];
+  /** Why the end forces are not tabled: step 16 and the spans below give the greatest. */
+  notWritten?: NotWritten;
   /** Greatest and least span moments with their combination and place. */
   spans: { member: string; max: Place; min: Place }[];
 }
@@ -55,7 +58,8 @@ export function deriveCombinations(ctx: Context): CombinationsStep {
     4,
   );
   const reactions = combinations.length === 0 ? [] : reactionRows(ctx);
-  const ends = combinations.length === 0 || analysis.members.length > most.members ? [] : endRows(ctx);
+  const many = analysis.members.length > most.members;
+  const ends = combinations.length === 0 || many ? [] : endRows(ctx);
   const spans = spansOf(ctx);
   const first = combinations.reduce<Combination | undefined>(
     (a, b) => (a && Object.keys(a.factors).length >= Object.keys(b.factors).length ? a : b),
@@ -74,6 +78,7 @@ export function deriveCombinations(ctx: Context): CombinationsStep {
     example: first && lines ? { id: first.id, lines } : undefined,
     reactions,
     ends,
+    notWritten: many ? tooLong(ctx) : undefined,
     spans: figures ? spans : [],
   };
 }

@@ -2,6 +2,7 @@ import type { Quantity } from '@/lib/model/quantity';
 import { type Context, redundantSymbol } from './context';
 import { flexibilityDimension, gapDimension } from './dimensions';
 import { product, type Value } from './expression';
+import { cellsInstead, type NotWritten } from './not-written';
 import { type Relation, relate } from './relation';
 import { referenceValue } from './structure-step';
 import type { SymbolName } from './symbol-name';
@@ -16,11 +17,17 @@ export interface CompatibilityStep {
   cases: { id: string; gaps: Value[]; rightSides: Value[] }[];
   /** EI0 times the movements prescribed at the releases themselves. */
   movements: Relation[];
+  /** Why the equations have no figures: matrix and cases are empty. */
+  notWritten?: NotWritten;
 }
 
 export function deriveCompatibility(ctx: Context): CompatibilityStep {
   const { redundants, work } = ctx.solution;
   const { figures } = ctx;
+  const named = redundants.map((quantity, i) => ({ symbol: redundantSymbol(i), quantity }));
+  const notWritten = cellsInstead(ctx);
+  if (notWritten)
+    return { kind: 'compatibility', redundants: named, matrix: [], cases: [], movements: [], notWritten };
   const matrix = redundants.map(() => redundants.map((): Value | undefined => undefined));
   for (const { i, j, total } of work.flexibility) {
     const [qa, qb] = [redundants[i], redundants[j]];
@@ -51,7 +58,7 @@ export function deriveCompatibility(ctx: Context): CompatibilityStep {
   });
   return {
     kind: 'compatibility',
-    redundants: redundants.map((quantity, i) => ({ symbol: redundantSymbol(i), quantity })),
+    redundants: named,
     matrix,
     cases,
     movements: cases.flatMap((c) => c.rightSides.flatMap((r) => movementLine(ctx, r))),

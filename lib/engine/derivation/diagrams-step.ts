@@ -51,13 +51,10 @@ export interface DiagramsStep {
 
 type Column = 'from' | 'length' | 'M' | 'V' | 'w' | 'x' | 'top' | 'e' | 'zero' | 'before' | 'after';
 
-/** Members looked over in tables; beyond, the diagrams carry the values. */
-const most = 60;
-
 export function deriveDiagrams(ctx: Context): DiagramsStep {
   const cases = ctx.analysis.cases.map(({ id }) => {
     const members = ctx.solution.cases[id]?.members ?? {};
-    const all = ctx.analysis.members.slice(0, most).map((m) => stretchesOf(ctx, m.id, members[m.id]));
+    const all = ctx.analysis.members.map((m) => stretchesOf(ctx, m.id, members[m.id]));
     return {
       id,
       straight: all.flatMap((s) => s.straight),

@@ -3,6 +3,7 @@ import { type Context, pureValue, redundantSymbol } from './context';
 import { dimensionOf, dimensions, per } from './dimensions';
 import { type EndForces, endForcesOf } from './end-forces';
 import { type Expression, number, product, sum, type Value } from './expression';
+import { cellsInstead, type NotWritten } from './not-written';
 import { reactionValue } from './primary-step';
 import { type Relation, relate } from './relation';
 import { inCase, inUnitState, onPrimary, type SymbolName } from './symbol-name';
@@ -13,6 +14,8 @@ export interface ForcesStep {
   /** The case that is written out; absent when there is nothing to superpose. */
   example?: { id: string; reactions: Relation[]; moments: Relation[] };
   cases: { id: string; reactions: Value[]; ends: EndForces[] }[];
+  /** Why there is nothing to superpose by hand. */
+  notWritten?: NotWritten;
 }
 
 /** Lines of one case are written out up to so many terms; beyond, tables stand alone. */
@@ -29,7 +32,7 @@ export function deriveForces(ctx: Context): ForcesStep {
   const [first] = cases;
   const n = solution.redundants.length;
   const example = first && n > 0 && n <= most.terms ? exampleOf(ctx, first.id, first) : undefined;
-  return { kind: 'forces', example, cases };
+  return { kind: 'forces', example, cases, notWritten: cellsInstead(ctx) };
 }
 
 function exampleOf(

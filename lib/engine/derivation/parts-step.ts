@@ -3,6 +3,7 @@ import { type Context, lengthValue, placedMember } from './context';
 import { dimensions } from './dimensions';
 import type { Value } from './expression';
 import { exactDecimals } from './figure-plan';
+import { cellsInstead, type NotWritten } from './not-written';
 import { heightFormula } from './part-height';
 import { fitColumns } from './precision';
 import { type Relation, relate } from './relation';
@@ -28,6 +29,8 @@ export interface PartDecimals {
 export interface PartsStep {
   kind: 'parts';
   cases: { id: string; parts: NamedPart[]; heights: Relation[]; decimals: PartDecimals }[];
+  /** Why no part is named. */
+  notWritten?: NotWritten;
 }
 
 export function deriveParts(ctx: Context): PartsStep {
@@ -36,7 +39,7 @@ export function deriveParts(ctx: Context): PartsStep {
     const decimals = decimalsOf(ctx, parts);
     return { id, parts, heights: parts.flatMap((p) => heightOf(ctx, p, decimals.height)), decimals };
   });
-  return { kind: 'parts', cases };
+  return { kind: 'parts', cases, notWritten: cellsInstead(ctx) };
 }
 
 function decimalsOf(ctx: Context, parts: readonly NamedPart[]): PartDecimals {

@@ -3,6 +3,7 @@ import { type Context, redundantSymbol } from './context';
 import { dimensionOf } from './dimensions';
 import { type EndForces, endForcesOf } from './end-forces';
 import type { Value } from './expression';
+import { cellsInstead, type NotWritten, tooLong } from './not-written';
 import { type StaticsStep, writeSteps } from './statics';
 import { inCase, onPrimary, type SymbolName } from './symbol-name';
 
@@ -11,10 +12,14 @@ export interface PrimaryStep {
   kind: 'primary';
   released: { symbol: SymbolName; is: SymbolName; quantity: Quantity }[];
   pieces: readonly (readonly string[])[];
+  /** Why there are no cases. */
+  notWritten?: NotWritten;
   cases: {
     id: string;
-    /** One unknown at a time. Empty when no such order exists: then the tables stand alone. */
+    /** One unknown at a time, then a few together. */
     steps: StaticsStep[];
+    /** Why there are no steps: then the tables stand alone. */
+    notWritten?: NotWritten;
     reactions: Value[];
     ends: EndForces[];
   }[];
@@ -34,15 +39,17 @@ export function derivePrimary(ctx: Context): PrimaryStep {
       quantity,
     })),
     pieces: solution.primary.pieces,
+    notWritten: cellsInstead(ctx),
     cases: analysis.cases.flatMap(({ id }, k) => {
       const state = solution.primary.loaded[id];
       if (!state) return [];
       const lines = usedLines(state.lines);
-      const written = k < most.cases && lines.length <= most.lines && agree(lines, state.reactions);
+      const notWritten = whyNot(ctx, k, lines, state.reactions);
       return [
         {
           id,
-          steps: written ? writeSteps(ctx, lines, { kind: 'case', id }) : [],
+          steps: notWritten ? [] : writeSteps(ctx, lines, { kind: 'case', id }),
+          notWritten,
           reactions: state.reactions
             .filter((r) => !released.has(quantityKey(r.quantity)))
             .map((r) => reactionValue(ctx, r, (s) => inCase(onPrimary(s), id))),
@@ -53,8 +60,17 @@ export function derivePrimary(ctx: Context): PrimaryStep {
   };
 }
 
+function whyNot(ctx: Context, k: number, lines: Lines, reactions: Reactions): NotWritten | undefined {
+  const { written, pieces } = ctx.solution.primary;
+  if (written !== 'lines' || lines.length > most.lines) return tooLong(ctx);
+  if (k >= most.cases) return { why: 'alike' };
+  if (pieces.length === 0) return { why: 'order' };
+  const loaded = reactions.some((r) => r.value !== 0);
+  return agree(lines, reactions) && (lines.length > 0 || !loaded) ? undefined : { why: 'couple' };
+}
+
 /** The lines give the reactions of the state. Where they do not (a load whose resultant is a couple), tables stand alone. */
-function agree(lines: Lines, reactions: readonly { quantity: Quantity; value: number }[]): boolean {
+function agree(lines: Lines, reactions: Reactions): boolean {
   const size = Math.max(...reactions.map((r) => Math.abs(r.value)), 0);
   return lines.every((line) => {
     if (line.kind !== 'equation' || line.unknown.kind !== 'quantity') return true;
@@ -76,6 +92,7 @@ export function reactionValue(
 }
 
 type Lines = Context['solution']['primary']['units'][number]['lines'];
+type Reactions = readonly { quantity: Quantity; value: number }[];
 
 /** Forces at hinges are written only where a reaction found after them needs them. */
 export function usedLines(lines: Lines): Lines {

@@ -5,6 +5,7 @@ import { type Context, redundantSymbol } from './context';
 import { dimensionOf } from './dimensions';
 import { endForcesOf } from './end-forces';
 import type { Value } from './expression';
+import { cellsInstead } from './not-written';
 import { type SymbolName, symbolKey } from './symbol-name';
 
 /** Step 4: what may be released, what may not, and what is. */
@@ -64,7 +65,7 @@ export function deriveRedundants(ctx: Context): RedundantsStep {
       quantity,
     })),
     good: n === 1 && analysis.members.length <= most.members ? alternatives(ctx) : [],
-    uncoupled: (n * (n - 1)) / 2 - coupled,
+    uncoupled: cellsInstead(ctx) ? 0 : (n * (n - 1)) / 2 - coupled,
     condition: solution.condition,
     proposed: solution.proposed,
   };

@@ -3,6 +3,7 @@ import { type Context, redundantSymbol } from './context';
 import { dimensionOf, per } from './dimensions';
 import { type EndForces, endForcesOf } from './end-forces';
 import type { Value } from './expression';
+import { cellsInstead, type NotWritten, tooLong } from './not-written';
 import { usedLines } from './primary-step';
 import { type StaticsStep, writeSteps } from './statics';
 import { inUnitState, type SymbolName } from './symbol-name';
@@ -24,6 +25,8 @@ const most = { states: 3, redundants: 12 };
 export interface UnitStatesStep {
   kind: 'units';
   states: UnitState[];
+  /** Why there are no states, or why their statics stands in tables. */
+  notWritten?: NotWritten;
 }
 
 export function deriveUnitStates(ctx: Context): UnitStatesStep {
@@ -50,5 +53,6 @@ export function deriveUnitStates(ctx: Context): UnitStatesStep {
       ends: endForcesOf(ctx, state.members),
     };
   });
-  return { kind: 'units', states };
+  const many = solution.redundants.length > most.redundants;
+  return { kind: 'units', states, notWritten: cellsInstead(ctx) ?? (many ? tooLong(ctx) : undefined) };
 }

@@ -2,6 +2,7 @@ import type { Quantity } from '@/lib/model/quantity';
 import type { Dimension } from '@/lib/units/dimension';
 import { type Context, redundantSymbol } from './context';
 import { dimensionOf, dimensions, flexibilityDimension, gapDimension, per } from './dimensions';
+import { cellsInstead, type NotWritten } from './not-written';
 import { namedParts } from './parts-step';
 import { inCase, inUnitState, onPrimary, type SymbolName } from './symbol-name';
 import { type WorkTable, workTable } from './work-table';
@@ -15,6 +16,8 @@ export interface WorkStep {
   terms: ReadonlySet<'axial' | 'shear' | 'spring' | 'temperature' | 'gradient' | 'misfit' | 'settlement'>;
   /** Rows are left out where the redundants are too many: then the totals are worked from end moments. */
   rows: boolean;
+  /** Why there are no coefficients. */
+  notWritten?: NotWritten;
 }
 
 export const flexibilitySymbol = (i: number, j: number): SymbolName => ({
@@ -88,7 +91,7 @@ export function deriveWork(ctx: Context): WorkStep {
   });
   const all = [...work.flexibility.flatMap((f) => f.rows), ...work.gaps.flatMap((g) => g.rows)];
   const terms: WorkStep['terms'] = new Set(all.flatMap((r) => (r.kind === 'bending' ? [] : [r.kind])));
-  return { kind: 'work', flexibility, gaps, terms, rows };
+  return { kind: 'work', flexibility, gaps, terms, rows, notWritten: cellsInstead(ctx) };
 }
 
 /** Area of a unit moment diagram. */

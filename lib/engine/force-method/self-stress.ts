@@ -24,11 +24,12 @@ export interface PrimaryBasis {
   open: { column: number; state: SelfStress }[];
 }
 
-/** Up to here every state, shape and line of statics is written out; beyond it the results stand alone. */
+/** Up to here the statics of every state is written out; beyond it the tables of its forces stand alone. */
 export const writtenRedundants = 30;
+export const writtenMembers = 150;
 
 /** With more redundants than this, unit states that reach more than so many quantities on average give way to local ones. */
-const unitStatesUpTo = 150;
+export const unitStatesUpTo = 150;
 const widestStates = 16;
 
 /**
