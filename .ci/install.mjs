@@ -9,6 +9,7 @@ const debian = [
   { program: 'pdftotext', package: 'poppler-utils', tests: true },
   { program: 'qpdf', package: 'qpdf', tests: true },
   { program: 'openssl', package: 'openssl', tests: true },
+  { program: 'unzip', package: 'unzip', tests: true },
 ];
 
 /** Installs Debian packages that are missing; the tests need a browser and PDF readers besides MariaDB. */

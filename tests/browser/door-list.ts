@@ -12,6 +12,8 @@ export interface Door {
   roles: Role[];
   /** Whether it shows something that belongs to one office. */
   thing?: boolean;
+  /** How it is asked for, when not by GET. */
+  method?: 'POST';
   /** What those who may see; 404 where the thing is gone by its nature. */
   status?: number;
 }
@@ -42,6 +44,7 @@ export const doors: Door[] = [
   own('/jobs/start', ['administrator', ...makers]),
   own('/office'),
   inJob('', () => ''),
+  { ...inJob('/export', () => '/export', ['administrator', ...makers]), method: 'POST' },
   inJob('/sheets/new', () => '/sheets/new', makers),
   inJob('/sheets/[sheet]', (f) => `/sheets/${f.frozen.sheetId}`),
   inJob('/revisions/[revision]', (f) => `/revisions/${f.frozen.revisionId}`),

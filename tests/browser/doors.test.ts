@@ -7,7 +7,7 @@ import { startSession } from '@/lib/services/session';
 import { type Filled, fillRecord } from '../database/fill-record';
 import { makeOffice, type Office } from '../database/office-factory';
 import { site } from './browser';
-import { doors } from './door-list';
+import { type Door, doors } from './door-list';
 
 let filled: Filled;
 let foreign: Office;
@@ -27,12 +27,16 @@ function routesOf(folder: string): string[] {
   });
 }
 
-/** The status of one address for a person who has exactly these roles; no person: nobody is signed in. */
-async function statusFor(path: string, personId?: string, officeId?: string): Promise<number> {
+/** The status of one door for a person who has exactly these roles; no person: nobody is signed in. */
+async function statusFor(door: Door, personId?: string, officeId?: string): Promise<number> {
   const session = personId && officeId ? await startSession(personId, officeId) : undefined;
-  const answer = await fetch(site() + path, {
+  const answer = await fetch(site() + door.path(filled), {
+    method: door.method ?? 'GET',
     redirect: 'manual',
-    headers: session ? { cookie: `fairhand_session=${session.token}` } : {},
+    headers: {
+      'sec-fetch-site': 'same-origin',
+      ...(session ? { cookie: `fairhand_session=${session.token}` } : {}),
+    },
   });
   const text = await answer.text();
   // A page that began to stream says in its text where it sends the visitor.
@@ -54,7 +58,7 @@ describe('every door of the site', () => {
   it.each(doors.filter((d) => !d.open).map((d) => [d.route, d] as const))(
     '%s sends a stranger away',
     async (_route, door) => {
-      expect([303, 307, 401]).toContain(await statusFor(door.path(filled)));
+      expect([303, 307, 401]).toContain(await statusFor(door));
     },
   );
 
@@ -63,7 +67,7 @@ describe('every door of the site', () => {
     async (_route, door) => {
       const visitor = foreign.people.administrator;
       await withRoles(visitor.personId, roles);
-      expect(await statusFor(door.path(filled), visitor.personId, foreign.id)).toBe(404);
+      expect(await statusFor(door, visitor.personId, foreign.id)).toBe(404);
     },
   );
 
@@ -76,7 +80,7 @@ describe('every door of the site', () => {
     // Somebody of the office who has no part in the job, so that the role alone decides.
     const { personId } = filled.office.people.administrator;
     await withRoles(personId, [role]);
-    const status = await statusFor(door.path(filled), personId, filled.office.id);
+    const status = await statusFor(door, personId, filled.office.id);
     expect(status).toBe(door.roles.includes(role) ? (door.status ?? 200) : 403);
   });
 });
@@ -125,5 +129,17 @@ describe('what the browser is told', () => {
     const script = /\/_next\/static\/[^"]+\.js/.exec(page)?.[0];
     const answer = await fetch(site() + script, { headers: { 'sec-fetch-dest': 'worker' } });
     expect(answer.headers.get('content-security-policy')).toContain("connect-src 'none'");
+  });
+});
+
+describe('a door that changes something', () => {
+  it('stays shut for a request that comes from another site', async () => {
+    const { personId } = filled.office.people.engineer;
+    const session = await startSession(personId, filled.office.id);
+    const answer = await fetch(`${site()}/jobs/${filled.jobId}/export`, {
+      method: 'POST',
+      headers: { 'sec-fetch-site': 'cross-site', cookie: `fairhand_session=${session.token}` },
+    });
+    expect(answer.status).toBe(403);
   });
 });

@@ -9,6 +9,7 @@ import { copySheet } from '@/lib/services/copy-sheet';
 import { createJob } from '@/lib/services/create-job';
 import { addSheet, createSheet } from '@/lib/services/create-sheet';
 import { createSubmittal } from '@/lib/services/create-submittal';
+import { exportJob } from '@/lib/services/export/export-job';
 import { freezeSheet } from '@/lib/services/freeze-sheet';
 import { invitePerson } from '@/lib/services/invite-person';
 import { issueApiToken } from '@/lib/services/issue-api-token';
@@ -121,6 +122,7 @@ export const verbs: Verb[] = [
       revisionIds: [f.sent.revisionId],
     }),
   ),
+  on(exportJob, leaders, (a, f) => exportJob(a, f.jobId)),
   on(freezeSheet, makers, (a, f) => freezeSheet(a, { sheetId: f.frozen.sheetId, reason: 'Try it.' })),
   on(
     invitePerson,

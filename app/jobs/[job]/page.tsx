@@ -19,6 +19,7 @@ export default async function JobPage({ params }: JobPageProps) {
   const actor = await requireActor();
   const { job, sheets, submittals } = await orRefuse(openJob(actor, (await params).job));
   const mayMake = actor.roles.some((r) => makers.includes(r));
+  const mayExport = mayMake || actor.roles.includes('administrator');
   const units = job.units === 'US' ? 'kip, ft, in' : 'kN, m, mm';
   const facts = new Set(
     [job.place, job.jurisdiction, job.authority, ...job.codes.split('\n'), units, job.pageSize].filter(
@@ -84,6 +85,20 @@ export default async function JobPage({ params }: JobPageProps) {
           <SubmittalList jobId={job.id} submittals={submittals} zone={actor.zone} />
         )}
       </Hung>
+      {mayExport ? (
+        <Hung at="section">
+          <h2>The whole job</h2>
+          <form method="post" action={`/jobs/${job.id}/export`} className="max-w-[676px]">
+            <p className="i2">
+              Every package, sheet and register in one ZIP that needs no program of ours to be read. The
+              record keeps that it was taken out. It cannot be read back in yet.
+            </p>
+            <button type="submit" className="btn mt-2">
+              Download the job
+            </button>
+          </form>
+        </Hung>
+      ) : null}
     </Page>
   );
 }
