@@ -48,12 +48,10 @@ export function PageHead({ path, actor }: { path: PathPart[]; actor?: Pick<Actor
                 {place.label}
               </Link>
             ))}
-            <span className="who">
+            <Link className="who" href="/account" aria-label={`${actor.name}, your account`}>
               <span className="full">{actor.name}</span>
-              <abbr className="ini no-underline" title={actor.name}>
-                {actor.initials}
-              </abbr>
-            </span>
+              <span className="ini">{actor.initials}</span>
+            </Link>
             <form action={leave}>
               <button type="submit">Sign out</button>
             </form>

@@ -10,10 +10,9 @@ import { refuse } from './service-error';
 import { endAllSessions } from './session';
 import { tokenHash } from './token';
 
-const input = z.object({
-  token: z.string().min(10).max(100),
-  password: z.string().min(12, 'A password has at least 12 characters.').max(200),
-});
+export const newPassword = z.string().min(12, 'A password has at least 12 characters.').max(200);
+
+const input = z.object({ token: z.string().min(10).max(100), password: newPassword });
 
 const over = 'This link was used already or its time is over. Ask for a new one.';
 

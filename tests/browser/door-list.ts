@@ -40,6 +40,7 @@ export const doors: Door[] = [
   open('/review/[token]'),
   open('/review/[token]/file'),
   open('/sign-in'),
+  own('/account'),
   own('/jobs'),
   own('/jobs/start', ['administrator', ...makers]),
   own('/office'),

@@ -2,10 +2,12 @@ import { afterAll, describe, expect, it } from 'vitest';
 import { database } from '@/db/connection';
 import { acceptInvitation } from '@/lib/services/accept-invitation';
 import { askPasswordReset } from '@/lib/services/ask-password-reset';
+import { changePassword } from '@/lib/services/change-password';
 import { invitePerson } from '@/lib/services/invite-person';
 import { NotAllowed } from '@/lib/services/service-error';
-import { endAllSessions, endSession, readSession } from '@/lib/services/session';
+import { endSession, readSession } from '@/lib/services/session';
 import { signIn } from '@/lib/services/sign-in';
+import { signOutEverywhere } from '@/lib/services/sign-out-everywhere';
 import { makeOffice, need, password } from './office-factory';
 
 afterAll(() => database().destroy());
@@ -47,7 +49,7 @@ describe('signing in', () => {
     const { checker } = (await makeOffice()).people;
     const one = need(await signIn({ email: checker.email, password }, from()));
     const two = need(await signIn({ email: checker.email, password }, from()));
-    await endAllSessions(checker.personId);
+    await signOutEverywhere(checker);
     expect(await readSession(one.token)).toBeUndefined();
     expect(await readSession(two.token)).toBeUndefined();
   });
@@ -80,5 +82,23 @@ describe('a forgotten password', () => {
     const unknown = await askPasswordReset({ email: 'nobody@nowhere.example' }, from());
     expect(known).toEqual(unknown);
     expect(await linkTo(engineer.email)).toBeTruthy();
+  });
+});
+
+describe('changing one’s own password', () => {
+  it('asks for the one in use, and changes nothing without it', async () => {
+    const { checker } = (await makeOffice()).people;
+    const refused = await changePassword(checker, { current: 'not it', password: 'a new long password' });
+    expect(!refused.ok && refused.errors[0]?.path).toBe('current');
+    expect((await signIn({ email: checker.email, password }, from())).ok).toBe(true);
+  });
+
+  it('ends every session, and only the new one opens the door', async () => {
+    const { checker } = (await makeOffice()).people;
+    const { token } = need(await signIn({ email: checker.email, password }, from()));
+    need(await changePassword(checker, { current: password, password: 'a new long password' }));
+    expect(await readSession(token)).toBeUndefined();
+    expect((await signIn({ email: checker.email, password }, from())).ok).toBe(false);
+    expect((await signIn({ email: checker.email, password: 'a new long password' }, from())).ok).toBe(true);
   });
 });

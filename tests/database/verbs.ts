@@ -2,6 +2,7 @@ import type { Actor, Role } from '@/lib/services/actor';
 import { addLicence } from '@/lib/services/add-licence';
 import { answerComment } from '@/lib/services/answer-comment';
 import { answerMark } from '@/lib/services/answer-mark';
+import { changePassword } from '@/lib/services/change-password';
 import { changePerson } from '@/lib/services/change-person';
 import { completeSeal } from '@/lib/services/complete-seal';
 import { concludeCheck } from '@/lib/services/conclude-check';
@@ -36,6 +37,7 @@ import { revokeReview } from '@/lib/services/revoke-review';
 import { sendSubmittal } from '@/lib/services/send-submittal';
 import { sendToCheck } from '@/lib/services/send-to-check';
 import { setJobState } from '@/lib/services/set-job-state';
+import { signOutEverywhere } from '@/lib/services/sign-out-everywhere';
 import { verifyAudit } from '@/lib/services/verify-audit';
 import { verifyRevision } from '@/lib/services/verify-revision';
 import { withdrawLicence } from '@/lib/services/withdraw-licence';
@@ -82,6 +84,12 @@ export const verbs: Verb[] = [
   on(addSheet, makers, (a, f) => addSheet(a, f.jobId, 'T', proppedDraft(), 'made sheet')),
   on(answerComment, makers, (a, f) => answerComment(a, { commentId: f.sent.commentId, answer: 'x' })),
   on(answerMark, makers, (a, f) => answerMark(a, { markId: f.sent.markId, answer: 'x' })),
+  on(
+    changePassword,
+    everyone,
+    (a) => changePassword(a, { current: 'wrong', password: 'another long one' }),
+    makes,
+  ),
   on(changePerson, ['administrator'], (a, f) =>
     changePerson(a, {
       personId: f.office.people.checker.personId,
@@ -170,6 +178,7 @@ export const verbs: Verb[] = [
     }),
   ),
   on(setJobState, leaders, (a, f) => setJobState(a, { jobId: f.jobId, state: 'closed' })),
+  on(signOutEverywhere, everyone, (a) => signOutEverywhere(a), makes),
   on(verifyAudit, ['administrator'], (a) => verifyAudit(a), reads),
   on(verifyRevision, everyone, (a, f) => verifyRevision(a, f.sent.revisionId)),
   on(withdrawLicence, ['administrator'], (a) => withdrawLicence(a, { licenceId: 'not-there' })),

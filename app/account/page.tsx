@@ -1,0 +1,50 @@
+import type { Metadata } from 'next';
+import { Hung } from '../components/ledger';
+import { Page } from '../components/page-layout';
+import { roleWords } from '../office/role-words';
+import { requireActor } from '../session';
+import { leaveEverywhere } from './actions';
+import { ChangePasswordForm } from './change-password-form';
+
+export const metadata: Metadata = { title: 'Your account' };
+
+/** What a person settles for themself. */
+export default async function AccountPage() {
+  const actor = await requireActor();
+  return (
+    <Page
+      wide
+      path={[{ label: 'Your account' }]}
+      actor={actor}
+      foot={[
+        <span key="office">
+          <b>{actor.officeName}</b>
+        </span>,
+        actor.email,
+        <span key="zone" className="end">{`Times in ${actor.zone}`}</span>,
+      ]}
+    >
+      <Hung at="top" number={actor.initials}>
+        <h1>{actor.name}</h1>
+        <p className="facts">
+          <span>{actor.email}</span>
+          <span>{actor.roles.map((r) => roleWords[r]).join(', ')}</span>
+        </p>
+      </Hung>
+      <Hung at="section">
+        <h2>Password</h2>
+        <p className="i2">Changing it signs you out on every machine.</p>
+        <ChangePasswordForm />
+      </Hung>
+      <Hung at="section">
+        <h2>Sessions</h2>
+        <form action={leaveEverywhere} className="max-w-[676px]">
+          <p className="i2">A session lasts two weeks from its last use. Nothing you typed is lost.</p>
+          <button type="submit" className="btn mt-2">
+            Sign out everywhere
+          </button>
+        </form>
+      </Hung>
+    </Page>
+  );
+}
