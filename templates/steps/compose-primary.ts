@@ -8,7 +8,7 @@ import { notWrittenWords } from './not-written';
 import { narrow, runsOf, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { capital, listWords, plain, releaseWords } from './words';
-import { inline, staticsRows, staticsWords, valueCell } from './write-lines';
+import { findsHingeForce, inline, staticsRows, staticsWords, valueCell } from './write-lines';
 
 /** Step 5: the primary structure and its forces, one unknown at a time. */
 export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene): void {
@@ -65,8 +65,7 @@ export function composePrimary(step: PrimaryStep, out: StepWriter, scene: Scene)
   }
 }
 
-const hasHingeForces = (step: PrimaryStep): boolean =>
-  step.cases.some((c) => c.steps.some((s) => s.relation?.symbol.letter === 'F'));
+const hasHingeForces = (step: PrimaryStep): boolean => step.cases.some((c) => c.steps.some(findsHingeForce));
 
 function figures(step: PrimaryStep, out: StepWriter, { analysis, solution }: Scene): void {
   const draw = (width: number) =>

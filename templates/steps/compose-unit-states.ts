@@ -6,7 +6,7 @@ import { notWrittenWords } from './not-written';
 import { narrow, type Scene, wide } from './scene';
 import type { StepWriter } from './step-writer';
 import { listWords } from './words';
-import { inline, inlineValue, staticsRows, staticsWords } from './write-lines';
+import { findsHingeForce, inline, inlineValue, staticsRows, staticsWords } from './write-lines';
 
 /** Unit states drawn on one sheet. */
 const drawn = 8;
@@ -24,7 +24,7 @@ export function composeUnitStates(step: UnitStatesStep, out: StepWriter, scene: 
     return;
   }
   const { units, placed } = scene;
-  const hinged = states.some((s) => s.steps.some((line) => line.relation?.symbol.letter === 'F'));
+  const hinged = states.some((s) => s.steps.some(findsHingeForce));
   out.paragraph(
     `$X_i=1$ acts alone on the primary structure. A bar marks its effects: $\\bar{R}$, $\\bar{N}$, $\\bar{V}$ and $\\bar{m}$ are per unit of $X_i$. No load acts between the joints, so every $\\bar{m}$ is straight on each member.${hinged ? ' $\\bar{F}$ with the name of a member is the force on its end at a hinge.' : ''}`,
   );

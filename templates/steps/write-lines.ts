@@ -1,14 +1,15 @@
 import type { Value } from '@/lib/engine/derivation/expression';
 import type { Placed } from '@/lib/engine/derivation/geometry';
 import type { Relation } from '@/lib/engine/derivation/relation';
-import type { StaticsStep } from '@/lib/engine/derivation/statics';
+import type { StaticsStep } from '@/lib/engine/derivation/statics-equation';
 import type { SymbolName } from '@/lib/engine/derivation/symbol-name';
+import type { EquationOfSet } from '@/lib/engine/derivation/together';
 import type { UnitSet } from '@/lib/model/analysis';
 import { quantityNumber, quantityTex } from '@/lib/typeset/quantity-tex';
 import { formulaTex, substitutionTex } from '@/lib/typeset/write-expression';
 import { symbolTex } from '@/lib/typeset/write-symbol';
 import type { EquationRow } from '../block';
-import { listWords, memberWords, plain } from './words';
+import { countWords, listWords, memberWords, plain } from './words';
 
 /** symbol = formula = figures = result; members that would only repeat their neighbour are left out. */
 export function relationRow(r: Relation, units: UnitSet, note?: string): EquationRow {
@@ -46,11 +47,37 @@ export function staticsRows(step: StaticsStep, units: UnitSet): EquationRow[] {
     const terms = substitutionTex(step.check.formula, units);
     return [{ lhs: `${head}\\;${terms}=${quantityTex(step.check.result, units)}`, chain: [] }];
   }
+  if (step.set) return setRows(step, step.set, units);
   if (!step.relation) return [];
   const own = relationRow(step.relation, units);
   if (step.relation.formula.kind === 'number') return [own];
   return [{ lhs: `${head}\\;${formulaTex(step.equation, units)}=0`, chain: [] }, own];
 }
+
+/** A line whose formula is figures already: it stands once. */
+function figuresRow(r: Relation, units: UnitSet): EquationRow {
+  const row = relationRow(r, units);
+  return { ...row, chain: row.chain.slice(-2) };
+}
+
+/** An equation of a set in symbols, then with its figures; with the last, the unknowns. */
+function setRows(step: StaticsStep, set: EquationOfSet, units: UnitSet): EquationRow[] {
+  const collected = relationRow(set.right, units);
+  const chain = collected.chain.length === 0 ? ['0'] : collected.chain;
+  return [
+    { lhs: `${sumTex(step.sum)}\\;${formulaTex(step.equation, units)}=0`, chain: [] },
+    { lhs: formulaTex(set.left, units), chain: chain.slice(-2) },
+    ...set.solution.map((r) => figuresRow(r, units)),
+    ...set.inserted.map(({ sum, relation }) => ({
+      lhs: `${sumTex(sum)}\\;${substitutionTex(relation.formula, units)}=${quantityTex(relation.result, units)}`,
+      chain: [],
+    })),
+  ];
+}
+
+/** Whether a line gives a force at a hinge, F with the name of a member. */
+export const findsHingeForce = ({ relation, set }: StaticsStep): boolean =>
+  [relation?.symbol, ...(set?.unknowns ?? []).map((u) => u.symbol)].some((s) => s?.letter === 'F');
 
 /** ΣM_A:, ΣF_x:, ΣF_y: */
 export function sumTex(sum: StaticsStep['sum']): string {
@@ -67,7 +94,7 @@ export function staticsWords(step: StaticsStep, placed: ReadonlyMap<string, Plac
     start === '' ? text.charAt(0).toUpperCase() + text.slice(1) : `${start}${text}`;
   const arms = step.arms.map((a) => `${a.symbol ? inline(a.symbol) : ''} $= ${quantityTex(a, units)}$`);
   const armed = arms.length === 0 ? '' : `, with the arm${arms.length > 1 ? 's' : ''} ${listWords(arms)}`;
-  const unused = step.check ? ', not used yet, as a check' : '';
+  const unused = step.check ? ', not used yet, as a check' : setWords(step.set);
   if (step.sum.kind === 'force') {
     return `${said(Math.abs(step.sum.x) > Math.abs(step.sum.y) ? 'horizontal forces' : 'vertical forces')}${armed}${unused}:`;
   }
@@ -77,6 +104,18 @@ export function staticsWords(step: StaticsStep, placed: ReadonlyMap<string, Plac
   const joint = plain(step.sum.joint ?? 'O');
   const about = step.passing.length === 0 && atHinge(step, placed) ? `the hinge at ${joint}` : joint;
   return `${said(`moments about ${about}`)}${step.check ? '' : why}${armed}${unused}:`;
+}
+
+/** Which of the equations of a set this is, and what becomes of them. */
+function setWords(set: EquationOfSet | undefined): string {
+  if (!set) return '';
+  const names = listWords(set.unknowns.map((u) => (u.symbol ? inline(u.symbol) : '')));
+  if (set.place === 1)
+    return `, the first of ${countWords(set.of)} equations that give ${names} only together`;
+  if (set.place < set.of) return ', another of them';
+  return set.of === 2
+    ? ', the other of the two; together they give both by the rule of determinants'
+    : ', the last of them; what they give together, and each of them with it put in';
 }
 
 /** The point of a moment sum is where the piece ends and others go on. */

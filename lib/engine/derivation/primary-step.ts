@@ -1,10 +1,12 @@
 import { type Quantity, quantityKey } from '@/lib/model/quantity';
+import type { StaticsTerm } from '../statics/statics-line';
 import { type Context, redundantSymbol } from './context';
 import { dimensionOf } from './dimensions';
 import { type EndForces, endForcesOf } from './end-forces';
 import type { Value } from './expression';
 import { cellsInstead, type NotWritten, tooLong } from './not-written';
-import { type StaticsStep, writeSteps } from './statics';
+import { writeSteps } from './statics';
+import type { StaticsStep } from './statics-equation';
 import { inCase, onPrimary, type SymbolName } from './symbol-name';
 
 /** Step 5: the determinate structure left when the redundants are released, and its forces. */
@@ -72,11 +74,11 @@ function whyNot(ctx: Context, k: number, lines: Lines, reactions: Reactions): No
 /** The lines give the reactions of the state. Where they do not (a load whose resultant is a couple), tables stand alone. */
 function agree(lines: Lines, reactions: Reactions): boolean {
   const size = Math.max(...reactions.map((r) => Math.abs(r.value)), 0);
-  return lines.every((line) => {
-    if (line.kind !== 'equation' || line.unknown.kind !== 'quantity') return true;
-    const key = quantityKey(line.unknown.quantity);
+  return lines.flatMap(foundBy).every(({ of, value }) => {
+    if (of.kind !== 'quantity') return true;
+    const key = quantityKey(of.quantity);
     const found = reactions.find((r) => quantityKey(r.quantity) === key);
-    return found !== undefined && Math.abs(found.value - line.value) <= 1e-9 * size;
+    return found !== undefined && Math.abs(found.value - value) <= 1e-9 * size;
   });
 }
 
@@ -94,18 +96,25 @@ export function reactionValue(
 type Lines = Context['solution']['primary']['units'][number]['lines'];
 type Reactions = readonly { quantity: Quantity; value: number }[];
 
+/** What a line gives. */
+function foundBy(line: Lines[number]): { of: StaticsTerm['of']; value: number }[] {
+  if (line.kind === 'simultaneous') return line.unknowns;
+  return line.kind === 'equation' ? [{ of: line.unknown, value: line.value }] : [];
+}
+
 /** Forces at hinges are written only where a reaction found after them needs them. */
 export function usedLines(lines: Lines): Lines {
-  const keyOf = (of: { kind: string }) => JSON.stringify(of);
-  const needed = new Set<string>();
+  const keyOf = (of: StaticsTerm['of']) =>
+    of.kind === 'interface' ? `${of.member} ${of.end} ${of.component}` : undefined;
+  const needed = new Set<string | undefined>();
   const kept: Lines[number][] = [];
   for (const line of [...lines].reverse()) {
-    const own =
-      line.kind === 'equation' && line.unknown.kind === 'interface' ? keyOf(line.unknown) : undefined;
-    if (own !== undefined && !needed.has(own)) continue;
+    const found = foundBy(line).map((f) => keyOf(f.of));
+    if (found.length > 0 && found.every((key) => key !== undefined && !needed.has(key))) continue;
     kept.unshift(line);
-    if (line.kind !== 'equation') continue;
-    for (const t of line.terms) if (t.of.kind === 'interface') needed.add(keyOf(t.of));
+    if (line.kind === 'check') continue;
+    const equations = line.kind === 'equation' ? [line] : line.equations;
+    for (const e of equations) for (const t of e.terms) needed.add(keyOf(t.of));
   }
   return kept;
 }

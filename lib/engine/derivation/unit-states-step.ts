@@ -5,7 +5,8 @@ import { type EndForces, endForcesOf } from './end-forces';
 import type { Value } from './expression';
 import { cellsInstead, type NotWritten, tooLong } from './not-written';
 import { usedLines } from './primary-step';
-import { type StaticsStep, writeSteps } from './statics';
+import { writeSteps } from './statics';
+import type { StaticsStep } from './statics-equation';
 import { inUnitState, type SymbolName } from './symbol-name';
 
 /** One unit state: X_i = 1 on the primary structure, nothing else. */

@@ -156,6 +156,45 @@ export const odd = {
     members: [bar('A', 'B'), bar('B', 'C')],
     cases: dead([down('A-B', 5), down('B-C', 5)]),
   }),
+  /** Determinate, its bases not level: two equations of moments give the reactions at A only together. */
+  threeHinges: form({
+    units: 'SI',
+    joints: [
+      joint('A', 0, 0, 'pinned'),
+      joint('B', 0, 4),
+      joint('C', 3.7, 5),
+      joint('D', 8, 5),
+      joint('E', 8, -1.3, 'pinned'),
+    ],
+    members: [
+      bar('A', 'B'),
+      bar('B', 'C'),
+      bar('C', 'D', { releases: { start: ['moment'], end: [] } }),
+      bar('D', 'E'),
+    ],
+    cases: dead([
+      down('B-C', 7),
+      { kind: 'joint', joint: 'B', x: 11 },
+      { kind: 'point', member: 'D-E', at: 2.2, direction: 'x', value: -6 },
+    ]),
+  }),
+  /** A closed cell on two supports, opened by three hinges of the engineer's choice: pairs of equations in every state. */
+  closedCell: form({
+    units: 'US',
+    joints: [
+      joint('A', 0, 0, 'pinned'),
+      joint('B', 0.5, 12),
+      joint('C', 16, 15),
+      joint('D', 16, 1.5, 'roller'),
+    ],
+    members: [bar('A', 'B'), bar('B', 'C'), bar('C', 'D'), bar('A', 'D')],
+    cases: dead([down('B-C', 1.2), { kind: 'joint', joint: 'B', x: 4 }]),
+    redundants: [
+      { kind: 'moment', member: 'A-D', end: 'start' },
+      { kind: 'moment', member: 'A-D', end: 'end' },
+      { kind: 'moment', member: 'A-B', end: 'end' },
+    ],
+  }),
   noValueOfEI0: form({
     units: 'US',
     basis: { kind: 'relative' },
