@@ -12,6 +12,7 @@ import type { Actor } from './actor';
 import { engineerOfRecord } from './engineer-of-record';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
+import { packageHistory } from './package-history';
 import { type PackageRequest, printPackage } from './print-package';
 import { makers, requireRole } from './require-role';
 import { type Result, unread } from './result';
@@ -66,6 +67,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
           people,
           revisions.map((r) => r.checker),
         ),
+        history: await packageHistory(trx, officeId, jobId, revisions),
       },
       revisions,
     );

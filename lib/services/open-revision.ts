@@ -3,8 +3,9 @@ import { database } from '@/db/connection';
 import { checkById, marksOf } from '@/db/queries/checks';
 import { jobById } from '@/db/queries/jobs';
 import { peopleOf } from '@/db/queries/people';
-import { revisionById } from '@/db/queries/revisions';
+import { revisionById, revisionsOfSheet } from '@/db/queries/revisions';
 import { blocks } from '@/templates/block';
+import { lastChanged } from '@/templates/last-changed';
 import type { Actor } from './actor';
 import { everyone, requireRole } from './require-role';
 import { NotFound } from './service-error';
@@ -19,6 +20,7 @@ export async function openRevision(actor: Actor, revisionId: string) {
   if (!r || !job) throw new NotFound(`revision ${revisionId}`);
   const check = r.check_id ? await checkById(db, actor.officeId, r.check_id) : undefined;
   const people = await peopleOf(db, actor.officeId);
+  const past = (await revisionsOfSheet(db, actor.officeId, r.sheet_id)).filter((o) => o.number <= r.number);
   return {
     job: { id: job.id, number: job.number, title: job.title },
     revision: {
@@ -35,6 +37,10 @@ export async function openRevision(actor: Actor, revisionId: string) {
       originatorId: r.originator_id,
     },
     blocks: blocks.parse(r.blocks),
+    /** Lines that changed after the first revision, each with the revision in which it last did. */
+    changedIn: [
+      ...lastChanged(past.reverse().map((p) => ({ number: p.number, blocks: blocks.parse(p.blocks) }))),
+    ],
     check: check && {
       id: check.id,
       state: check.state,

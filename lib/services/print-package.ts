@@ -3,8 +3,10 @@ import { createHash } from 'node:crypto';
 import type { JobRow } from '@/db/queries/jobs';
 import type { RevisionLine } from '@/db/queries/revisions';
 import { blocks } from '@/templates/block';
+import { composeRevisions } from '@/templates/compose-revisions';
 import type { PrintedPackage } from '@/templates/paper/package-print';
 import { renderPackage } from '@/templates/paper/render-package';
+import type { RevisionPast } from './package-history';
 import { sheetName } from './sheet-state';
 
 export interface PackageRequest {
@@ -16,6 +18,8 @@ export interface PackageRequest {
   engineer: { name: string; initials: string };
   originators: { name: string; initials: string }[];
   checkers: { name: string; initials: string }[];
+  /** Of each revision, in their order. */
+  history: readonly RevisionPast[];
 }
 
 const day = (date: Date) => date.toISOString().slice(0, 10);
@@ -61,8 +65,12 @@ export async function printPackage(
     date,
     digest: shortDigest(digest),
     people: { originators: request.originators, checkers: request.checkers, engineer: request.engineer },
-    sheets: revisions.map((r) => ({
+    sheets: revisions.map((r, i) => ({
       kind: 'calculated' as const,
+      since: request.history[i]?.since,
+      marks: Object.fromEntries(
+        [...(request.history[i]?.changedIn ?? [])].map(([line, changedIn]) => [line, { changedIn }]),
+      ),
       number: sheetName(r.sheet_number),
       title: r.title,
       blocks: blocks.parse(r.blocks),
@@ -71,6 +79,12 @@ export async function printPackage(
       checker: r.checker && r.checked_at ? { initials: r.checker, date: day(r.checked_at) } : undefined,
       digest: shortDigest(r.digest),
     })),
+    closing: composeRevisions(
+      revisions.map((r, i) => ({
+        number: sheetName(r.sheet_number),
+        revisions: (request.history[i]?.revisions ?? []).map((p) => ({ ...p, date: day(p.frozenAt) })),
+      })),
+    ),
     seal: { on: 'cover', covers: revisions.map((r) => sheetName(r.sheet_number)).join(', ') },
     data: { name: 'calculations.json', description: 'Inputs and results of every sheet', bytes },
   });

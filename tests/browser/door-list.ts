@@ -49,6 +49,11 @@ export const doors: Door[] = [
   inJob('/sheets/new', () => '/sheets/new', makers),
   inJob('/sheets/[sheet]', (f) => `/sheets/${f.frozen.sheetId}`),
   inJob('/revisions/[revision]', (f) => `/revisions/${f.frozen.revisionId}`),
+  {
+    // A first revision has nothing before it to be compared with.
+    ...inJob('/revisions/[revision]/changes', (f) => `/revisions/${f.frozen.revisionId}/changes`),
+    status: 404,
+  },
   inJob('/checks/[check]', (f) => `/checks/${f.sent.checkId}`),
   inJob('/submittals/new', () => '/submittals/new', makers),
   inJob('/submittals/[submittal]', (f) => `/submittals/${f.sent.submittalId}`),

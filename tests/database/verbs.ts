@@ -4,6 +4,7 @@ import { answerComment } from '@/lib/services/answer-comment';
 import { answerMark } from '@/lib/services/answer-mark';
 import { changePassword } from '@/lib/services/change-password';
 import { changePerson } from '@/lib/services/change-person';
+import { compareRevisions } from '@/lib/services/compare-revisions';
 import { completeSeal } from '@/lib/services/complete-seal';
 import { concludeCheck } from '@/lib/services/conclude-check';
 import { copySheet } from '@/lib/services/copy-sheet';
@@ -32,6 +33,7 @@ import { prepareSeal } from '@/lib/services/prepare-seal';
 import { listApiTokens } from '@/lib/services/read-api-token';
 import { readAudit } from '@/lib/services/read-audit';
 import { readPreparedFile, readSubmittalFile } from '@/lib/services/read-file';
+import { restoreRevision } from '@/lib/services/restore-revision';
 import { revokeApiToken } from '@/lib/services/revoke-api-token';
 import { revokeReview } from '@/lib/services/revoke-review';
 import { sendSubmittal } from '@/lib/services/send-submittal';
@@ -99,6 +101,7 @@ export const verbs: Verb[] = [
       active: true,
     }),
   ),
+  on(compareRevisions, everyone, (a, f) => compareRevisions(a, { revisionId: f.sent.revisionId })),
   on(completeSeal, ['engineer-of-record'], (a) =>
     completeSeal(a, { preparedId: 'not-there', cms: new Uint8Array([1]) }),
   ),
@@ -165,6 +168,7 @@ export const verbs: Verb[] = [
   on(readAudit, everyone, (a, f) => readAudit(a, { jobId: f.jobId }), reads),
   on(readPreparedFile, ['engineer-of-record'], (a) => readPreparedFile(a, 'not-there')),
   on(readSubmittalFile, everyone, (a, f) => readSubmittalFile(a, f.sent.submittalId)),
+  on(restoreRevision, makers, (a, f) => restoreRevision(a, { revisionId: f.sent.revisionId })),
   on(revokeApiToken, makers, (a) => revokeApiToken(a, { id: '0'.repeat(64) })),
   on(revokeReview, makers, (a, f) => revokeReview(a, { submittalId: f.sent.submittalId })),
   on(sendSubmittal, makers, (a, f) =>

@@ -3,6 +3,7 @@
 import { redirect } from 'next/navigation';
 import { afterRefusal, type FormState } from '@/app/components/form-state';
 import { orRefuse, requireActor } from '@/app/session';
+import { restoreRevision } from '@/lib/services/restore-revision';
 import { sendToCheck } from '@/lib/services/send-to-check';
 
 /** Gives the revision to a checker. */
@@ -22,4 +23,12 @@ export async function giveToChecker(
   );
   if (!given.ok) return afterRefusal(given, form);
   redirect(`/jobs/${jobId}/checks/${given.value.checkId}`);
+}
+
+/** Makes the inputs of the revision the newest draft, and opens the desk on it. */
+export async function goBack(revisionId: string, state: FormState): Promise<FormState> {
+  const actor = await requireActor();
+  const made = await orRefuse(restoreRevision(actor, { revisionId }));
+  if (!made.ok) return { ...state, errors: made.errors };
+  redirect(`/jobs/${made.value.jobId}/sheets/${made.value.sheetId}`);
 }

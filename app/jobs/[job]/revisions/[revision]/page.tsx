@@ -7,9 +7,10 @@ import { type Mark, StatusMark } from '@/app/components/status-mark';
 import { orRefuse, requireActor } from '@/app/session';
 import { openRevision } from '@/lib/services/open-revision';
 import { makers } from '@/lib/services/require-role';
-import { giveToChecker } from './actions';
+import { giveToChecker, goBack } from './actions';
 import { CheckForm } from './check-form';
 import { FrozenSheet } from './frozen-sheet';
+import { RestoreForm } from './restore-form';
 import './revision.css';
 
 interface Props {
@@ -22,7 +23,8 @@ export const metadata: Metadata = { title: 'Revision' };
 export default async function RevisionPage({ params }: Props) {
   const actor = await requireActor();
   const { revision: id } = await params;
-  const { job, revision, blocks, check, checkers } = await orRefuse(openRevision(actor, id));
+  const { job, revision, blocks, changedIn, check, checkers } = await orRefuse(openRevision(actor, id));
+  const mayMake = actor.roles.some((r) => makers.includes(r));
   return (
     <Page
       actor={actor}
@@ -55,7 +57,7 @@ export default async function RevisionPage({ params }: Props) {
           <h1>
             {revision.sheet} {revision.title}, revision {revision.number}
           </h1>
-          <FrozenSheet blocks={blocks} />
+          <FrozenSheet blocks={blocks} changedIn={changedIn} />
         </ReadingPage>
         <aside className="frozenside">
           <StatusMark mark={standing(check?.state)} />
@@ -80,16 +82,24 @@ export default async function RevisionPage({ params }: Props) {
                   : `Check by ${check.checker}: ${check.state}`}
               </Link>
             </p>
-          ) : actor.roles.some((r) => makers.includes(r)) ? (
+          ) : mayMake ? (
             <CheckForm action={giveToChecker.bind(null, job.id, id)} checkers={checkers} />
           ) : (
             <p>An engineer of the office sends it to a checker.</p>
           )}
+          {revision.number > 0 ? (
+            <p>
+              <Link className="t" href={`/jobs/${job.id}/revisions/${id}/changes`}>
+                Changes since revision {revision.number - 1}
+              </Link>
+            </p>
+          ) : null}
           <p>
             <Link className="t" href={`/jobs/${job.id}/sheets/${revision.sheetId}`}>
               Back to the desk
             </Link>
           </p>
+          {mayMake ? <RestoreForm action={goBack.bind(null, id)} number={revision.number} /> : null}
         </aside>
       </div>
     </Page>
