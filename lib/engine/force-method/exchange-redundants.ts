@@ -1,6 +1,6 @@
 import type { PrimaryBasis, SelfStress } from './self-stress';
 
-/** A force beyond so many times its redundant (moments over the mean member length) speaks of a primary structure near instability. */
+/** A force beyond so many times its redundant (moments over the mean member length) may speak of a primary structure near instability. */
 const suspicious = 30;
 
 /** Exchanges go on until no unit state calls up more than this. */
@@ -8,13 +8,15 @@ const settled = 2;
 
 const mostExchanges = 100;
 
+/** Whether a unit state calls up forces many times its own. */
+export const callsUpMuch = ({ states }: PrimaryBasis): boolean => largestOf(states).size > suspicious;
+
 /**
  * The same structure with better redundants, where a unit state calls up forces many times its own: the largest of them
  * takes the place of that redundant, again and again. Each exchange enlarges the determinant of the kept columns, so the
  * search ends (Goreinov, Tyrtyshnikov and others on submatrices of maximal volume, as recalled).
  */
 export function exchangeRedundants(basis: PrimaryBasis): PrimaryBasis {
-  if (basis.local || largestOf(basis.states).size <= suspicious) return basis;
   const states = basis.states.map((s) => new Map(s));
   const redundants = [...basis.redundants];
   for (let k = 0; k < mostExchanges; k++) {

@@ -1,7 +1,8 @@
 import type { Quantity } from '@/lib/model/quantity';
 import type { Equilibrium } from '../statics/equilibrium';
 import { planStatics } from '../statics/plan-statics';
-import { exchangeRedundants } from './exchange-redundants';
+import { callsUpMuch, exchangeRedundants } from './exchange-redundants';
+import { flexibilityMatrix } from './flexibility-matrix';
 import { proposalOrder, sweepOrder } from './proposal-order';
 import { type PrimaryBasis, primaryBasis, writtenRedundants } from './self-stress';
 
@@ -10,11 +11,19 @@ import { type PrimaryBasis, primaryBasis, writtenRedundants } from './self-stres
  * appears by itself. A frame with one redundant: the thrust at its last base, as it is done by hand. Other frames:
  * hinges; where a person could not find the forces of that structure one at a time, reactions from the last base
  * backwards. Large frames: what is left over joint by joint from the ground up. A set whose unit states call up forces
- * many times their own is exchanged for a better one.
+ * many times their own is exchanged for a better one where that is much better conditioned.
  */
 export function proposeRedundants(eq: Equilibrium): PrimaryBasis {
-  return exchangeRedundants(familiarRedundants(eq));
+  const familiar = familiarRedundants(eq);
+  if (familiar.local || !callsUpMuch(familiar)) return familiar;
+  // Large forces alone say little (a moment in a short member has a large shear): the condition decides.
+  const exchanged = exchangeRedundants(familiar);
+  const conditionOf = (basis: PrimaryBasis) => flexibilityMatrix(eq, basis, 1).condition;
+  return conditionOf(familiar) <= fair * conditionOf(exchanged) ? familiar : exchanged;
 }
+
+/** The familiar set is given up where another is conditioned so many times better. */
+const fair = 30;
 
 function familiarRedundants(eq: Equilibrium): PrimaryBasis {
   const hinges = primaryBasis(eq, proposalOrder(eq));
