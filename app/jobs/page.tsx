@@ -11,6 +11,7 @@ import { SheetStates } from '../components/sheet-states';
 import { orRefuse, requireActor } from '../session';
 import { JobsBar } from './jobs-bar';
 import { type JobsQuery, jobsHref, jobsQuery } from './jobs-query';
+import { WorkList } from './work-list';
 
 export const metadata: Metadata = { title: 'Jobs' };
 
@@ -35,21 +36,9 @@ export default async function JobsPage({ searchParams }: { searchParams: Promise
       <Hung at="top">
         <h1>{sayToday(actor.zone)}</h1>
       </Hung>
-      <Hung at="first">
-        <h2>Waiting on you</h2>
-        {work.length === 0 ? <p className="i2">Nothing waits on you.</p> : null}
-      </Hung>
-      {work.length > 0 ? (
-        <Ledger kind="work">
-          {work.map((w) => (
-            <LedgerRow key={w.href}>
-              <Link className="t justify-self-start" href={w.href}>
-                {w.text}
-              </Link>
-              <span className="i2">{w.job}</span>
-            </LedgerRow>
-          ))}
-        </Ledger>
+      <WorkList title="Waiting on you" nothing="Nothing waits on you." work={work.toDo} first />
+      {work.waiting.length > 0 ? (
+        <WorkList title="Waiting for others" nothing="" work={work.waiting} />
       ) : null}
       <Hung at="section">
         <JobsBar query={query} mayStart={mayStart} />

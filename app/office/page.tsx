@@ -1,16 +1,19 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { openOffice } from '@/lib/services/open-office';
 import { Hung, Ledger, LedgerRow } from '../components/ledger';
 import { Page } from '../components/page-layout';
 import { orRefuse, requireActor } from '../session';
 import { InviteForm } from './invite-form';
+import { OfficeForm } from './office-form';
 import { roleWords } from './role-words';
 
 export const metadata: Metadata = { title: 'Office' };
 
 export default async function OfficePage() {
   const actor = await requireActor();
-  const { people, authorities } = await orRefuse(openOffice(actor));
+  const leads = actor.roles.includes('administrator');
+  const { people, authorities, settings } = await orRefuse(openOffice(actor));
   return (
     <Page
       wide
@@ -34,10 +37,21 @@ export default async function OfficePage() {
         {people.map((person) => (
           <LedgerRow key={person.id} number={person.initials}>
             <span>
-              <b>{person.name}</b>
+              <b>
+                {leads ? (
+                  <Link className="hover:text-pen" href={`/office/people/${person.id}`}>
+                    {person.name}
+                  </Link>
+                ) : (
+                  person.name
+                )}
+              </b>
               <small className="i2 [overflow-wrap:anywhere]">{person.email}</small>
             </span>
-            <span>{person.roles.map((r) => roleWords[r]).join(', ')}</span>
+            <span>
+              {person.roles.map((r) => roleWords[r]).join(', ')}
+              {person.active ? null : <small className="i2 block">account closed</small>}
+            </span>
             <span className="i2 s">
               {person.licences.map((l) => (
                 <span key={`${l.jurisdiction} ${l.number}`} className="block">
@@ -56,17 +70,36 @@ export default async function OfficePage() {
           <ul className="plainlist max-w-[676px] border-t border-line">
             {authorities.map((a) => (
               <li key={a.id}>
-                <b className="font-medium">{a.name}</b>
+                <b className="font-medium">
+                  {leads ? (
+                    <Link className="hover:text-pen" href={`/office/authorities/${a.id}`}>
+                      {a.name}
+                    </Link>
+                  ) : (
+                    a.name
+                  )}
+                </b>
                 <small className="i2 block">decides: {a.decisions.join(', ')}</small>
               </li>
             ))}
           </ul>
         )}
+        {leads ? (
+          <Link className="btn mt-4" href="/office/authorities/new">
+            Enter an authority
+          </Link>
+        ) : null}
       </Hung>
-      {actor.roles.includes('administrator') ? (
+      {leads ? (
         <Hung at="section">
           <h2>Invite a person</h2>
           <InviteForm />
+        </Hung>
+      ) : null}
+      {leads ? (
+        <Hung at="section">
+          <h2>Settings</h2>
+          <OfficeForm lateAfter={settings.lateAfter} />
         </Hung>
       ) : null}
     </Page>

@@ -82,19 +82,6 @@ export async function uncheckedOf(
   return revisionIds.filter((id) => !agreed.includes(id));
 }
 
-export async function openChecksOf(
-  db: Knex,
-  officeId: string,
-  checkerId: string,
-): Promise<{ id: string; job_id: string; number: number; title: string; job_title: string }[]> {
-  return db('checks as c')
-    .join('revisions as r', 'r.id', 'c.revision_id')
-    .join('sheets as s', 's.id', 'r.sheet_id')
-    .join('jobs as j', 'j.id', 's.job_id')
-    .where({ 'c.office_id': officeId, 'c.checker_id': checkerId, 'c.state': 'open' })
-    .select('c.id', 's.job_id', 's.number', 's.title', 'j.title as job_title');
-}
-
 /** The marks of a check, each with its newest answer. */
 export async function marksOf(db: Knex, officeId: string, checkId: string): Promise<MarkRow[]> {
   return db('marks as m')

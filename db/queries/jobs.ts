@@ -134,7 +134,19 @@ export interface AuthorityRow {
   decisions: string[];
   reviewer: string | null;
   email: string | null;
+  /** How it wants a package: by a link, or also attached to the letter. */
+  wish: 'link' | 'attachment';
+  /** What it wants seen to before anything is sent, in its own words. */
+  checklist: string[];
 }
+
+type WrittenAuthority = Omit<AuthorityRow, 'wish' | 'checklist'> & Partial<AuthorityRow>;
+
+const asColumns = ({ decisions, checklist, ...row }: Partial<AuthorityRow>) => ({
+  ...row,
+  decisions: JSON.stringify(decisions),
+  ...(checklist ? { checklist: JSON.stringify(checklist) } : {}),
+});
 
 export async function authoritiesOf(db: Knex, officeId: string): Promise<AuthorityRow[]> {
   return db('authorities').where({ office_id: officeId }).orderBy('name');
@@ -148,15 +160,13 @@ export async function authorityById(
   return db('authorities').where({ office_id: officeId, id }).first();
 }
 
-export async function insertAuthority(db: Knex, row: AuthorityRow): Promise<void> {
-  await db('authorities').insert({ ...row, decisions: JSON.stringify(row.decisions) });
+export async function insertAuthority(db: Knex, row: WrittenAuthority): Promise<void> {
+  await db('authorities').insert(asColumns(row));
 }
 
 export async function changeAuthority(
   trx: Knex,
-  { office_id, id, decisions, ...row }: AuthorityRow,
+  { office_id, id, ...row }: WrittenAuthority,
 ): Promise<number> {
-  return trx('authorities')
-    .where({ office_id, id })
-    .update({ ...row, decisions: JSON.stringify(decisions) });
+  return trx('authorities').where({ office_id, id }).update(asColumns(row));
 }

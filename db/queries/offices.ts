@@ -11,3 +11,23 @@ export async function insertOffice(
 export async function anyOffice(db: Knex): Promise<boolean> {
   return (await db('offices').first('id')) !== undefined;
 }
+
+export interface OfficeRow {
+  id: string;
+  name: string;
+  zone: string;
+  /** Days after which something that waits is called late. */
+  late_after: number;
+}
+
+export async function officeById(db: Knex, id: string): Promise<OfficeRow | undefined> {
+  return db('offices').where({ id }).first();
+}
+
+export async function changeOffice(
+  trx: Knex,
+  id: string,
+  change: Partial<Omit<OfficeRow, 'id'>>,
+): Promise<void> {
+  await trx('offices').where({ id }).update(change);
+}

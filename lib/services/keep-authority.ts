@@ -18,14 +18,19 @@ const input = z.object({
     .refine((words) => new Set(words).size === words.length, 'Two decisions have the same words.'),
   reviewer: z.string().trim().max(120).optional(),
   email: z.email('Type the e-mail address of the reviewer.').max(190).optional(),
+  wish: z.enum(['link', 'attachment']).default('link'),
+  checklist: z
+    .array(z.string().trim().min(1).max(200, 'A line has at most 200 letters.'))
+    .max(40)
+    .default([]),
 });
 
-/** Enters an authority, or changes one: its name, its words for decisions, its usual reviewer. */
+/** Enters an authority, or changes one: its name, its words for decisions, its usual reviewer, what it asks for. */
 export async function keepAuthority(actor: Actor, raw: unknown): Promise<Result<{ id: string }>> {
   requireRole(actor, 'administrator');
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const { authorityId, name, decisions, reviewer, email } = parsed.data;
+  const { authorityId, name, decisions, reviewer, email, wish, checklist } = parsed.data;
   return inTransaction(actor, async (trx, record) => {
     const id = authorityId ?? randomUUID();
     const row = {
@@ -35,6 +40,8 @@ export async function keepAuthority(actor: Actor, raw: unknown): Promise<Result<
       decisions,
       reviewer: reviewer ?? null,
       email: email ?? null,
+      wish,
+      checklist,
     };
     if (authorityId === undefined) await insertAuthority(trx, row);
     else if ((await changeAuthority(trx, row)) !== 1) throw new NotFound(`authority ${authorityId}`);

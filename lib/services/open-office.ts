@@ -1,6 +1,7 @@
 // server only
 import { database } from '@/db/connection';
 import { authoritiesOf } from '@/db/queries/jobs';
+import { officeById } from '@/db/queries/offices';
 import { licencesOf, peopleOf } from '@/db/queries/people';
 import { type Actor, role } from './actor';
 import { everyone, requireRole } from './require-role';
@@ -9,12 +10,15 @@ import { everyone, requireRole } from './require-role';
 export async function openOffice(actor: Actor) {
   requireRole(actor, ...everyone);
   const db = database();
-  const [people, licences, authorities] = await Promise.all([
+  const [office, people, licences, authorities] = await Promise.all([
+    officeById(db, actor.officeId),
     peopleOf(db, actor.officeId),
     licencesOf(db, actor.officeId),
     authoritiesOf(db, actor.officeId),
   ]);
+  if (!office) throw new Error('the office of a signed-in person is gone');
   return {
+    settings: { lateAfter: office.late_after },
     people: people.map((p) => ({
       id: p.id,
       name: p.name,
@@ -27,6 +31,7 @@ export async function openOffice(actor: Actor) {
         .map((l) => ({
           id: l.id,
           jurisdiction: l.jurisdiction,
+          profession: l.profession,
           number: l.number,
           expires: l.expires.toISOString().slice(0, 10),
         })),
@@ -37,6 +42,8 @@ export async function openOffice(actor: Actor) {
       decisions: a.decisions,
       reviewer: a.reviewer,
       email: a.email,
+      wish: a.wish,
+      checklist: a.checklist,
     })),
   };
 }

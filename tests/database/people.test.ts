@@ -97,6 +97,10 @@ describe('an authority', () => {
     need(await keepAuthority(administrator, { ...words, authorityId: id, decisions: ['Reviewed'] }));
     const kept = (await openOffice(administrator)).authorities.find((a) => a.id === id);
     expect(kept?.decisions).toEqual(['Reviewed']);
+    expect(kept).toMatchObject({ wish: 'link', checklist: [] });
+    const asks = { wish: 'attachment', checklist: ['Cover signed', 'Index complete'] };
+    need(await keepAuthority(administrator, { ...words, authorityId: id, ...asks }));
+    expect((await openOffice(administrator)).authorities.find((a) => a.id === id)).toMatchObject(asks);
     expect((await keepAuthority(administrator, { ...words, decisions: ['Yes', 'Yes'] })).ok).toBe(false);
   });
 });

@@ -2,6 +2,7 @@ import type { Actor, Role } from '@/lib/services/actor';
 import { addLicence } from '@/lib/services/add-licence';
 import { answerComment } from '@/lib/services/answer-comment';
 import { answerMark } from '@/lib/services/answer-mark';
+import { changeOffice } from '@/lib/services/change-office';
 import { changePassword } from '@/lib/services/change-password';
 import { changePerson } from '@/lib/services/change-person';
 import { compareRevisions } from '@/lib/services/compare-revisions';
@@ -86,6 +87,7 @@ export const verbs: Verb[] = [
   on(addSheet, makers, (a, f) => addSheet(a, f.jobId, 'T', proppedDraft(), 'made sheet')),
   on(answerComment, makers, (a, f) => answerComment(a, { commentId: f.sent.commentId, answer: 'x' })),
   on(answerMark, makers, (a, f) => answerMark(a, { markId: f.sent.markId, answer: 'x' })),
+  on(changeOffice, ['administrator'], (a) => changeOffice(a, { lateAfter: 10 }), makes),
   on(
     changePassword,
     everyone,

@@ -17,7 +17,7 @@ export const metadata: Metadata = { title: 'Job' };
 
 export default async function JobPage({ params }: JobPageProps) {
   const actor = await requireActor();
-  const { job, sheets, submittals } = await orRefuse(openJob(actor, (await params).job));
+  const { job, sheets, submittals, people } = await orRefuse(openJob(actor, (await params).job));
   const mayMake = actor.roles.some((r) => makers.includes(r));
   const mayExport = mayMake || actor.roles.includes('administrator');
   const units = job.units === 'US' ? 'kip, ft, in' : 'kN, m, mm';
@@ -46,7 +46,7 @@ export default async function JobPage({ params }: JobPageProps) {
         <div className="titlerow">
           <h1>{job.title}</h1>
           <span className="sp" />
-          {mayMake ? (
+          {mayMake && job.state === 'open' ? (
             <>
               {sheets.some((s) => s.revisionId) ? (
                 <Link className="btn" href={`/jobs/${job.id}/submittals/new`}>
@@ -63,6 +63,19 @@ export default async function JobPage({ params }: JobPageProps) {
           {[...facts].map((fact) => (
             <span key={fact}>{fact}</span>
           ))}
+        </p>
+        {job.state === 'closed' ? (
+          <p className="message">This job is closed. It can be read; nothing new is made in it.</p>
+        ) : null}
+        <p className="i2">
+          {people.length === 0
+            ? 'Nobody is named for this job yet.'
+            : people.map((p) => `${p.name}, ${p.part.replaceAll('-', ' ')}`).join('; ')}{' '}
+          {mayExport ? (
+            <Link className="t" href={`/jobs/${job.id}/people`}>
+              People, close the job
+            </Link>
+          ) : null}
         </p>
       </Hung>
       {sheets.length === 0 ? (

@@ -1,0 +1,60 @@
+import type { Metadata } from 'next';
+import { forbidden, notFound } from 'next/navigation';
+import { Hung } from '@/app/components/ledger';
+import { Page } from '@/app/components/page-layout';
+import { orRefuse, requireActor } from '@/app/session';
+import { dayIn } from '@/lib/services/licence-in-force';
+import { openOffice } from '@/lib/services/open-office';
+import { submitLicence, submitPerson, withdraw } from './actions';
+import { LicenceForm } from './licence-form';
+import { LicenceList } from './licence-list';
+import { PersonForm } from './person-form';
+
+interface Props {
+  params: Promise<{ person: string }>;
+}
+
+export const metadata: Metadata = { title: 'Person' };
+
+/** One person of the office, for the administrator: roles, account, licences. */
+export default async function PersonPage({ params }: Props) {
+  const actor = await requireActor();
+  if (!actor.roles.includes('administrator')) forbidden();
+  const { person: id } = await params;
+  const person = (await orRefuse(openOffice(actor))).people.find((p) => p.id === id);
+  if (!person) notFound();
+  return (
+    <Page
+      wide
+      path={[{ label: 'Office', href: '/office' }, { label: person.name }]}
+      actor={actor}
+      foot={[
+        <span key="office">
+          <b>{actor.officeName}</b>
+        </span>,
+        person.active ? 'account open' : 'account closed',
+        <span key="zone" className="end">{`Times in ${actor.zone}`}</span>,
+      ]}
+    >
+      <Hung at="top" number={person.initials}>
+        <h1>{person.name}</h1>
+        <p className="facts">
+          <span>{person.email}</span>
+        </p>
+        <PersonForm action={submitPerson.bind(null, id)} person={person} />
+      </Hung>
+      {person.roles.includes('engineer-of-record') || person.licences.length > 0 ? (
+        <Hung at="section">
+          <h2>Licences</h2>
+          <LicenceList licences={person.licences} today={dayIn(actor.zone, new Date())} withdraw={withdraw} />
+        </Hung>
+      ) : null}
+      {person.roles.includes('engineer-of-record') ? (
+        <Hung at="section">
+          <h2>Enter a licence</h2>
+          <LicenceForm action={submitLicence.bind(null, id)} />
+        </Hung>
+      ) : null}
+    </Page>
+  );
+}
