@@ -29,6 +29,11 @@ export default async function OfficePage() {
     >
       <Hung at="top">
         <h1>{actor.officeName}</h1>
+        <p>
+          <Link className="t" href="/office/record">
+            Record of the office
+          </Link>
+        </p>
       </Hung>
       <Hung at="first">
         <h2>People</h2>

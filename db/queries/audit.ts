@@ -36,6 +36,8 @@ export interface AuditFilter {
   jobId?: string;
   aboutId?: string;
   personId?: string;
+  /** Leaves out the drafts that are kept while someone types. */
+  withoutDrafts?: boolean;
 }
 
 /** Entries of the office, newest first, of one job, thing or person if asked. */
@@ -49,6 +51,7 @@ export async function findAudit(
   if (filter.jobId) query.where({ job_id: filter.jobId });
   if (filter.aboutId) query.where({ about_id: filter.aboutId });
   if (filter.personId) query.where({ person_id: filter.personId });
+  if (filter.withoutDrafts) query.whereNot({ verb: 'kept' });
   return query.orderBy('id', 'desc').limit(page.size).offset(page.offset);
 }
 

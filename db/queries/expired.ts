@@ -16,7 +16,3 @@ export async function deleteExpired(db: Knex, now: Date): Promise<number> {
   ];
   return counts.reduce((a, b) => a + b, 0);
 }
-
-export async function officeIds(db: Knex): Promise<string[]> {
-  return db('offices').pluck('id');
-}

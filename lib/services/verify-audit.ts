@@ -3,7 +3,9 @@ import { database } from '@/db/connection';
 import { auditAfter, auditHead, firstHash } from '@/db/queries/audit';
 import type { Actor } from './actor';
 import { auditHash } from './audit-hash';
-import { requireRole } from './require-role';
+import { allowAttempt, tooOften } from './limit-attempts';
+import { everyone, requireRole } from './require-role';
+import { done, mend, type Result } from './result';
 
 export interface AuditReport {
   entries: number;
@@ -11,12 +13,17 @@ export interface AuditReport {
   broken: number | undefined;
 }
 
-/** Walks the office's record from its first entry to its end, a thousand entries at a time. */
-export async function verifyAudit(actor: Actor): Promise<AuditReport> {
-  requireRole(actor, 'administrator');
-  return walkAudit(actor.officeId);
+const perQuarterHour = 30;
+
+/** Walks the office's record from its first entry to its end. */
+export async function verifyAudit(actor: Actor): Promise<Result<AuditReport>> {
+  requireRole(actor, ...everyone);
+  if (!(await allowAttempt(`verify:${actor.officeId}`, perQuarterHour)))
+    return mend('too-often', '', tooOften);
+  return done(await walkAudit(actor.officeId));
 }
 
+/** A thousand entries at a time. */
 export async function walkAudit(officeId: string): Promise<AuditReport> {
   let before = firstHash;
   let entries = 0;

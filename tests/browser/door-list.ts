@@ -44,6 +44,7 @@ export const doors: Door[] = [
   own('/jobs'),
   own('/jobs/start', ['administrator', ...makers]),
   own('/office'),
+  own('/office/record'),
   {
     route: '/office/people/[person]',
     path: (f) => `/office/people/${f.office.people.engineer.personId}`,
@@ -58,6 +59,7 @@ export const doors: Door[] = [
   },
   inJob('', () => ''),
   { ...inJob('/export', () => '/export', ['administrator', ...makers]), method: 'POST' },
+  inJob('/record', () => '/record'),
   inJob('/people', () => '/people', ['administrator', ...makers]),
   inJob('/sheets/new', () => '/sheets/new', makers),
   inJob('/sheets/[sheet]', (f) => `/sheets/${f.frozen.sheetId}`),

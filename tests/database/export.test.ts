@@ -84,7 +84,7 @@ describe('a job that is taken out', () => {
   });
 
   it('stands in the record with the digest of the archive', async () => {
-    const [entry] = await readAudit(filled.office.people.engineer, { jobId: filled.jobId });
+    const [entry] = (await readAudit(filled.office.people.engineer, { jobId: filled.jobId })).entries;
     expect(entry?.verb).toBe('took out');
     expect(entry?.digest).toBe(createHash('sha256').update(zip).digest('hex'));
   });

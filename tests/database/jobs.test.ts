@@ -134,8 +134,8 @@ describe('names as long as they may be', () => {
     const title = 'T'.repeat(120);
     const { id } = need(await createSheet(engineer, { jobId, start: 'portal', title }));
     need(await copySheet(engineer, { sheetId: id }));
-    const record = await readAudit(engineer, { jobId });
+    const record = (await readAudit(engineer, { jobId })).entries;
     expect(record.map((r) => r.verb)).toEqual(['copied sheet', 'made sheet', 'opened job']);
-    expect((await readAudit(engineer, { aboutId: id }))[0]?.subject).toBe(`S-01 ${title}`);
+    expect((await readAudit(engineer, { aboutId: id })).entries[0]?.subject).toBe(`S-01 ${title}`);
   });
 });

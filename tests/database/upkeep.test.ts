@@ -4,11 +4,14 @@ import { connectionSettings, database } from '@/db/connection';
 import { deleteExpired } from '@/db/queries/expired';
 import { env } from '@/lib/env';
 import { verifyAllOffices } from '@/lib/services/night-worker';
+import { readAudit } from '@/lib/services/read-audit';
 import { walkAudit } from '@/lib/services/verify-audit';
 import { fillRecord } from './fill-record';
 import { makeJob, makeOffice } from './office-factory';
 
 afterAll(() => database().destroy());
+
+const toldAs = 'The record of the office does not hold together';
 
 describe('the record of an office', () => {
   it('holds together after a whole job', async () => {
@@ -16,6 +19,18 @@ describe('the record of an office', () => {
     const report = await walkAudit(office.id);
     expect(report.entries).toBeGreaterThan(12);
     expect(report.broken).toBeUndefined();
+  });
+
+  it('is walked once a day, and shows what was found', async () => {
+    const office = await makeOffice();
+    await makeJob(office);
+    const night = new Date('2031-02-01T02:00:00Z');
+    expect(await verifyAllOffices(night)).not.toContain(office.id);
+    await makeJob(office, '26-002');
+    await verifyAllOffices(new Date('2031-02-01T22:00:00Z'));
+    const { walked } = await readAudit(office.people.engineer, {});
+    expect(walked).toEqual({ at: night, entries: 1, broken: null });
+    await database()('record_walks').where({ day: '2031-02-01' }).delete();
   });
 
   it.each([
@@ -27,7 +42,13 @@ describe('the record of an office', () => {
     const { officeId } = office.people.engineer;
     await withoutRules(() => database().raw(sql, [officeId]));
     expect((await walkAudit(officeId)).broken).toBeDefined();
-    expect(await verifyAllOffices()).toContain(officeId);
+    const night = new Date('2031-03-01T02:00:00Z');
+    const both = await Promise.all([verifyAllOffices(night), verifyAllOffices(night)]);
+    expect(both.flat().filter((id) => id === officeId)).toHaveLength(1);
+    await database()('record_walks').where({ day: '2031-03-01' }).delete();
+    const mails = await database()('mails').where({ office_id: officeId, subject: toldAs });
+    expect(mails.map((m) => m.recipient)).toEqual([office.people.administrator.email]);
+    expect(mails[0]?.body).toContain('Keep the database as it is');
   });
 });
 

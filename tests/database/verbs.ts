@@ -185,7 +185,7 @@ export const verbs: Verb[] = [
   ),
   on(setJobState, leaders, (a, f) => setJobState(a, { jobId: f.jobId, state: 'closed' })),
   on(signOutEverywhere, everyone, (a) => signOutEverywhere(a), makes),
-  on(verifyAudit, ['administrator'], (a) => verifyAudit(a), reads),
+  on(verifyAudit, everyone, (a) => verifyAudit(a), reads),
   on(verifyRevision, everyone, (a, f) => verifyRevision(a, f.sent.revisionId)),
   on(withdrawLicence, ['administrator'], (a) => withdrawLicence(a, { licenceId: 'not-there' })),
 ];
