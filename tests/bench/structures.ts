@@ -77,11 +77,17 @@ export function portal(): AnalysisInput {
   return wrap({ joints, members, cases, combinations });
 }
 
-/** The same structure in other units of force and length. */
+/** The same structure in other units of force and length, its distributed and joint loads with it. */
 export function inUnits(input: AnalysisInput, force: number, length: number): AnalysisInput {
+  const load = (l: Loads[number]): Loads[number] => {
+    if (l.kind === 'distributed') return { ...l, w1: (l.w1 * force) / length, w2: (l.w2 * force) / length };
+    if (l.kind === 'joint') return { ...l, x: (l.x ?? 0) * force, y: (l.y ?? 0) * force };
+    throw new Error(`a load of kind ${l.kind} is not scaled here`);
+  };
   return {
     ...input,
     joints: input.joints.map((j) => ({ ...j, x: j.x * length, y: j.y * length })),
     members: input.members.map((m) => ({ ...m, EI: m.EI * force * length ** 2 })),
+    cases: input.cases.map((c) => ({ ...c, loads: c.loads.map(load) })),
   };
 }
