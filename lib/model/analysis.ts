@@ -18,9 +18,12 @@ export const stiffnessBasis = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('relative'), EI0: z.number().finite().positive().optional() }),
 ]);
 
+/** Characters of a combination's name, at most. */
+export const longestName = 24;
+
 /** A factored sum of load cases. `source`: publication, edition, section or equation the factors come from. */
 export const combination = z.object({
-  id: z.string().min(1).max(24),
+  id: z.string().min(1).max(longestName),
   purpose: z.enum(['strength', 'service']),
   factors: z.record(z.string(), z.number().finite()),
   source: z.string().max(200).optional(),

@@ -1,6 +1,7 @@
-import type { Combination } from './analysis';
+import { type Combination, longestName } from './analysis';
 import type { Draft } from './draft';
 import type { FieldReader } from './field-reader';
+import { freeName } from './free-name';
 
 /** "1.2 D + 1.6 L − 0.5 W" as factors per case; every name must be a case of the sheet. */
 export function readFactors(sum: string, cases: ReadonlySet<string>): Record<string, number> | string {
@@ -24,13 +25,24 @@ export function readFactors(sum: string, cases: ReadonlySet<string>): Record<str
 
 export function readCombinations(reader: FieldReader, draft: Draft): Combination[] {
   const cases = new Set(draft.cases.map((c) => c.id));
+  const typed = draft.combinations.map((row) => row.id.trim());
+  const taken = new Set(typed);
   return draft.combinations.flatMap((row, i) => {
     const factors = readFactors(row.sum, cases);
     if (typeof factors === 'string') {
       reader.refuse(`combinations.${i}.sum`, factors);
       return [];
     }
-    const id = row.id.trim() === '' ? row.sum.trim().slice(0, 24) : row.id.trim();
+    const own = typed[i] ?? '';
+    if (own !== '' && typed.indexOf(own) < i) {
+      reader.refuse(
+        `combinations.${i}.id`,
+        `There are two combinations ${own}. Give each a name of its own.`,
+      );
+      return [];
+    }
+    const id = own === '' ? freeName(row.sum.trim(), taken, longestName) : own;
+    taken.add(id);
     return [{ id, purpose: row.purpose, factors, source: row.source.trim() === '' ? undefined : row.source }];
   });
 }

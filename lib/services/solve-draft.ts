@@ -1,4 +1,5 @@
 import { combine } from '@/lib/engine/combinations/combine';
+import { joinCombinations } from '@/lib/engine/combinations/join-combinations';
 import { findSet } from '@/lib/engine/combinations/published-sets';
 import type { Solution } from '@/lib/engine/solution';
 import { solve } from '@/lib/engine/solve';
@@ -21,7 +22,7 @@ export function solveDraft(draft: Draft): SolvedDraft {
   const analysis = analysisSchema.parse(read.analysis);
   const set = draft.combinationSet === '' ? undefined : findSet(draft.combinationSet);
   const published = set ? combine(analysis.cases, set) : [];
-  const solved = solve({ ...analysis, combinations: [...published, ...analysis.combinations] });
+  const solved = solve({ ...analysis, combinations: joinCombinations(published, analysis.combinations) });
   if (!solved.ok) return { ok: false, errors: [], refusal: solved.refusal };
   return {
     ok: true,

@@ -113,6 +113,23 @@ describe('a draft that is not complete', () => {
     if (!read.ok) expect(read.geometry.joints).toHaveLength(2);
   });
 
+  it('gives sums without a name names of their own, and refuses one name for two', () => {
+    const sum = { purpose: 'strength' as const, sum: '1.2D', source: '' };
+    const named = (...ids: string[]) =>
+      readDraft(
+        twoSpans((d) => {
+          const [first] = d.cases;
+          if (first) first.id = 'D';
+          d.combinations = ids.map((id) => ({ ...sum, id }));
+        }),
+      );
+    const read = named('', '', '1.2D (2)');
+    expect(read.ok && read.analysis.combinations?.map((c) => c.id)).toEqual(['1.2D', '1.2D (3)', '1.2D (2)']);
+    const refused = named('ULS', 'ULS');
+    expect(refused.ok).toBe(false);
+    if (!refused.ok) expect(refused.errors.map((e) => e.path)).toEqual(['combinations.1.id']);
+  });
+
   it('never throws, whatever is typed into its fields', () => {
     const any = fc.string({ maxLength: 20 });
     fc.assert(

@@ -1,12 +1,10 @@
-import type { Combination } from '@/lib/model/analysis';
+import { type Combination, longestName } from '@/lib/model/analysis';
+import { freeName } from '@/lib/model/free-name';
 import type { LoadCase } from '@/lib/model/load';
 import { applyPartialFactors, psiOf } from './apply-partial-factors';
 import { applySums, coversBySums } from './apply-sums';
 import type { CombinationSet } from './combination-set';
 import type { Arrangements, Variant } from './variants';
-
-/** Longest name a combination may have. */
-const longestName = 24;
 
 /**
  * The combinations that a published set asks for, given the cases of a sheet: each rule with every acting sign of
@@ -21,6 +19,7 @@ export function combine(
   arrangements: Arrangements = [],
 ): Combination[] {
   const found = new Map<string, Combination>();
+  const names = new Set<string>();
   for (const { rule, variants } of applyRules(set, cases, arrangements)) {
     let number = 0;
     for (const variant of variants) {
@@ -29,11 +28,12 @@ export function combine(
       if (Object.keys(factors).length === 0 || found.has(key)) continue;
       number++;
       const sum = writeSum(factors);
-      const prefix =
-        rule.purpose === 'service' && [...found.values()].some((c) => c.id === sum) ? 'service ' : '';
+      const prefix = rule.purpose === 'service' && names.has(sum) ? 'service ' : '';
       const name = `${prefix}${sum}`;
+      const id = freeName(name.length <= longestName ? name : `${rule.id}-${number}`, names, longestName);
+      names.add(id);
       found.set(key, {
-        id: name.length <= longestName ? name : `${rule.id}-${number}`,
+        id,
         purpose: rule.purpose,
         factors,
         source: `${rule.source}, ${rule.evidence}`,
