@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { redirect } from 'next/navigation';
 import { env } from '@/lib/env';
 import { TitlePage } from '../components/title-page';
@@ -17,7 +18,11 @@ export default async function SignInPage() {
     >
       <SignInForm />
       <p className="s i2 revnote">
-        Plan reviewers need no account: open the link in the e-mail you were sent.
+        Plan reviewers need no account: open the link in the e-mail you were sent. Anybody can{' '}
+        <Link className="t" href="/verify">
+          verify a file
+        </Link>
+        .
       </p>
     </TitlePage>
   );

@@ -15,6 +15,7 @@ import { revisionDigest } from './revision-digest';
 import { NotFound, refuse } from './service-error';
 import { sheetName } from './sheet-state';
 import { solveDraft } from './solve-draft';
+import { storedResults } from './stored-results';
 import { tellOfChange } from './tell-of-change';
 import { voidSubmittalsOf } from './void-submittals';
 
@@ -83,11 +84,6 @@ function solveOrRefuse(draft: ReturnType<typeof draftSchema.parse>) {
     );
   }
   const { solution, blocks } = solved;
-  const results = {
-    reactions: solution.cases,
-    X: solution.X,
-    checks: solution.checks,
-    envelopes: solution.envelopes,
-  };
+  const results = storedResults(solution);
   return { results, blocks, engine: solution.engine };
 }

@@ -2,12 +2,14 @@
 import { createHash } from 'node:crypto';
 import type { JobRow } from '@/db/queries/jobs';
 import type { RevisionLine } from '@/db/queries/revisions';
+import { env } from '@/lib/env';
 import { blocks } from '@/templates/block';
 import { composeRevisions } from '@/templates/compose-revisions';
 import type { PrintedPackage } from '@/templates/paper/package-print';
 import { renderPackage } from '@/templates/paper/render-package';
 import type { RevisionPast } from './package-history';
 import { sheetName } from './sheet-state';
+import { type EmbeddedPackage, packageFileName, packageForm } from './verification/embedded-package';
 
 export interface PackageRequest {
   office: string;
@@ -30,8 +32,8 @@ export async function printPackage(
   revisions: readonly RevisionLine[],
 ): Promise<PrintedPackage> {
   const { office, job, purpose, submittal, date } = request;
-  const data = {
-    form: 'fairhand.package/1',
+  const data: EmbeddedPackage = {
+    form: packageForm,
     job: { number: job.number, title: job.title },
     submittal,
     sheets: revisions.map((r) => ({
@@ -86,7 +88,8 @@ export async function printPackage(
       })),
     ),
     seal: { on: 'cover', covers: revisions.map((r) => sheetName(r.sheet_number)).join(', ') },
-    data: { name: 'calculations.json', description: 'Inputs and results of every sheet', bytes },
+    verifyAt: `${env().appUrl}/verify`,
+    data: { name: packageFileName, description: 'Inputs and results of every sheet', bytes },
   });
 }
 

@@ -15,7 +15,7 @@ const STANDING: Readonly<Record<PaperMode, string>> = {
 };
 
 /** The package's last page, after what the office itself adds. */
-export function cautionBlocks(mode: PaperMode): Block[] {
+export function cautionBlocks(mode: PaperMode, verifyAt?: string): Block[] {
   return [
     { kind: 'heading', id: 'A', text: 'What these calculations cover' },
     {
@@ -40,5 +40,11 @@ export function cautionBlocks(mode: PaperMode): Block[] {
     },
     { kind: 'heading', id: 'B', text: 'This copy' },
     { kind: 'paragraph', id: 'B.1', text: STANDING[mode] },
+    ...(verifyAt ? [verification(verifyAt)] : []),
   ];
+}
+
+function verification(verifyAt: string): Block {
+  const text = `The inputs and results of every sheet ride inside the file. Anybody can verify it at ${verifyAt}: who sealed it and when, whether it was changed since, and whether its inputs, solved again, give its results.`;
+  return { kind: 'paragraph', id: 'B.2', text };
 }

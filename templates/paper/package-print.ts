@@ -61,6 +61,8 @@ export type PackagePrint = {
   /** Where a seal goes, and the sheets it covers: "S-01 to S-06". */
   readonly seal?: { readonly on: 'cover' | 'every-page'; readonly covers: string };
   readonly data?: AttachedData;
+  /** Address of the page where anybody can verify the file. */
+  readonly verifyAt?: string;
 };
 
 /** A square for the visible seal, in the page's own points from its lower left corner. */

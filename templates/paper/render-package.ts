@@ -117,7 +117,7 @@ function flowPart(sheet: PrintedSheet, imprint: Imprint, print: PackagePrint, is
 }
 
 function closingPart(print: PackagePrint): Part {
-  const blocks: Block[] = [...(print.closing ?? []), ...cautionBlocks(print.mode)];
+  const blocks: Block[] = [...(print.closing ?? []), ...cautionBlocks(print.mode, print.verifyAt)];
   const heads = (print.closing ?? []).flatMap((b) => (b.kind === 'heading' ? [b.text] : []));
   const title = heads.length > 0 ? `${heads.join(', ')}, cautions` : 'Cautions';
   return flowPart({ number: 'cautions', unnumbered: true, title, blocks }, packageImprint(print), print);

@@ -40,6 +40,8 @@ export const doors: Door[] = [
   open('/review/[token]'),
   open('/review/[token]/file'),
   open('/sign-in'),
+  open('/verify'),
+  open('/verify/file'),
   own('/account'),
   own('/jobs'),
   own('/jobs/start', ['administrator', ...makers]),

@@ -134,7 +134,18 @@ describe('the main job', () => {
     expect(signature).toContain('Total document signed');
     execFileSync('qpdf', ['--check', file]);
 
-    for (const person of [engineer, checker, sealer, reviewer]) expect(person.errors).toEqual([]);
+    // Anybody may hold what was sent against itself.
+    const stranger = await openPage(browser, 390);
+    await stranger.page.goto(`${site()}/verify`);
+    await stranger.page.getByLabel('PDF file').setInputFiles(file);
+    await stranger.page.getByText('sent.pdf is sealed, and nothing was changed since.').waitFor();
+    await stranger.page
+      .getByText(/^All \d+ come out again\.$/)
+      .first()
+      .waitFor();
+    await expectAccessible(stranger.page);
+
+    for (const person of [engineer, checker, sealer, reviewer, stranger]) expect(person.errors).toEqual([]);
   });
 });
 

@@ -60,6 +60,9 @@ export default async function ReviewPage({ params }: Props) {
       foot={[
         `review for ${door.link.reviewer}, good until ${sayDate(door.link.expires_at, 'UTC')}`,
         sealed ? `sealed by ${sealed.by}, ${sayDate(sealed.at, 'UTC')}` : 'not sealed',
+        <a key="verify" className="t" href="/verify">
+          Verify a file
+        </a>,
       ]}
     >
       <ReviewDesk

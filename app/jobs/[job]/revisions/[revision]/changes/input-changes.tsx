@@ -1,3 +1,4 @@
+import { ReadingPage } from '@/app/components/reading-page';
 import type { DraftChangeNote } from '@/lib/model/compare-drafts';
 
 interface Props {
@@ -10,7 +11,7 @@ interface Props {
 export function InputChanges({ inputs, before, after }: Props) {
   if (inputs.length === 0) return <p className="i2">Every input is as it was.</p>;
   return (
-    <div className="scroller">
+    <ReadingPage className="scroller" label="Inputs that changed" focusable>
       <table className="rl changes">
         <thead>
           <tr>
@@ -29,6 +30,6 @@ export function InputChanges({ inputs, before, after }: Props) {
           ))}
         </tbody>
       </table>
-    </div>
+    </ReadingPage>
   );
 }

@@ -1,3 +1,4 @@
+import { ReadingPage } from '@/app/components/reading-page';
 import type { ValuePair } from '@/lib/services/result-values';
 
 interface Props {
@@ -23,7 +24,7 @@ export function ValueChanges({ values, before, after }: Props) {
     return <p className="i2">All {values.length} reactions and greatest moments are as they were.</p>;
   const same = values.length - moved.length;
   return (
-    <div className="scroller">
+    <ReadingPage className="scroller" label="Results that changed" focusable>
       <table className="rl changes">
         <thead>
           <tr>
@@ -57,6 +58,6 @@ export function ValueChanges({ values, before, after }: Props) {
       {same > 0 ? (
         <p className="i2">{same === 1 ? 'One value is' : `${same} values are`} as before.</p>
       ) : null}
-    </div>
+    </ReadingPage>
   );
 }
