@@ -1,6 +1,9 @@
 // server only
 import type { Knex } from 'knex';
 
+/** What followed a mark, oldest first. */
+export type MarkStep = 'answered' | 'accepted' | 'reopened' | 'verified' | 'carried';
+
 export interface CheckRow {
   id: string;
   office_id: string;
@@ -8,6 +11,14 @@ export interface CheckRow {
   checker_id: string;
   category: number;
   state: 'open' | 'agreed' | 'returned' | 'void';
+  /** The standard solution that a check of category 0 is held against; blank in the others. */
+  standard_solution: string;
+  /** Whether every input is to be held against a drawing before the sheet is agreed; 0 or 1. */
+  inputs_asked: number;
+  /** Whether the checker works without the designer's sheet until their own stands beside it; 0 or 1. */
+  blind: number;
+  /** What the checker declared when the check was concluded. */
+  declaration: string;
   note: string;
   opened_at: Date;
   closed_at: Date | null;
@@ -17,10 +28,15 @@ export interface MarkRow {
   id: string;
   office_id: string;
   check_id: string;
+  /** The line or figure by its number, or the input by its place in words. */
   line: string;
+  place: 'line' | 'input';
   kind: 'agrees' | 'correct' | 'query';
   text: string;
+  /** The drawing that an input was held against. */
+  drawing: string;
   answer: string | null;
+  last_step: MarkStep | null;
   at: Date;
 }
 
@@ -43,10 +59,10 @@ export async function closeCheck(
   officeId: string,
   id: string,
   state: 'agreed' | 'returned',
-  note: string,
-  at: Date,
+  closing: { note: string; declaration: string; at: Date },
 ): Promise<void> {
-  await trx('checks').where({ office_id: officeId, id }).update({ state, note, closed_at: at });
+  const { note, declaration, at } = closing;
+  await trx('checks').where({ office_id: officeId, id }).update({ state, note, declaration, closed_at: at });
 }
 
 /** Checks of earlier revisions lose their force when a sheet changes. Answers the checkers whose checks these were. */
@@ -82,7 +98,10 @@ export async function uncheckedOf(
   return revisionIds.filter((id) => !agreed.includes(id));
 }
 
-/** The marks of a check, each with its newest answer. */
+const lastStep =
+  '(SELECT a.kind FROM mark_answers a WHERE a.mark_id = m.id ORDER BY a.id DESC LIMIT 1) AS last_step';
+
+/** The marks of a check, each with its newest answer and the last step it took. */
 export async function marksOf(db: Knex, officeId: string, checkId: string): Promise<MarkRow[]> {
   return db('marks as m')
     .where({ 'm.office_id': officeId, 'm.check_id': checkId })
@@ -90,46 +109,108 @@ export async function marksOf(db: Knex, officeId: string, checkId: string): Prom
     .select(
       'm.*',
       db.raw(
-        '(SELECT a.text FROM mark_answers a WHERE a.mark_id = m.id ORDER BY a.id DESC LIMIT 1) AS answer',
+        "(SELECT a.text FROM mark_answers a WHERE a.mark_id = m.id AND a.kind = 'answered' ORDER BY a.id DESC LIMIT 1) AS answer",
       ),
+      db.raw(lastStep),
     );
 }
 
-export async function insertMark(trx: Knex, row: Omit<MarkRow, 'answer'>): Promise<void> {
+export async function insertMark(trx: Knex, row: Omit<MarkRow, 'answer' | 'last_step'>): Promise<void> {
   await trx('marks').insert(row);
 }
 
-/** A mark with the check it belongs to and the originator who may answer it. */
-export async function markById(
-  db: Knex,
-  officeId: string,
-  id: string,
-): Promise<
-  | {
-      id: string;
-      line: string;
-      check_id: string;
-      check_state: CheckRow['state'];
-      originator_id: string;
-      job_id: string;
-    }
-  | undefined
-> {
-  return db('marks as m')
+/** A mark with the check it belongs to, its sheet, and the originator who may answer it. */
+export interface MarkOfSheet {
+  id: string;
+  line: string;
+  place: MarkRow['place'];
+  kind: MarkRow['kind'];
+  text: string;
+  last_step: MarkStep | null;
+  check_id: string;
+  check_state: CheckRow['state'];
+  checker_id: string;
+  originator_id: string;
+  revision: number;
+  sheet_id: string;
+  job_id: string;
+}
+
+const marksOfSheets = (db: Knex) =>
+  db('marks as m')
     .join('checks as c', 'c.id', 'm.check_id')
     .join('revisions as r', 'r.id', 'c.revision_id')
     .join('sheets as s', 's.id', 'r.sheet_id')
-    .where({ 'm.office_id': officeId, 'm.id': id })
-    .first('m.id', 'm.line', 'm.check_id', 'c.state as check_state', 'r.originator_id', 's.job_id');
+    .select(
+      'm.id',
+      'm.line',
+      'm.place',
+      'm.kind',
+      'm.text',
+      'm.check_id',
+      'c.state as check_state',
+      'c.checker_id',
+      'r.originator_id',
+      'r.number as revision',
+      'r.sheet_id',
+      's.job_id',
+      db.raw(lastStep),
+    );
+
+export async function markById(db: Knex, officeId: string, id: string): Promise<MarkOfSheet | undefined> {
+  return marksOfSheets(db).where({ 'm.office_id': officeId, 'm.id': id }).first();
 }
 
-export async function insertMarkAnswer(
-  trx: Knex,
-  row: { office_id: string; mark_id: string; text: string; person_id: string; at: Date },
-): Promise<void> {
+/** Corrections and queries of earlier revisions that were neither settled then nor seen to since. */
+export async function unsettledBefore(
+  db: Knex,
+  officeId: string,
+  sheetId: string,
+  revision: number,
+): Promise<MarkOfSheet[]> {
+  const marks = await marksOfSheets(db)
+    .where({ 'm.office_id': officeId, 'r.sheet_id': sheetId })
+    .where('r.number', '<', revision)
+    .whereNot({ 'm.kind': 'agrees' })
+    .orderBy(['r.number', 'm.at']);
+  const settled: (MarkStep | null)[] = ['accepted', 'verified', 'carried'];
+  return marks.filter((m: MarkOfSheet) => !settled.includes(m.last_step));
+}
+
+export interface MarkStepRow {
+  office_id: string;
+  mark_id: string;
+  kind: MarkStep;
+  text: string;
+  person_id: string;
+  /** The check of a later revision in which a correction was verified or carried on. */
+  check_id: string | null;
+  at: Date;
+}
+
+export async function insertMarkStep(trx: Knex, row: MarkStepRow): Promise<void> {
   await trx('mark_answers').insert(row);
 }
 
-export async function removeMark(trx: Knex, officeId: string, checkId: string, line: string): Promise<void> {
-  await trx('marks').where({ office_id: officeId, check_id: checkId, line }).delete();
+/** Every step that the marks of a check took, oldest first, with who took it. */
+export async function markStepsOf(
+  db: Knex,
+  officeId: string,
+  checkId: string,
+): Promise<(MarkStepRow & { name: string; initials: string })[]> {
+  return db('mark_answers as a')
+    .join('marks as m', 'm.id', 'a.mark_id')
+    .join('people as p', 'p.id', 'a.person_id')
+    .where({ 'a.office_id': officeId, 'm.check_id': checkId })
+    .orderBy('a.id')
+    .select('a.*', 'p.name', 'p.initials');
+}
+
+export async function removeMark(
+  trx: Knex,
+  officeId: string,
+  at: Pick<MarkRow, 'check_id' | 'place' | 'line'>,
+): Promise<void> {
+  const { check_id, place, line } = at;
+  await trx('marks').where({ office_id: officeId, check_id, place, line }).delete();
 }

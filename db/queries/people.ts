@@ -8,6 +8,8 @@ export interface PersonRow {
   name: string;
   initials: string;
   roles: string[];
+  /** Blank for the office's own people. */
+  organisation: string;
   password_hash: string | null;
   active: number;
 }
@@ -86,7 +88,7 @@ export async function changePerson(
   trx: Knex,
   officeId: string,
   id: string,
-  change: { name: string; initials: string; roles: string[]; active: boolean },
+  change: { name: string; initials: string; roles: string[]; organisation?: string; active: boolean },
 ): Promise<void> {
   await trx('people')
     .where({ office_id: officeId, id })

@@ -1,8 +1,9 @@
 // server only
 import { z } from 'zod';
-import { insertMarkAnswer, markById } from '@/db/queries/checks';
+import { insertMarkStep, markById } from '@/db/queries/checks';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
+import { isSettled, markPlace, markState } from './mark-state';
 import { makers, requireRole } from './require-role';
 import { type Result, unread } from './result';
 import { NotFound, refuse } from './service-error';
@@ -23,15 +24,19 @@ export async function answerMark(actor: Actor, raw: unknown): Promise<Result<nul
     if (!mark) throw new NotFound(`mark ${markId}`);
     if (mark.check_state === 'void')
       refuse('check-void', '', 'The sheet changed meanwhile: this check is void.');
-    await insertMarkAnswer(trx, {
+    if (mark.kind === 'agrees' || isSettled(markState(mark.kind, mark.last_step)))
+      refuse('mark-settled', '', 'This mark is settled.');
+    await insertMarkStep(trx, {
       office_id: actor.officeId,
       mark_id: markId,
+      kind: 'answered',
       text: answer,
       person_id: actor.personId,
+      check_id: null,
       at: new Date(),
     });
     const about = { jobId: mark.job_id, aboutId: mark.check_id };
-    await record('answered a mark', `line ${mark.line}: ${answer}`.slice(0, 400), about);
+    await record('answered a mark', `${markPlace(mark)}: ${answer}`.slice(0, 400), about);
     return null;
   });
 }

@@ -13,6 +13,8 @@ const input = z.object({
   name: z.string().trim().min(2, 'Type the name as it is printed.').max(120),
   initials: z.string().trim().min(1, 'Type the initials.').max(4, 'At most four letters.'),
   roles: z.array(role).min(1, 'Choose at least one role.'),
+  /** Another organisation that the person checks for; blank for the office's own, left as it is when absent. */
+  organisation: z.string().trim().max(120).optional(),
   active: z.boolean(),
 });
 

@@ -1,12 +1,24 @@
 // server only
+import type { Knex } from 'knex';
 import { z } from 'zod';
-import { checkById, closeCheck, type MarkRow, marksOf } from '@/db/queries/checks';
+import {
+  type CheckRow,
+  checkById,
+  closeCheck,
+  type MarkRow,
+  marksOf,
+  unsettledBefore,
+} from '@/db/queries/checks';
 import { queueMail } from '@/db/queries/mails';
 import { peopleOf } from '@/db/queries/people';
-import { revisionById } from '@/db/queries/revisions';
+import { type RevisionLine, revisionById } from '@/db/queries/revisions';
 import { env } from '@/lib/env';
+import { draft } from '@/lib/model/draft';
+import { declarationWords, needsDeclaration } from '@/lib/model/independence';
+import { listInputs } from '@/lib/model/list-inputs';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
+import { isSettled, markState } from './mark-state';
 import { requireRole } from './require-role';
 import { type Result, unread } from './result';
 import { NotAllowed, NotFound, refuse } from './service-error';
@@ -16,15 +28,16 @@ const input = z.object({
   checkId: z.string().max(36),
   outcome: z.enum(['agreed', 'returned']),
   note: z.string().trim().max(1000),
+  /** The checker's declaration, which categories 2 and 3 ask for. */
+  declared: z.boolean().default(false),
 });
-type Outcome = z.infer<typeof input>['outcome'];
 
-/** The checker agrees the sheet or returns it, and its originator is told. A sheet with an open correction is not agreed. */
+/** The checker agrees the sheet or returns it, and its originator is told. A sheet with something open is not agreed. */
 export async function concludeCheck(actor: Actor, raw: unknown): Promise<Result<null>> {
   requireRole(actor, 'checker');
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const { checkId, outcome, note } = parsed.data;
+  const { checkId, outcome, note, declared } = parsed.data;
   const { officeId } = actor;
   return inTransaction(actor, async (trx, record) => {
     const check = await checkById(trx, officeId, checkId, true);
@@ -33,8 +46,11 @@ export async function concludeCheck(actor: Actor, raw: unknown): Promise<Result<
     if (check.checker_id !== actor.personId) throw new NotAllowed('only its checker concludes a check');
     if (check.state === 'void') refuse('check-void', '', 'The sheet changed meanwhile: this check is void.');
     if (check.state !== 'open') refuse('check-closed', '', 'This check is closed already.');
-    requireGrounds(outcome, await marksOf(trx, officeId, checkId), note);
-    await closeCheck(trx, officeId, checkId, outcome, note, new Date());
+    const marks = await marksOf(trx, officeId, checkId);
+    if (outcome === 'agreed') await requireComplete(trx, check, r, marks, declared);
+    else requireReason(marks, note);
+    const declaration = declared && needsDeclaration(check.category) ? declarationWords : '';
+    await closeCheck(trx, officeId, checkId, outcome, { note, declaration, at: new Date() });
     const name = `${sheetName(r.sheet_number)} revision ${r.number}`;
     const originator = (await peopleOf(trx, officeId)).find((p) => p.id === r.originator_id);
     if (originator) {
@@ -51,12 +67,43 @@ export async function concludeCheck(actor: Actor, raw: unknown): Promise<Result<
   });
 }
 
-function requireGrounds(outcome: Outcome, marks: MarkRow[], note: string): void {
-  const open = marks.filter((m) => m.kind !== 'agrees' && m.answer === null).length;
-  if (outcome === 'agreed' && open > 0) {
-    const count = open === 1 ? 'One mark is' : `${open} marks are`;
-    refuse('marks-open', '', `${count} not answered. Return the sheet, or wait for the answers.`);
+/** What must be done before a sheet is agreed: marks settled, earlier corrections verified, inputs held, declaration made. */
+async function requireComplete(
+  trx: Knex,
+  check: CheckRow,
+  r: RevisionLine,
+  marks: readonly MarkRow[],
+  declared: boolean,
+): Promise<void> {
+  const open = marks.filter((m) => !isSettled(markState(m.kind, m.last_step))).length;
+  if (open > 0)
+    refuse(
+      'marks-open',
+      '',
+      `${open === 1 ? 'One mark is' : `${open} marks are`} not settled. Accept the answers, or return the sheet.`,
+    );
+  const before = (await unsettledBefore(trx, r.office_id, r.sheet_id, r.number)).length;
+  if (before > 0)
+    refuse(
+      'not-verified',
+      '',
+      `${before === 1 ? 'One mark' : `${before} marks`} of an earlier revision ${before === 1 ? 'is' : 'are'} not verified.`,
+    );
+  if (Number(check.inputs_asked) === 1) {
+    const held = new Set(marks.filter((m) => m.place === 'input').map((m) => m.line));
+    const left = listInputs(draft.parse(r.inputs)).filter((i) => !held.has(i.place)).length;
+    if (left > 0)
+      refuse(
+        'inputs-open',
+        '',
+        `${left === 1 ? 'One input is' : `${left} inputs are`} not held against a drawing yet.`,
+      );
   }
-  if (outcome === 'returned' && note === '' && marks.every((m) => m.kind === 'agrees'))
+  if (needsDeclaration(check.category) && !declared)
+    refuse('not-declared', 'declared', `Category ${check.category} asks for your declaration.`);
+}
+
+function requireReason(marks: readonly MarkRow[], note: string): void {
+  if (note === '' && marks.every((m) => m.kind === 'agrees'))
     refuse('no-reason', 'note', 'Say why the sheet goes back.');
 }

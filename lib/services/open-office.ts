@@ -24,6 +24,7 @@ export async function openOffice(actor: Actor) {
       name: p.name,
       email: p.email,
       initials: p.initials,
+      organisation: p.organisation,
       roles: role.array().parse(p.roles),
       active: Number(p.active) === 1,
       licences: licences

@@ -7,29 +7,33 @@ import { queueMail } from '@/db/queries/mails';
 import { peopleOf } from '@/db/queries/people';
 import { nextRevision, revisionById } from '@/db/queries/revisions';
 import { env } from '@/lib/env';
+import { categoryWords } from '@/lib/model/independence';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
+import { requireIndependence } from './require-independence';
 import { makers, requireRole } from './require-role';
 import { type Result, unread } from './result';
 import { NotFound, refuse } from './service-error';
 import { sheetName } from './sheet-state';
 
-/** Categories 0 to 3 of independence as in BS 5975 and CG 300: standard, another member, not involved, another organisation. */
 const input = z.object({
   revisionId: z.string().max(36),
   checkerId: z.string().min(1, 'Choose who checks.').max(36),
+  /** Of independence, as in lib/model/independence.ts. */
   category: z.coerce.number().int().min(0).max(3),
+  standardSolution: z.string().trim().max(200).default(''),
+  inputsAsked: z.boolean().default(false),
 });
 
 const already = 'This revision is with a checker already.';
 
-/** Gives the newest revision of a sheet to a checker who is not its originator. */
+/** Gives the newest revision of a sheet to a checker whom the category of independence admits. */
 export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ checkId: string }>> {
   requireRole(actor, ...makers);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const { revisionId, checkerId, category } = parsed.data;
+  const { revisionId, checkerId, category, standardSolution, inputsAsked } = parsed.data;
   const { officeId } = actor;
   return inTransaction(actor, async (trx, record) => {
     const r = await revisionById(trx, officeId, revisionId);
@@ -38,8 +42,7 @@ export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ 
     const checker = (await peopleOf(trx, officeId)).find((p) => p.id === checkerId);
     if (!checker?.roles.includes('checker') || Number(checker.active) !== 1)
       refuse('not-a-checker', 'checkerId', 'This person is not a checker of the office.');
-    if (checker.id === r.originator_id)
-      refuse('checker-is-originator', 'checkerId', 'The checker of a sheet is never its originator.');
+    await requireIndependence(trx, checker, r, { category, standardSolution });
     if (r.check_id) refuse('with-a-checker', '', already);
     if ((await nextRevision(trx, officeId, r.sheet_id)) !== r.number + 1)
       refuse('superseded', '', 'There is a newer revision of this sheet. Send that one.');
@@ -50,6 +53,10 @@ export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ 
       revision_id: r.id,
       checker_id: checker.id,
       category,
+      standard_solution: category === 0 ? standardSolution : '',
+      inputs_asked: inputsAsked ? 1 : 0,
+      blind: 0,
+      declaration: '',
       state: 'open',
       note: '',
       opened_at: new Date(),
@@ -63,7 +70,7 @@ export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ 
       officeId,
       recipient: checker.email,
       subject: `To check: ${name}, ${r.title}`,
-      body: `${checker.name},\n\n${actor.name} asks you to check ${name}, ${r.title}, category ${category}:\n\n${env().appUrl}/jobs/${r.job_id}/checks/${id}\n`,
+      body: `${checker.name},\n\n${actor.name} asks you to check ${name}, ${r.title}, ${categoryWords(category)}:\n\n${env().appUrl}/jobs/${r.job_id}/checks/${id}\n`,
     });
     const about = { digest: r.digest, jobId: r.job_id, aboutId: r.sheet_id };
     await record('sent to check', `${name} to ${checker.name}, category ${category}`, about);

@@ -72,6 +72,7 @@ export const doors: Door[] = [
     status: 404,
   },
   inJob('/checks/[check]', (f) => `/checks/${f.sent.checkId}`),
+  inJob('/checks/[check]/inputs', (f) => `/checks/${f.sent.checkId}/inputs`),
   inJob('/submittals/new', () => '/submittals/new', makers),
   inJob('/submittals/[submittal]', (f) => `/submittals/${f.sent.submittalId}`),
   inJob('/submittals/[submittal]/file', (f) => `/submittals/${f.sent.submittalId}/file`),

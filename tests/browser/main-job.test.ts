@@ -63,6 +63,7 @@ describe('the main job', () => {
     await page.waitForURL(/\/revisions\//);
     await expectAccessible(page);
     await page.getByLabel('Checker').selectOption({ label: 'Jonas Weir' });
+    await page.getByLabel(/Every input is held/).uncheck();
     await page.getByRole('button', { name: 'Send to check' }).click();
     await page.waitForURL(/\/checks\//);
     const checkUrl = page.url();

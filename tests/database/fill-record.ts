@@ -8,6 +8,7 @@ import { markLine } from '@/lib/services/mark-line';
 import { openRevision } from '@/lib/services/open-revision';
 import { openSubmittal } from '@/lib/services/open-submittal';
 import { sendToCheck } from '@/lib/services/send-to-check';
+import { settleMark } from '@/lib/services/settle-mark';
 import { makeJob, makeOffice, need, type Office } from './office-factory';
 import { frozenSheet } from './sheet-factory';
 import { draftedSubmittal, reviewLinkOf, sealSubmittal, sendTo } from './submittal-factory';
@@ -41,7 +42,8 @@ export async function fillRecord(): Promise<Filled> {
   need(await markLine(checker, { checkId, line: '2.1', kind: 'query', text: 'Which drawing is this from?' }));
   const markId = (await openRevision(engineer, revisionId)).marks[0]?.id as string;
   need(await answerMark(engineer, { markId, answer: 'From A-201.' }));
-  need(await concludeCheck(checker, { checkId, outcome: 'agreed', note: '' }));
+  need(await settleMark(checker, { markId, outcome: 'accepted' }));
+  need(await concludeCheck(checker, { checkId, outcome: 'agreed', note: '', declared: true }));
   const submittalId = await draftedSubmittal(office, jobId, [revisionId]);
   await sealSubmittal(office, submittalId);
   const link = await reviewLinkOf(await sendTo(office, submittalId));

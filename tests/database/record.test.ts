@@ -12,6 +12,7 @@ import { openJob } from '@/lib/services/open-job';
 import { openSheet } from '@/lib/services/open-sheet';
 import { sendToCheck } from '@/lib/services/send-to-check';
 import { NotAllowed, NotFound } from '@/lib/services/service-error';
+import { settleMark } from '@/lib/services/settle-mark';
 import { verifyAudit } from '@/lib/services/verify-audit';
 import { makeJob, makeOffice, need } from './office-factory';
 import { checkedSheet, frozenSheet, makeSheet, proppedDraft } from './sheet-factory';
@@ -128,6 +129,7 @@ describe('checking', () => {
     expect((await concludeCheck(checker, { checkId, outcome: 'agreed', note: '' })).ok).toBe(false);
     const [mark] = await database()('marks').where({ check_id: checkId });
     need(await answerMark(engineer, { markId: mark.id, answer: 'The drawing was revised; 6.00 m stands.' }));
+    need(await settleMark(checker, { markId: mark.id, outcome: 'accepted' }));
     expect((await concludeCheck(checker, { checkId, outcome: 'agreed', note: '' })).ok).toBe(true);
     expect((await concludeCheck(checker, { checkId, outcome: 'returned', note: 'again' })).ok).toBe(false);
   });

@@ -40,8 +40,10 @@ import { revokeReview } from '@/lib/services/revoke-review';
 import { sendSubmittal } from '@/lib/services/send-submittal';
 import { sendToCheck } from '@/lib/services/send-to-check';
 import { setJobState } from '@/lib/services/set-job-state';
+import { settleMark } from '@/lib/services/settle-mark';
 import { signOutEverywhere } from '@/lib/services/sign-out-everywhere';
 import { verifyAudit } from '@/lib/services/verify-audit';
+import { verifyCorrection } from '@/lib/services/verify-correction';
 import { verifyRevision } from '@/lib/services/verify-revision';
 import { withdrawLicence } from '@/lib/services/withdraw-licence';
 import type { Filled } from './fill-record';
@@ -184,8 +186,14 @@ export const verbs: Verb[] = [
     }),
   ),
   on(setJobState, leaders, (a, f) => setJobState(a, { jobId: f.jobId, state: 'closed' })),
+  on(settleMark, ['checker'], (a, f) =>
+    settleMark(a, { markId: f.sent.markId, outcome: 'reopened', text: 'x' }),
+  ),
   on(signOutEverywhere, everyone, (a) => signOutEverywhere(a), makes),
   on(verifyAudit, everyone, (a) => verifyAudit(a), reads),
   on(verifyRevision, everyone, (a, f) => verifyRevision(a, f.sent.revisionId)),
+  on(verifyCorrection, ['checker'], (a, f) =>
+    verifyCorrection(a, { checkId: f.sent.checkId, markId: f.sent.markId, outcome: 'verified' }),
+  ),
   on(withdrawLicence, ['administrator'], (a) => withdrawLicence(a, { licenceId: 'not-there' })),
 ];

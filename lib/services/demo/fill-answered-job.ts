@@ -36,7 +36,12 @@ export async function fillAnsweredJob(jobId: string, people: DemoPeople): Promis
   const sheetId = await addSheet(engineer, jobId, first.title, first, 'made sheet');
   const { revisionId, checkId } = await freezeAndSend(people, sheetId, 'First issue, for permit.');
   need(
-    await concludeCheck(checker, { checkId, outcome: 'agreed', note: 'Loads and spans held against A-110.' }),
+    await concludeCheck(checker, {
+      checkId,
+      outcome: 'agreed',
+      note: 'Loads and spans held against A-110.',
+      declared: true,
+    }),
   );
 
   const made = need(

@@ -10,7 +10,13 @@ import { withdrawLicence } from '@/lib/services/withdraw-licence';
 export async function submitPerson(personId: string, _: FormState, form: FormData): Promise<FormState> {
   const actor = await requireActor();
   const active = form.get('account') === 'open';
-  const change = { personId, name: form.get('name'), initials: form.get('initials'), active };
+  const change = {
+    personId,
+    name: form.get('name'),
+    initials: form.get('initials'),
+    organisation: form.get('organisation') ?? '',
+    active,
+  };
   const changed = await orRefuse(changePerson(actor, { ...change, roles: form.getAll('roles') }));
   if (!changed.ok) return afterRefusal(changed, form);
   revalidatePath('/office', 'layout');

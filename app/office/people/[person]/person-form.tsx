@@ -11,7 +11,7 @@ import { RolePicks } from '../../role-picks';
 
 interface Props {
   action: (state: FormState, form: FormData) => Promise<FormState>;
-  person: { name: string; initials: string; roles: Role[]; active: boolean };
+  person: { name: string; initials: string; roles: Role[]; organisation: string; active: boolean };
 }
 
 const accounts = [
@@ -34,6 +34,14 @@ export function PersonForm({ action, person }: Props) {
           initial={person.initials}
           maxLength={4}
           required
+        />
+        <TextField
+          name="organisation"
+          label="Organisation"
+          state={state}
+          initial={person.organisation}
+          maxLength={120}
+          note="Only for a checker of another organisation; blank means this office."
         />
         <RolePicks state={state} initial={person.roles} />
         <ChoiceField

@@ -7,6 +7,8 @@ import { answerMark } from '@/lib/services/answer-mark';
 import { concludeCheck } from '@/lib/services/conclude-check';
 import { markLine } from '@/lib/services/mark-line';
 import type { Result } from '@/lib/services/result';
+import { settleMark } from '@/lib/services/settle-mark';
+import { verifyCorrection } from '@/lib/services/verify-correction';
 
 function after(result: Result<null>, form: FormData, path: string, words: string): FormState {
   if (!result.ok) return afterRefusal(result, form);
@@ -36,7 +38,14 @@ export async function conclude(
   const outcome = form.get('outcome');
   const words = outcome === 'agreed' ? 'The sheet is agreed.' : 'The sheet goes back to its originator.';
   return after(
-    await orRefuse(concludeCheck(actor, { checkId, outcome, note: form.get('note') ?? '' })),
+    await orRefuse(
+      concludeCheck(actor, {
+        checkId,
+        outcome,
+        note: form.get('note') ?? '',
+        declared: form.get('declared') === 'yes',
+      }),
+    ),
     form,
     path,
     words,
@@ -56,4 +65,50 @@ export async function answer(
     path,
     'The answer is recorded.',
   );
+}
+
+export async function settle(
+  path: string,
+  markId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const outcome = form.get('outcome');
+  const words = outcome === 'accepted' ? 'The answer is accepted.' : 'The mark is open again.';
+  const settled = await orRefuse(settleMark(actor, { markId, outcome, text: form.get('text') ?? '' }));
+  return after(settled, form, path, words);
+}
+
+export async function verify(
+  path: string,
+  checkId: string,
+  markId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const outcome = form.get('outcome');
+  const words = outcome === 'verified' ? 'The correction is verified.' : 'The mark is carried on.';
+  return after(await orRefuse(verifyCorrection(actor, { checkId, markId, outcome })), form, path, words);
+}
+
+/** The checker's mark at an input: agrees with a drawing, correct this, or query. */
+export async function markInput(
+  path: string,
+  checkId: string,
+  place: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const mark = {
+    checkId,
+    place: 'input',
+    line: place,
+    kind: form.get('kind'),
+    drawing: form.get('drawing') ?? '',
+    text: form.get('text') ?? '',
+  };
+  return after(await orRefuse(markLine(actor, mark)), form, path, 'Marked.');
 }

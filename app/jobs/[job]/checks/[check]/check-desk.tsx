@@ -1,50 +1,55 @@
 'use client';
 
 import { useState } from 'react';
-import type { FormState } from '@/app/components/form-state';
 import { LinePicker } from '@/app/components/line-picker';
 import { ReadingPage } from '@/app/components/reading-page';
 import type { Block } from '@/templates/block';
 import { SheetView } from '@/templates/screen/sheet-view';
+import type { CheckMark, EarlierMark, FormAction, MarkAction } from './check-mark';
 import { ConcludeForm } from './conclude-form';
+import { EarlierMarks } from './earlier-marks';
+import { InputsLink } from './inputs-link';
 import { LineMark } from './line-mark';
 import { MarkForm } from './mark-form';
 import { MarkList } from './mark-list';
 import { useCheckKeys } from './use-check-keys';
 
-export interface CheckMark {
-  id: string;
-  line: string;
-  kind: 'agrees' | 'correct' | 'query';
-  text: string;
-  answer: string | null;
-}
-
 export type MarkDraft = Pick<CheckMark, 'kind' | 'text'>;
-
-export type FormAction = (state: FormState, form: FormData) => Promise<FormState>;
 
 interface Props {
   title: string;
   blocks: Block[];
-  check: { state: 'open' | 'agreed' | 'returned' | 'void'; mine: boolean; checker: string; note: string };
+  check: {
+    state: 'open' | 'agreed' | 'returned' | 'void';
+    mine: boolean;
+    checker: string;
+    category: number;
+    note: string;
+    declaration: string;
+  };
   marks: CheckMark[];
+  earlier: EarlierMark[];
+  /** Where the inputs are held against drawings, and how many there are. */
+  inputs: { href: string; all: number; asked: boolean };
   onMark: FormAction;
   onConclude: FormAction;
-  onAnswer: (markId: string, state: FormState, form: FormData) => Promise<FormState>;
+  onAnswer: MarkAction;
+  onSettle: MarkAction;
+  onVerify: MarkAction;
   mayAnswer: boolean;
 }
 
 const noMark = { kind: 'agrees', text: '' } as const;
 
 /** Lines to go through one by one: J and K move, A agrees, C corrects, Q asks. */
-export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onAnswer, mayAnswer }: Props) {
+export function CheckDesk(props: Props) {
+  const { title, blocks, check, marks, earlier, inputs } = props;
   const lines = blocks.map((b) => b.id);
   const [line, setLine] = useState(lines[0] ?? '');
   // What is being written at each line, so that moving on and coming back loses nothing.
   const [drafts, setDrafts] = useState<Record<string, MarkDraft>>({});
   const working = check.mine && check.state === 'open';
-  const draft = drafts[line] ?? marks.find((m) => m.line === line) ?? noMark;
+  const draft = drafts[line] ?? atLine(marks, line) ?? noMark;
   const write = (part: Partial<MarkDraft>) =>
     setDrafts((all) => ({ ...all, [line]: { kind: draft.kind, text: draft.text, ...part } }));
   const go = (to: string | undefined) => {
@@ -60,11 +65,7 @@ export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onA
       on={working ? line : undefined}
       wideMargin
       marks={(block) => (
-        <LineMark
-          line={block.id}
-          mark={marks.find((m) => m.line === block.id)}
-          onPick={working ? setLine : undefined}
-        />
+        <LineMark line={block.id} mark={atLine(marks, block.id)} onPick={working ? setLine : undefined} />
       )}
     />
   );
@@ -77,10 +78,13 @@ export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onA
       <aside className="frozenside">
         <p>{sentence(check)}</p>
         {check.note === '' ? null : <p>{check.note}</p>}
+        {check.declaration === '' ? null : <p className="ans">Declared: {check.declaration}</p>}
+        <InputsLink {...inputs} marks={marks} />
+        <EarlierMarks marks={earlier} onVerify={working ? props.onVerify : undefined} />
         {working ? (
           <>
             <MarkForm
-              action={onMark}
+              action={props.onMark}
               line={line}
               draft={draft}
               onWrite={write}
@@ -90,20 +94,23 @@ export function CheckDesk({ title, blocks, check, marks, onMark, onConclude, onA
               }
             />
             <p className="ans">
-              {new Set(marks.map((m) => m.line)).size} of {lines.length} lines marked.
+              {marks.filter((m) => m.place === 'line').length} of {lines.length} lines marked.
             </p>
-            <ConcludeForm action={onConclude} />
+            <ConcludeForm action={props.onConclude} category={check.category} />
           </>
         ) : null}
         <MarkList
           marks={marks}
-          mayAnswer={mayAnswer && (check.state === 'open' || check.state === 'returned')}
-          onAnswer={onAnswer}
+          mayAnswer={props.mayAnswer && (check.state === 'open' || check.state === 'returned')}
+          onAnswer={props.onAnswer}
+          onSettle={working ? props.onSettle : undefined}
         />
       </aside>
     </div>
   );
 }
+
+const atLine = (marks: CheckMark[], line: string) => marks.find((m) => m.place === 'line' && m.line === line);
 
 function sentence(check: Props['check']): string {
   switch (check.state) {

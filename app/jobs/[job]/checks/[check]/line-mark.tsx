@@ -1,5 +1,5 @@
 import { StatusMark } from '@/app/components/status-mark';
-import type { CheckMark } from './check-desk';
+import type { CheckMark } from './check-mark';
 
 interface Props {
   line: string;

@@ -5,7 +5,8 @@ import { FormMessage } from '@/app/components/form-message';
 import { type FormState, messageAt, untouched } from '@/app/components/form-state';
 import { keepTyped } from '@/app/components/keep-typed';
 import { StatusMark } from '@/app/components/status-mark';
-import type { CheckMark, FormAction, MarkDraft } from './check-desk';
+import type { MarkDraft } from './check-desk';
+import type { CheckMark, FormAction } from './check-mark';
 
 const kinds: { kind: CheckMark['kind']; key: string; asks: string }[] = [
   { kind: 'agrees', key: 'A', asks: 'Remark, if any' },

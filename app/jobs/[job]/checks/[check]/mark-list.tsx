@@ -1,21 +1,20 @@
 'use client';
 
-import { useActionState } from 'react';
-import { FormMessage } from '@/app/components/form-message';
-import { type FormState, untouched } from '@/app/components/form-state';
 import { StatusMark } from '@/app/components/status-mark';
-import { SubmitButton } from '@/app/components/submit-button';
-import { TextField } from '@/app/components/text-field';
-import type { CheckMark } from './check-desk';
+import { type CheckMark, type MarkAction, stateShape } from './check-mark';
+import { MarkAnswer } from './mark-answer';
+import { SettleForm } from './settle-form';
 
 interface Props {
   marks: CheckMark[];
   mayAnswer: boolean;
-  onAnswer: (markId: string, state: FormState, form: FormData) => Promise<FormState>;
+  onAnswer: MarkAction;
+  /** The checker's word on an answer; absent for everyone else. */
+  onSettle?: MarkAction;
 }
 
-/** Every mark with its answer; the originator answers here. */
-export function MarkList({ marks, mayAnswer, onAnswer }: Props) {
+/** Every mark with all that was said about it. The originator answers here, the checker accepts or opens again. */
+export function MarkList({ marks, mayAnswer, onAnswer, onSettle }: Props) {
   if (marks.length === 0) return <p className="ans">No marks yet.</p>;
   return (
     <section>
@@ -23,32 +22,31 @@ export function MarkList({ marks, mayAnswer, onAnswer }: Props) {
       <ol className="marklist">
         {marks.map((m) => (
           <li key={m.id}>
-            <StatusMark mark={m.kind} /> line {m.line}
+            <StatusMark mark={m.kind} /> {m.where}
+            {m.drawing === '' ? null : <span className="ans">, {m.drawing}</span>}
+            {m.state === 'agrees' ? null : (
+              <span className="markstate">
+                <StatusMark {...stateShape[m.state]} />
+              </span>
+            )}
             {m.text === '' ? null : <p>{m.text}</p>}
-            {m.answer === null ? null : <p>Answer: {m.answer}</p>}
-            {m.answer === null && mayAnswer && m.kind !== 'agrees' ? (
-              <MarkAnswer action={onAnswer.bind(null, m.id)} line={m.line} />
+            {m.steps.map((s) => (
+              <p key={`${s.kind} ${s.at} ${s.text}`} className="markstep">
+                {s.text === '' ? null : <>{s.text} </>}
+                <span className="ans">
+                  {s.kind === 'agrees' ? '' : stateShape[s.kind].word}, {s.by}, {s.at}
+                </span>
+              </p>
+            ))}
+            {mayAnswer && (m.state === 'open' || m.state === 'reopened') ? (
+              <MarkAnswer action={onAnswer.bind(null, m.id)} where={m.where} />
+            ) : null}
+            {onSettle && m.state === 'answered' ? (
+              <SettleForm action={onSettle.bind(null, m.id)} where={m.where} />
             ) : null}
           </li>
         ))}
       </ol>
     </section>
-  );
-}
-
-function MarkAnswer({
-  action,
-  line,
-}: {
-  action: (state: FormState, form: FormData) => Promise<FormState>;
-  line: string;
-}) {
-  const [state, send] = useActionState(action, untouched);
-  return (
-    <form action={send} aria-label={`Answer at line ${line}`}>
-      <TextField name="answer" label={`Answer at line ${line}`} state={state} lines={2} maxLength={1000} />
-      <FormMessage state={state} />
-      <SubmitButton small>Record the answer</SubmitButton>
-    </form>
   );
 }

@@ -1,10 +1,11 @@
 import type { Metadata } from 'next';
 import { Page } from '@/app/components/page-layout';
 import { orRefuse, requireActor } from '@/app/session';
+import { categoryWords } from '@/lib/model/independence';
 import { openCheck } from '@/lib/services/open-check';
-import { NotFound } from '@/lib/services/service-error';
-import { answer, conclude, leaveMark } from './actions';
+import { answer, conclude, leaveMark, settle, verify } from './actions';
 import { CheckDesk } from './check-desk';
+import { showMarks } from './show-marks';
 import '../../revisions/[revision]/revision.css';
 
 interface Props {
@@ -17,8 +18,7 @@ export const metadata: Metadata = { title: 'Check' };
 export default async function CheckPage({ params }: Props) {
   const actor = await requireActor();
   const { check: id } = await params;
-  const { job, revision, blocks, check, marks } = await orRefuse(openCheck(actor, id));
-  if (!check) throw new NotFound(`check ${id}`);
+  const { job, revision, blocks, check, marks, earlier, inputs } = await orRefuse(openCheck(actor, id));
   const path = `/jobs/${job.id}/checks/${id}`;
   return (
     <Page
@@ -40,23 +40,21 @@ export default async function CheckPage({ params }: Props) {
         revision.sheet,
         `rev ${revision.number}`,
         `checker ${check.checker}`,
-        `category ${check.category}`,
+        categoryWords(check.category),
       ]}
     >
       <CheckDesk
         title={`${revision.sheet} ${revision.title}, revision ${revision.number}`}
         blocks={blocks}
-        check={{ state: check.state, mine: check.mine, checker: check.checker ?? '', note: check.note }}
-        marks={marks.map(({ id: markId, line, kind, text, answer: given }) => ({
-          id: markId,
-          line,
-          kind,
-          text,
-          answer: given,
-        }))}
+        check={{ ...check, checker: check.checker ?? '' }}
+        marks={showMarks(marks, actor.zone)}
+        earlier={earlier}
+        inputs={{ href: `${path}/inputs`, all: inputs.length, asked: check.inputsAsked }}
         onMark={leaveMark.bind(null, path, id)}
         onConclude={conclude.bind(null, path, id)}
         onAnswer={answer.bind(null, path)}
+        onSettle={settle.bind(null, path)}
+        onVerify={verify.bind(null, path, id)}
         mayAnswer={revision.originatorId === actor.personId}
       />
     </Page>

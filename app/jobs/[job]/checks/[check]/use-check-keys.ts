@@ -1,7 +1,7 @@
 'use client';
 
 import { useEffect } from 'react';
-import type { CheckMark } from './check-desk';
+import type { CheckMark } from './check-mark';
 
 const kinds: Record<string, CheckMark['kind']> = { a: 'agrees', c: 'correct', q: 'query' };
 const steps: Record<string, number> = { j: 1, arrowdown: 1, k: -1, arrowup: -1 };

@@ -19,6 +19,8 @@ export async function giveToChecker(
       revisionId,
       checkerId: form.get('checkerId') ?? '',
       category: form.get('category'),
+      standardSolution: form.get('standardSolution') ?? '',
+      inputsAsked: form.get('inputsAsked') === 'yes',
     }),
   );
   if (!given.ok) return afterRefusal(given, form);
