@@ -14,11 +14,23 @@ export interface MailRow {
   server_words: string;
   next_try: Date;
   claimed_at: Date | null;
+  /** Whether the sealed file of its submittal goes with it. */
+  attached: number;
+  /** The review link it carries. */
+  link_id: string | null;
 }
 
 export async function queueMail(
   trx: Knex,
-  m: { officeId: string; submittalId?: string; recipient: string; subject: string; body: string },
+  m: {
+    officeId: string;
+    submittalId?: string;
+    recipient: string;
+    subject: string;
+    body: string;
+    attached?: boolean;
+    linkId?: string;
+  },
 ): Promise<void> {
   await trx('mails').insert({
     id: randomUUID(),
@@ -29,6 +41,8 @@ export async function queueMail(
     body: m.body,
     state: 'queued',
     next_try: new Date(),
+    attached: m.attached ?? false,
+    link_id: m.linkId ?? null,
   });
 }
 
@@ -72,4 +86,16 @@ export async function settleMail(
 
 export async function mailsOfSubmittal(db: Knex, officeId: string, submittalId: string): Promise<MailRow[]> {
   return db('mails').where({ office_id: officeId, submittal_id: submittalId }).orderBy('next_try');
+}
+
+export async function mailById(db: Knex, officeId: string, id: string): Promise<MailRow | undefined> {
+  return db('mails').where({ office_id: officeId, id }).first();
+}
+
+/** Queues a letter again that was refused, with all its tries before it. Answers whether it was refused. */
+export async function requeueMail(trx: Knex, officeId: string, id: string, at: Date): Promise<boolean> {
+  const queued = await trx('mails')
+    .where({ office_id: officeId, id, state: 'refused' })
+    .update({ state: 'queued', attempts: 0, next_try: at });
+  return queued === 1;
 }

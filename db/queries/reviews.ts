@@ -32,14 +32,16 @@ export async function noteOpened(trx: Knex, id: string, at: Date): Promise<numbe
   return trx('review_links').where({ id }).whereNull('opened_at').update({ opened_at: at });
 }
 
+/** Revokes the links of a submittal that still stand, or one of them. */
 export async function revokeLinks(
   trx: Knex,
   officeId: string,
   submittalId: string,
   at: Date,
+  linkId?: string,
 ): Promise<number> {
   return trx('review_links')
-    .where({ office_id: officeId, submittal_id: submittalId })
+    .where({ office_id: officeId, submittal_id: submittalId, ...(linkId ? { id: linkId } : {}) })
     .whereNull('revoked_at')
     .update({ revoked_at: at });
 }

@@ -135,11 +135,29 @@ export async function dropPreparedSeals(trx: Knex, officeId: string, submittalId
   await trx('prepared_seals').where({ office_id: officeId, submittal_id: submittalId }).delete();
 }
 
+export interface TransmittalRow {
+  id: string;
+  office_id: string;
+  job_id: string;
+  submittal_id: string;
+  number: number;
+  recipient: string;
+  contents: string;
+  /** What the authority is asked to do. */
+  action: string;
+  /** The authority's list, each line ticked off before sending. */
+  seen_to: string[];
+  /** Whether the sealed file went with the letter. */
+  attached: boolean;
+  sent_by: string;
+  sent_at: Date;
+}
+
 export async function transmittalsOf(
   db: Knex,
   officeId: string,
   submittalId: string,
-): Promise<{ id: string; number: number; recipient: string; contents: string; sent_at: Date }[]> {
+): Promise<TransmittalRow[]> {
   return db('transmittals').where({ office_id: officeId, submittal_id: submittalId }).orderBy('number');
 }
 
@@ -152,19 +170,6 @@ export async function nextTransmittal(trx: Knex, officeId: string, jobId: string
   return row?.n === null || row?.n === undefined ? 1 : Number(row.n) + 1;
 }
 
-export async function insertTransmittal(
-  trx: Knex,
-  row: {
-    id: string;
-    office_id: string;
-    job_id: string;
-    submittal_id: string;
-    number: number;
-    recipient: string;
-    contents: string;
-    sent_by: string;
-    sent_at: Date;
-  },
-): Promise<void> {
-  await trx('transmittals').insert(row);
+export async function insertTransmittal(trx: Knex, row: TransmittalRow): Promise<void> {
+  await trx('transmittals').insert({ ...row, seen_to: JSON.stringify(row.seen_to) });
 }

@@ -1,6 +1,7 @@
 // server only
 import { database } from '@/db/connection';
-import { claimMail, settleMail } from '@/db/queries/mails';
+import { claimMail, type MailRow, settleMail } from '@/db/queries/mails';
+import { fileOf, submittalById } from '@/db/queries/submittals';
 import { log } from '@/lib/log';
 import { isRefusedForGood, sendMail } from '@/lib/mail/send-mail';
 
@@ -25,6 +26,7 @@ export async function deliverMail(): Promise<boolean> {
       to: mail.recipient,
       subject: mail.subject,
       text: mail.body,
+      attachment: await attachmentOf(mail),
     });
     await settle({ state: 'accepted', words });
   } catch (error) {
@@ -35,4 +37,13 @@ export async function deliverMail(): Promise<boolean> {
     else await settle({ state: 'queued', words, nextTry: new Date(Date.now() + wait * 60_000) });
   }
   return true;
+}
+
+/** The sealed file that goes with a letter. */
+async function attachmentOf(mail: MailRow) {
+  if (!Number(mail.attached) || !mail.submittal_id) return undefined;
+  const submittal = await submittalById(database(), mail.office_id, mail.submittal_id);
+  const file = await fileOf(database(), mail.office_id, mail.submittal_id, 'sealed');
+  if (!submittal || !file) throw new Error(`letter ${mail.id} has no sealed file to go with it`);
+  return { filename: `submittal-${submittal.number}.pdf`, content: file.bytes };
 }

@@ -12,6 +12,7 @@ import {
 import { revisionsOfSubmittal } from '@/db/queries/revisions';
 import { fileOf, submittalById } from '@/db/queries/submittals';
 import { blocks } from '@/templates/block';
+import { changesSince, sayChange } from './changes-since';
 import { inTransaction } from './in-transaction';
 import { allowAttempt } from './limit-attempts';
 import { reviewer } from './reviewer';
@@ -52,6 +53,7 @@ export async function openReview(link: ReviewLinkRow) {
   }
   const authority = job.authority_id ? await authorityById(db, link.office_id, job.authority_id) : undefined;
   const revisions = await revisionsOfSubmittal(db, link.office_id, link.submittal_id);
+  const changes = await changesSince(db, submittal, revisions);
   const file = await fileOf(db, link.office_id, link.submittal_id, 'sealed');
   return {
     job: { number: job.number, title: job.title },
@@ -67,6 +69,7 @@ export async function openReview(link: ReviewLinkRow) {
       number: sheetName(r.sheet_number),
       title: r.title,
       revision: r.number,
+      change: sayChange(changes, r.id),
       blocks: blocks.parse(r.blocks),
     })),
     comments: await commentsOf(db, link.office_id, link.submittal_id),

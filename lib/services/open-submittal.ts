@@ -7,6 +7,8 @@ import { commentsOf, decisionOf, reviewLinksOf } from '@/db/queries/reviews';
 import { revisionsOfSubmittal } from '@/db/queries/revisions';
 import { fileOf, submittalById, transmittalsOf } from '@/db/queries/submittals';
 import type { Actor } from './actor';
+import { blockingComments, sayBlocking } from './blocking-comments';
+import { changesSince, sayChange } from './changes-since';
 import { everyone, requireRole } from './require-role';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
@@ -21,6 +23,8 @@ export async function openSubmittal(actor: Actor, id: string) {
   if (!submittal || !job) throw new NotFound(`submittal ${id}`);
   const file = (await fileOf(db, officeId, id, 'sealed')) ?? (await fileOf(db, officeId, id, 'unsigned'));
   if (!file) throw new Error(`submittal ${id} has no file`);
+  const revisions = await revisionsOfSubmittal(db, officeId, id);
+  const changes = await changesSince(db, submittal, revisions);
   const authority = job.authority_id ? await authorityById(db, officeId, job.authority_id) : undefined;
   const mine = (await licencesOf(db, officeId))
     .filter((l) => l.person_id === actor.personId && l.jurisdiction === job.jurisdiction)
@@ -39,7 +43,7 @@ export async function openSubmittal(actor: Actor, id: string) {
       /** Whether the actor is the engineer of record named on its cover. */
       mine: submittal.engineer_id === actor.personId,
     },
-    sheets: (await revisionsOfSubmittal(db, officeId, id)).map((r) => ({
+    sheets: revisions.map((r) => ({
       revisionId: r.id,
       number: sheetName(r.sheet_number),
       title: r.title,
@@ -48,7 +52,12 @@ export async function openSubmittal(actor: Actor, id: string) {
       originator: r.originator,
       checker: r.checker,
       checkedAt: r.checked_at,
+      /** Flagged when it is new or changed since the last submittal that was sent. */
+      change: sayChange(changes, r.id),
     })),
+    leftOut: changes.leftOut.map((r) => `${sheetName(r.sheet_number)} ${r.title}`),
+    /** Why it cannot go out yet. */
+    blocked: sayBlocking(await blockingComments(db, submittal)),
     file: {
       kind: file.kind,
       sha256: file.sha256,
@@ -56,7 +65,13 @@ export async function openSubmittal(actor: Actor, id: string) {
       signedBy: file.signed_by,
       madeAt: file.made_at,
     },
-    authority: authority && { name: authority.name, reviewer: authority.reviewer, email: authority.email },
+    authority: authority && {
+      name: authority.name,
+      reviewer: authority.reviewer,
+      email: authority.email,
+      wish: authority.wish,
+      checklist: authority.checklist,
+    },
     licence: mine && {
       id: mine.id,
       number: mine.number,
@@ -67,6 +82,7 @@ export async function openSubmittal(actor: Actor, id: string) {
     transmittals: await transmittalsOf(db, officeId, id),
     mails: await mailsOfSubmittal(db, officeId, id),
     links: (await reviewLinksOf(db, officeId, id)).map((l) => ({
+      id: l.id,
       reviewer: l.reviewer,
       email: l.email,
       expiresAt: l.expires_at,

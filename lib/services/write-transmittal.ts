@@ -12,6 +12,11 @@ export interface Sending {
   number: number;
   /** One sheet a line. */
   contents: string;
+  /** What the reviewer is asked to do. */
+  action: string;
+  /** Whether the sealed file goes with the letter, or would if it were not too large. */
+  attached: boolean;
+  tooLarge: boolean;
   reviewer: string;
   token: string;
   expires: Date;
@@ -19,7 +24,7 @@ export interface Sending {
 
 /** The letter that a submittal goes out with; the record stands behind its link. */
 export function writeTransmittal(actor: Actor, sending: Sending): { subject: string; body: string } {
-  const { job, submittal, number, contents, reviewer, token, expires } = sending;
+  const { job, submittal, number, contents, action, attached, tooLarge, reviewer, token, expires } = sending;
   const lines = [
     `${reviewer},`,
     '',
@@ -27,6 +32,10 @@ export function writeTransmittal(actor: Actor, sending: Sending): { subject: str
     '',
     contents,
     ...(submittal.remarks === '' ? [] : ['', submittal.remarks]),
+    '',
+    `What we ask of you: ${action}`,
+    ...(attached ? ['', 'The sealed package is attached.'] : []),
+    ...(tooLarge ? ['', 'The sealed package is too large to be attached; the link opens it.'] : []),
     '',
     'Read it, comment on its lines and record your decision here; no account is needed:',
     `${env().appUrl}/review/${token}`,

@@ -25,6 +25,8 @@ export interface Filled {
     markId: string;
     submittalId: string;
     commentId: string;
+    /** The letter with the link. */
+    mailId: string;
     link: ReviewLinkRow;
   };
 }
@@ -49,12 +51,13 @@ export async function fillRecord(): Promise<Filled> {
   const link = await reviewLinkOf(await sendTo(office, submittalId));
   need(await commentOnReview(link, { revisionId, line: '2.1', text: 'Name the drawing.', code: '' }));
   const commentId = (await openSubmittal(engineer, submittalId)).comments[0]?.id as string;
+  const mailId = (await openSubmittal(engineer, submittalId)).mails[0]?.id as string;
   need(await answerComment(engineer, { commentId, answer: 'It is A-201.', place: 'S-02.1' }));
   need(await decideReview(link, { words: 'Approved' }));
   return {
     office,
     jobId,
     frozen,
-    sent: { sheetId, revisionId, checkId, markId, submittalId, commentId, link },
+    sent: { sheetId, revisionId, checkId, markId, submittalId, commentId, mailId, link },
   };
 }

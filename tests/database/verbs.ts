@@ -34,6 +34,7 @@ import { prepareSeal } from '@/lib/services/prepare-seal';
 import { listApiTokens } from '@/lib/services/read-api-token';
 import { readAudit } from '@/lib/services/read-audit';
 import { readPreparedFile, readSubmittalFile } from '@/lib/services/read-file';
+import { resendLetter } from '@/lib/services/resend-letter';
 import { restoreRevision } from '@/lib/services/restore-revision';
 import { revokeApiToken } from '@/lib/services/revoke-api-token';
 import { revokeReview } from '@/lib/services/revoke-review';
@@ -173,6 +174,7 @@ export const verbs: Verb[] = [
   on(readPreparedFile, ['engineer-of-record'], (a) => readPreparedFile(a, 'not-there')),
   on(readSubmittalFile, everyone, (a, f) => readSubmittalFile(a, f.sent.submittalId)),
   on(restoreRevision, makers, (a, f) => restoreRevision(a, { revisionId: f.sent.revisionId })),
+  on(resendLetter, makers, (a, f) => resendLetter(a, { mailId: f.sent.mailId })),
   on(revokeApiToken, makers, (a) => revokeApiToken(a, { id: '0'.repeat(64) })),
   on(revokeReview, makers, (a, f) => revokeReview(a, { submittalId: f.sent.submittalId })),
   on(sendSubmittal, makers, (a, f) =>

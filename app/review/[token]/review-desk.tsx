@@ -30,7 +30,15 @@ export type SettleAction = (commentId: string, state: FormState, form: FormData)
 interface Props {
   purpose: string;
   remarks: string;
-  sheets: { revisionId: string; number: string; title: string; revision: number; blocks: Block[] }[];
+  sheets: {
+    revisionId: string;
+    number: string;
+    title: string;
+    revision: number;
+    /** Flagged when new or changed since the last submittal. */
+    change: string;
+    blocks: Block[];
+  }[];
   comments: ReviewComment[];
   /** Comments on earlier submittals of the job, for the back-check. */
   earlier: ReviewComment[];
@@ -76,6 +84,7 @@ export function ReviewDesk({
           <section key={s.revisionId} id={s.number} className="leaf" aria-label={`${s.number} ${s.title}`}>
             <h2 className="leafhead">
               {s.number} {s.title} <span className="text-ink3">revision {s.revision}</span>
+              {s.change === '' ? null : <em className="ml-3">{s.change}</em>}
             </h2>
             <LinePicker onPick={decision ? ignore : (line) => setPlace({ revisionId: s.revisionId, line })}>
               <SheetView

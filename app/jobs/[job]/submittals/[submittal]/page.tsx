@@ -2,11 +2,10 @@ import type { Metadata } from 'next';
 import Link from 'next/link';
 import { Page } from '@/app/components/page-layout';
 import { sayDate, sayMoment } from '@/app/components/say-date';
-import { SubmitButton } from '@/app/components/submit-button';
 import { orRefuse, requireActor } from '@/app/session';
 import { openSubmittal } from '@/lib/services/open-submittal';
 import { makers } from '@/lib/services/require-role';
-import { answer, revoke, send } from './actions';
+import { answer, resend, revoke, send } from './actions';
 import { CommentList } from './comment-list';
 import { Delivery } from './delivery';
 import { SendForm } from './send-form';
@@ -23,8 +22,8 @@ export const metadata: Metadata = { title: 'Submittal' };
 export default async function SubmittalPage({ params }: Props) {
   const actor = await requireActor();
   const { submittal: id } = await params;
-  const { job, submittal, sheets, file, authority, transmittals, mails, links, comments, decision } =
-    await orRefuse(openSubmittal(actor, id));
+  const opened = await orRefuse(openSubmittal(actor, id));
+  const { job, submittal, sheets, leftOut, file, authority, comments, decision, blocked } = opened;
   const mayMake = actor.roles.some((r) => makers.includes(r));
   const path = `/jobs/${job.id}/submittals/${id}`;
   return (
@@ -82,6 +81,7 @@ export default async function SubmittalPage({ params }: Props) {
             )
           ) : null}
           <SheetTable jobId={job.id} sheets={sheets} zone={actor.zone} />
+          {leftOut.length > 0 ? <p>Left out since the last submittal: {leftOut.join('; ')}.</p> : null}
         </section>
         {submittal.state === 'void' ? (
           <p className="message e">This submittal is void: {submittal.voidReason}. Gather a new one.</p>
@@ -89,17 +89,22 @@ export default async function SubmittalPage({ params }: Props) {
         {submittal.state === 'drafted' || submittal.state === 'void' ? null : (
           <section>
             <h2>Delivery</h2>
-            <Delivery transmittals={transmittals} mails={mails} links={links} zone={actor.zone} />
-            {mayMake && links.some((l) => !l.revokedAt) ? (
-              <form action={revoke.bind(null, path, id)} className="row">
-                <SubmitButton tone="plain">Revoke the links</SubmitButton>
-              </form>
-            ) : null}
-            {mayMake ? (
+            <Delivery
+              opened={opened}
+              zone={actor.zone}
+              resend={mayMake ? resend.bind(null, path) : undefined}
+              revoke={mayMake ? revoke.bind(null, path, id) : undefined}
+            />
+            {blocked ? (
+              <p className="message e">{blocked}</p>
+            ) : mayMake ? (
               <SendForm
                 action={send.bind(null, path, id)}
                 reviewer={authority?.reviewer ?? ''}
                 email={authority?.email ?? ''}
+                checklist={authority?.checklist ?? []}
+                wish={authority?.wish ?? 'link'}
+                again={opened.transmittals.length > 0}
               />
             ) : null}
           </section>

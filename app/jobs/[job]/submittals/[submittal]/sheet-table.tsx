@@ -29,6 +29,7 @@ export function SheetTable({ jobId, sheets, zone }: Props) {
                 <Link className="t" href={`/jobs/${jobId}/revisions/${s.revisionId}`}>
                   {s.number} {s.title}
                 </Link>
+                {s.change === '' ? null : <em className="block">{s.change}</em>}
               </td>
               <td>{s.revision}</td>
               <td>{s.originator}</td>
