@@ -18,7 +18,7 @@ export function ContentsReport({ contents }: { contents: Verified['contents'] })
       <p className="i2">
         {contents.job.number} {contents.job.title}, submittal {contents.submittal}
       </p>
-      <ReadingPage className="scroller" label="Sheets solved again" focusable>
+      <ReadingPage className="scrollx" label="Sheets solved again" focusable>
         <table className="rl">
           <thead>
             <tr>

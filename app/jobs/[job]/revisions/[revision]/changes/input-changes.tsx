@@ -11,7 +11,7 @@ interface Props {
 export function InputChanges({ inputs, before, after }: Props) {
   if (inputs.length === 0) return <p className="i2">Every input is as it was.</p>;
   return (
-    <ReadingPage className="scroller" label="Inputs that changed" focusable>
+    <ReadingPage className="scrollx" label="Inputs that changed" focusable>
       <table className="rl changes">
         <thead>
           <tr>

@@ -24,7 +24,7 @@ export function ValueChanges({ values, before, after }: Props) {
     return <p className="i2">All {values.length} reactions and greatest moments are as they were.</p>;
   const same = values.length - moved.length;
   return (
-    <ReadingPage className="scroller" label="Results that changed" focusable>
+    <ReadingPage className="scrollx" label="Results that changed" focusable>
       <table className="rl changes">
         <thead>
           <tr>
