@@ -36,6 +36,8 @@ export interface Solution {
   envelopes: Envelope[];
   displacements: DisplacementResult[];
   checks: Check[];
+  /** The redundants of the second solution that checks the first, where it was asked for. */
+  other?: { redundants: Quantity[]; condition: number };
 }
 
 export interface Determinacy {

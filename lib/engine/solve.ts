@@ -2,7 +2,8 @@ import { type Analysis, analysis as schema } from '@/lib/model/analysis';
 import type { Quantity } from '@/lib/model/quantity';
 import type { Refusal } from '@/lib/model/refusal';
 import { assembleCases } from './assemble-cases';
-import { checkSolution } from './check-solution';
+import { checkOtherRedundants } from './checks/check-other-redundants';
+import { checkSolution } from './checks/check-solution';
 import { combineResults } from './combinations/combine-results';
 import { envelopes } from './combinations/envelopes';
 import { askedDisplacements } from './force-method/asked-displacements';
@@ -22,15 +23,20 @@ import type { Equilibrium } from './statics/equilibrium';
 import { validate } from './validate';
 
 /** Version of the engine, frozen with every revision. Raised whenever a result or a written step could change. */
-export const engineVersion = '1.0.0';
+export const engineVersion = '1.1.0';
 
 const refused = (refusal: Refusal): Outcome<never> => ({ ok: false, refusal });
+
+export interface SolveOptions {
+  /** Solves once more with other redundants, as a check of the first, where there are no more than 30; takes about as long again. */
+  otherRedundants?: boolean;
+}
 
 /**
  * The one public entry. Takes the versioned JSON form (lib/model/analysis.ts) and answers everything the engine found, or
  * a refusal with a code, a sentence and a place. Nothing a caller can mend is thrown; no answer holds NaN or Infinity.
  */
-export function solve(input: unknown): Outcome<Solution> {
+export function solve(input: unknown, options: SolveOptions = {}): Outcome<Solution> {
   const heavy = refuseForm(input);
   if (heavy) return refused(heavy);
   const parsed = schema.safeParse(input);
@@ -44,10 +50,10 @@ export function solve(input: unknown): Outcome<Solution> {
     });
   }
   const fault = validate(parsed.data);
-  return fault ? refused(fault) : solveValid(parsed.data);
+  return fault ? refused(fault) : solveValid(parsed.data, options);
 }
 
-function solveValid(analysis: Analysis): Outcome<Solution> {
+function solveValid(analysis: Analysis, options: SolveOptions): Outcome<Solution> {
   const { reference, eq, proposed } = layGround(analysis);
   const unstable = refuseUnstable(eq, proposed) ?? refuseCoupleOnHinge(eq);
   if (unstable) return refused(unstable);
@@ -63,7 +69,8 @@ function solveValid(analysis: Analysis): Outcome<Solution> {
   const open = refuseOpenAxial(eq, basis, solved);
   if (open) return refused(open);
   const cases = assembleCases(eq, basis, solved, reference);
-  const checks = checkSolution(eq, solved, cases, reference.EI0);
+  const other = options.otherRedundants ? checkOtherRedundants(eq, basis, solved, reference.EI0) : undefined;
+  const checks = [...checkSolution(eq, solved, cases, reference.EI0), ...(other?.checks ?? [])];
   const failed = checks.find((c) => !c.holds);
   if (failed) return refused(checkFailed(failed.subject, failed.case));
   const combinations = combineResults(analysis, cases);
@@ -85,6 +92,7 @@ function solveValid(analysis: Analysis): Outcome<Solution> {
       envelopes: envelopes(analysis, combinations),
       displacements: askedDisplacements(eq, basis, solved, reference),
       checks,
+      other: other && { redundants: other.redundants, condition: other.condition },
     },
   };
 }

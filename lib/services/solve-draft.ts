@@ -22,7 +22,8 @@ export function solveDraft(draft: Draft): SolvedDraft {
   const analysis = analysisSchema.parse(read.analysis);
   const set = draft.combinationSet === '' ? undefined : findSet(draft.combinationSet);
   const published = set ? combine(analysis.cases, set) : [];
-  const solved = solve({ ...analysis, combinations: joinCombinations(published, analysis.combinations) });
+  const combinations = joinCombinations(published, analysis.combinations);
+  const solved = solve({ ...analysis, combinations }, { otherRedundants: true });
   if (!solved.ok) return { ok: false, errors: [], refusal: solved.refusal };
   return {
     ok: true,

@@ -5,7 +5,7 @@ import { quantityTex } from '@/lib/typeset/quantity-tex';
 import { substitutionTex } from '@/lib/typeset/write-expression';
 import type { Scene } from './scene';
 import type { StepWriter } from './step-writer';
-import { plain } from './words';
+import { listWords, plain } from './words';
 import { writeWork } from './work-block';
 import { inline, sumTex } from './write-lines';
 
@@ -16,6 +16,9 @@ const subjects: Record<Check['kind'], string> = {
   gap: 'every gap, integrated again from the final diagrams',
   'other-redundants': 'the same forces from other redundants',
 };
+
+/** Redundants named in one sentence. */
+const named = 8;
 
 /** Step 15: one table first, then what can be worked by hand. */
 export function composeChecks(step: ChecksStep, out: StepWriter, scene: Scene): void {
@@ -43,7 +46,14 @@ export function composeChecks(step: ChecksStep, out: StepWriter, scene: Scene): 
       ],
     })),
   });
-  const { equilibrium, gap } = step;
+  const { equilibrium, gap, other } = step;
+  if (other) {
+    const some = other.redundants.slice(0, named).map(inline);
+    const more = other.redundants.length > named ? ` and ${other.redundants.length - named} more` : '';
+    out.paragraph(
+      `**Other redundants.** The structure was solved once more with ${listWords(some)}${more} released in place of the forces of step 4. Its equations are others (condition number $${other.condition.toPrecision(2)}$); the forces are the same to the residuals above.`,
+    );
+  }
   if (equilibrium) {
     const fresh = equilibrium.used ? '' : ', which no equation of step 5 used';
     const rows = equilibrium.lines.map(({ sum, relation }) => ({

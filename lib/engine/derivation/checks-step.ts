@@ -18,6 +18,8 @@ import { type WorkTable, workTable } from './work-table';
 export interface ChecksStep {
   kind: 'checks';
   checks: readonly Check[];
+  /** The redundants of the second solution, where there is one, and the condition of their equations. */
+  other?: { redundants: SymbolName[]; condition: number };
   /** The whole structure under its first case, with moments about a point not used before. */
   equilibrium?: { id: string; about: Joint; used: boolean; lines: { sum: Sum; relation: Relation }[] };
   /** The gap at X_1, integrated again from the final moments. */
@@ -27,7 +29,17 @@ export interface ChecksStep {
 type Sum = Extract<StaticsLine, { kind: 'equation' }>['sum'];
 
 export function deriveChecks(ctx: Context): ChecksStep {
-  return { kind: 'checks', checks: ctx.solution.checks, equilibrium: equilibriumOf(ctx), gap: gapOf(ctx) };
+  const { checks, other } = ctx.solution;
+  return {
+    kind: 'checks',
+    checks,
+    other: other && {
+      redundants: other.redundants.map((q) => ctx.names.quantity(q)),
+      condition: other.condition,
+    },
+    equilibrium: equilibriumOf(ctx),
+    gap: gapOf(ctx),
+  };
 }
 
 /** Written for structures whose terms still fit on a few lines. */
