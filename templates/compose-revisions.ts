@@ -1,4 +1,5 @@
 import type { Block } from './block';
+import { plain } from './plain-text';
 
 export interface RevisedSheet {
   number: string;
@@ -30,9 +31,4 @@ export function composeRevisions(sheets: readonly RevisedSheet[]): Block[] {
       note: 'A line that changed after the first issue bears a triangle in the margin with the number of the revision in which it last changed.',
     },
   ];
-}
-
-/** A sentence that a person typed, as rich text: its dollar signs and stars are only that. */
-function plain(text: string): string {
-  return text.replaceAll('$', '\\$').replaceAll('**', '* *');
 }

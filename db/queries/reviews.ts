@@ -154,3 +154,32 @@ export async function insertDecision(
 ): Promise<void> {
   await trx('decisions').insert(row);
 }
+
+export interface RegisterRow extends CommentLine {
+  submittal: number;
+  sheet: number | null;
+  revision: number | null;
+  decision: string | null;
+}
+
+/** Every comment on any submittal of a job with the sheet and revision it is about and the decision of its round. */
+export async function commentRegister(db: Knex, officeId: string, jobId: string): Promise<RegisterRow[]> {
+  return commentLines(db)
+    .join('submittals as s', 's.id', 'c.submittal_id')
+    .leftJoin('revisions as r', 'r.id', 'c.revision_id')
+    .leftJoin('sheets as t', 't.id', 'r.sheet_id')
+    .leftJoin('decisions as d', 'd.submittal_id', 's.id')
+    .where({ 'c.office_id': officeId, 's.job_id': jobId })
+    .orderBy(['s.number', 'c.number'])
+    .select('s.number as submittal', 't.number as sheet', 'r.number as revision', 'd.words as decision');
+}
+
+/** All that was said under the comments of a job, in order. */
+export async function responsesOfJob(db: Knex, officeId: string, jobId: string): Promise<ResponseRow[]> {
+  return db('responses as p')
+    .join('comments as c', 'c.id', 'p.comment_id')
+    .join('submittals as s', 's.id', 'c.submittal_id')
+    .where({ 'p.office_id': officeId, 's.job_id': jobId })
+    .orderBy('p.id')
+    .select('p.*');
+}

@@ -14,6 +14,7 @@ import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
 import { packageHistory } from './package-history';
 import { type PackageRequest, printPackage } from './print-package';
+import { registerOfJob } from './register-of-job';
 import { makers, requireRole } from './require-role';
 import { type Result, unread } from './result';
 import { NotFound, refuse } from './service-error';
@@ -68,6 +69,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
           revisions.map((r) => r.checker),
         ),
         history: await packageHistory(trx, officeId, jobId, revisions),
+        comments: await registerOfJob(trx, officeId, jobId),
       },
       revisions,
     );

@@ -4,6 +4,7 @@ import type { JobRow } from '@/db/queries/jobs';
 import type { RevisionLine } from '@/db/queries/revisions';
 import { env } from '@/lib/env';
 import { blocks } from '@/templates/block';
+import { type AnsweredComment, composeResponses } from '@/templates/compose-responses';
 import { composeRevisions } from '@/templates/compose-revisions';
 import type { PrintedPackage } from '@/templates/paper/package-print';
 import { renderPackage } from '@/templates/paper/render-package';
@@ -22,6 +23,8 @@ export interface PackageRequest {
   checkers: { name: string; initials: string }[];
   /** Of each revision, in their order. */
   history: readonly RevisionPast[];
+  /** Comments of the rounds before, with their answers. */
+  comments?: readonly AnsweredComment[];
 }
 
 const day = (date: Date) => date.toISOString().slice(0, 10);
@@ -81,12 +84,15 @@ export async function printPackage(
       checker: r.checker && r.checked_at ? { initials: r.checker, date: day(r.checked_at) } : undefined,
       digest: shortDigest(r.digest),
     })),
-    closing: composeRevisions(
-      revisions.map((r, i) => ({
-        number: sheetName(r.sheet_number),
-        revisions: (request.history[i]?.revisions ?? []).map((p) => ({ ...p, date: day(p.frozenAt) })),
-      })),
-    ),
+    closing: [
+      ...composeResponses(request.comments ?? []),
+      ...composeRevisions(
+        revisions.map((r, i) => ({
+          number: sheetName(r.sheet_number),
+          revisions: (request.history[i]?.revisions ?? []).map((p) => ({ ...p, date: day(p.frozenAt) })),
+        })),
+      ),
+    ],
     seal: { on: 'cover', covers: revisions.map((r) => sheetName(r.sheet_number)).join(', ') },
     verifyAt: `${env().appUrl}/verify`,
     data: { name: packageFileName, description: 'Inputs and results of every sheet', bytes },

@@ -24,6 +24,7 @@ import { markLine } from '@/lib/services/mark-line';
 import { myWork } from '@/lib/services/my-work';
 import { nameJobPeople } from '@/lib/services/name-job-people';
 import { openCheck } from '@/lib/services/open-check';
+import { openComments } from '@/lib/services/open-comments';
 import { openDraftVersion } from '@/lib/services/open-draft-version';
 import { openJob } from '@/lib/services/open-job';
 import { openOffice } from '@/lib/services/open-office';
@@ -31,6 +32,7 @@ import { openRevision } from '@/lib/services/open-revision';
 import { openSheet } from '@/lib/services/open-sheet';
 import { openSubmittal } from '@/lib/services/open-submittal';
 import { prepareSeal } from '@/lib/services/prepare-seal';
+import { printResponses } from '@/lib/services/print-responses';
 import { listApiTokens } from '@/lib/services/read-api-token';
 import { readAudit } from '@/lib/services/read-audit';
 import { readPreparedFile, readSubmittalFile } from '@/lib/services/read-file';
@@ -163,6 +165,7 @@ export const verbs: Verb[] = [
   on(myWork, everyone, (a) => myWork(a), reads),
   on(nameJobPeople, leaders, (a, f) => nameJobPeople(a, { jobId: f.jobId, part: 'checker', personIds: [] })),
   on(openCheck, everyone, (a, f) => openCheck(a, f.sent.checkId)),
+  on(openComments, everyone, (a, f) => openComments(a, f.jobId)),
   on(openDraftVersion, everyone, (a, f) => openDraftVersion(a, { sheetId: f.frozen.sheetId, version: 1 })),
   on(openJob, everyone, (a, f) => openJob(a, f.jobId)),
   on(openOffice, everyone, (a) => openOffice(a), reads),
@@ -170,6 +173,7 @@ export const verbs: Verb[] = [
   on(openSheet, everyone, (a, f) => openSheet(a, f.frozen.sheetId)),
   on(openSubmittal, everyone, (a, f) => openSubmittal(a, f.sent.submittalId)),
   on(prepareSeal, ['engineer-of-record'], (a, f) => prepareSeal(a, { submittalId: f.sent.submittalId })),
+  on(printResponses, everyone, (a, f) => printResponses(a, f.jobId)),
   on(readAudit, everyone, (a, f) => readAudit(a, { jobId: f.jobId }), reads),
   on(readPreparedFile, ['engineer-of-record'], (a) => readPreparedFile(a, 'not-there')),
   on(readSubmittalFile, everyone, (a, f) => readSubmittalFile(a, f.sent.submittalId)),

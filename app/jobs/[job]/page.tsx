@@ -71,6 +71,9 @@ export default async function JobPage({ params }: JobPageProps) {
           {people.length === 0
             ? 'Nobody is named for this job yet.'
             : people.map((p) => `${p.name}, ${p.part.replaceAll('-', ' ')}`).join('; ')}{' '}
+          <Link className="t" href={`/jobs/${job.id}/comments`}>
+            Comments
+          </Link>{' '}
           <Link className="t" href={`/jobs/${job.id}/record`}>
             Record
           </Link>{' '}

@@ -1,7 +1,9 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { forbidden } from 'next/navigation';
 import { Page } from '@/app/components/page-layout';
 import { orRefuse, requireActor } from '@/app/session';
+import { openComments } from '@/lib/services/open-comments';
 import { openJob } from '@/lib/services/open-job';
 import { makers } from '@/lib/services/require-role';
 import { gather } from './actions';
@@ -18,7 +20,10 @@ export default async function NewSubmittalPage({ params }: Props) {
   const actor = await requireActor();
   if (!actor.roles.some((r) => makers.includes(r))) forbidden();
   const { job: id } = await params;
-  const { job, sheets, submittals } = await orRefuse(openJob(actor, id));
+  const [{ job, sheets, submittals }, { comments }] = await orRefuse(
+    Promise.all([openJob(actor, id), openComments(actor, id)]),
+  );
+  const waits = comments.filter((c) => c.state === 'open' || c.state === 'reopened').length;
   const number = Math.max(0, ...submittals.map((s) => s.number)) + 1;
   return (
     <Page
@@ -34,6 +39,15 @@ export default async function NewSubmittalPage({ params }: Props) {
     >
       <div className="in">
         <h1>New submittal</h1>
+        {waits > 0 ? (
+          <p className="message">
+            {waits === 1 ? 'One comment is' : `${waits} comments are`} not answered yet. The package prints
+            the answers given so far, and is not sent before all are.{' '}
+            <Link className="t" href={`/jobs/${id}/comments`}>
+              To the comments
+            </Link>
+          </p>
+        ) : null}
         <GatherForm
           action={gather.bind(null, id)}
           sheets={sheets.map((s) => ({
