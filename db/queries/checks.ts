@@ -30,7 +30,8 @@ export interface MarkRow {
   check_id: string;
   /** The line or figure by its number, or the input by its place in words. */
   line: string;
-  place: 'line' | 'input';
+  /** A query of a checker who does not see the sheet is about the basis; its line says what about. */
+  place: 'line' | 'input' | 'basis';
   kind: 'agrees' | 'correct' | 'query';
   text: string;
   /** The drawing that an input was held against. */

@@ -12,9 +12,12 @@ export async function writersOfSheet(db: Knex, officeId: string, sheetId: string
   return [...new Set<string>([...kept, ...froze, ...made])];
 }
 
-/** Who wrote in any sheet of a job, or has a part in it other than checking. */
+/** Who wrote in any sheet of a job but one made for a check, or has a part in it other than checking. */
 export async function involvedInJob(db: Knex, officeId: string, jobId: string): Promise<string[]> {
-  const sheets: string[] = await db('sheets').where({ office_id: officeId, job_id: jobId }).pluck('id');
+  const sheets: string[] = await db('sheets')
+    .where({ office_id: officeId, job_id: jobId })
+    .whereNotIn('id', db('check_sheets').where({ office_id: officeId }).select('sheet_id'))
+    .pluck('id');
   const named: string[] = await db('job_people')
     .where({ office_id: officeId, job_id: jobId })
     .whereNot({ part: 'checker' })

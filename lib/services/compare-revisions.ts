@@ -9,6 +9,7 @@ import { blocks } from '@/templates/block';
 import { compareBlocks } from '@/templates/compare-blocks';
 import type { Actor } from './actor';
 import { everyone, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
 import { pairValues, resultValues } from './result-values';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
@@ -27,6 +28,7 @@ export async function compareRevisions(actor: Actor, raw: unknown) {
   const later = await revisionById(db, actor.officeId, revisionId);
   const job = later && (await jobById(db, actor.officeId, later.job_id));
   if (!later || !job) throw new NotFound(`revision ${revisionId}`);
+  await requireSeen(db, actor, [later.sheet_id]);
   const earlier = (await revisionsOfSheet(db, actor.officeId, later.sheet_id)).filter(
     (r) => r.number < later.number,
   );

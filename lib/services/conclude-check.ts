@@ -10,6 +10,7 @@ import {
   unsettledBefore,
 } from '@/db/queries/checks';
 import { queueMail } from '@/db/queries/mails';
+import { comparisonOf } from '@/db/queries/own-sheets';
 import { peopleOf } from '@/db/queries/people';
 import { type RevisionLine, revisionById } from '@/db/queries/revisions';
 import { env } from '@/lib/env';
@@ -99,6 +100,8 @@ async function requireComplete(
         `${left === 1 ? 'One input is' : `${left} inputs are`} not held against a drawing yet.`,
       );
   }
+  if (Number(check.blind) === 1 && !(await comparisonOf(trx, r.office_id, check.id)))
+    refuse('not-compared', '', 'Compare your own sheet with the designer’s first.');
   if (needsDeclaration(check.category) && !declared)
     refuse('not-declared', 'declared', `Category ${check.category} asks for your declaration.`);
 }

@@ -7,6 +7,7 @@ import { writeSheet } from './create-sheet';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
 import { type Result, unread } from './result';
 import { NotFound } from './service-error';
 
@@ -22,6 +23,7 @@ export async function copySheet(actor: Actor, raw: unknown): Promise<Result<{ id
     const sheet = await sheetById(trx, actor.officeId, sheetId);
     const kept = await newestDraft(trx, actor.officeId, sheetId);
     if (!sheet || !kept) throw new NotFound(`sheet ${sheetId}`);
+    await requireSeen(trx, actor, [sheetId]);
     await jobOpenToWork(trx, actor.officeId, sheet.job_id);
     const title = `${sheet.title.slice(0, 113)}, copy`;
     const draft = { ...draftSchema.parse(kept.body), title };

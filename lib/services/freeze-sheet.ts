@@ -10,6 +10,7 @@ import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
+import { requireWriter } from './require-writer';
 import { type Result, unread } from './result';
 import { revisionDigest } from './revision-digest';
 import { NotFound, refuse } from './service-error';
@@ -33,7 +34,7 @@ export async function freezeSheet(
   actor: Actor,
   raw: unknown,
 ): Promise<Result<{ revisionId: string; jobId: string }>> {
-  requireRole(actor, ...makers);
+  requireRole(actor, ...makers, 'checker');
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { sheetId, reason } = parsed.data;
@@ -42,6 +43,7 @@ export async function freezeSheet(
     const kept = await newestDraft(trx, officeId, sheetId, true);
     const sheet = await sheetById(trx, officeId, sheetId);
     if (!kept || !sheet) throw new NotFound(`sheet ${sheetId}`);
+    await requireWriter(trx, actor, sheetId);
     const job = await jobOpenToWork(trx, officeId, sheet.job_id);
     const inputs = draftSchema.parse(kept.body);
     const { results, blocks, engine } = solveOrRefuse(inputs);

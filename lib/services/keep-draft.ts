@@ -5,6 +5,7 @@ import { type Draft, draft as draftSchema } from '@/lib/model/draft';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { makers, requireRole } from './require-role';
+import { requireWriter } from './require-writer';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
 
@@ -19,13 +20,14 @@ export async function keepDraft(
   actor: Actor,
   raw: { sheetId: string; version: number; draft: Draft },
 ): Promise<KeptDraft> {
-  requireRole(actor, ...makers);
+  requireRole(actor, ...makers, 'checker');
   const { sheetId, version, draft } = input.parse(raw);
   const { officeId, personId } = actor;
   const kept = await inTransaction(actor, async (trx, record): Promise<KeptDraft> => {
     const newest = await newestDraft(trx, officeId, sheetId, true);
     const sheet = await sheetById(trx, officeId, sheetId);
     if (!newest || !sheet) throw new NotFound(`sheet ${sheetId}`);
+    await requireWriter(trx, actor, sheetId);
     const name = `${sheetName(sheet.number)} draft`;
     const about = { jobId: sheet.job_id, aboutId: sheetId };
     if (newest.version !== version) {

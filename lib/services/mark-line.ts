@@ -9,6 +9,7 @@ import { blocks } from '@/templates/block';
 import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { requireRole } from './require-role';
+import { isHidden } from './require-seen';
 import { type Result, unread } from './result';
 import { NotAllowed, NotFound, refuse } from './service-error';
 import { sheetName } from './sheet-state';
@@ -16,7 +17,7 @@ import { sheetName } from './sheet-state';
 const input = z
   .object({
     checkId: z.string().max(36),
-    place: z.enum(['line', 'input']).default('line'),
+    place: z.enum(['line', 'input', 'basis']).default('line'),
     line: z.string().min(1).max(250),
     drawing: z.string().trim().max(120).default(''),
     kind: z.enum(['agrees', 'correct', 'query']),
@@ -26,7 +27,11 @@ const input = z
     path: ['text'],
     message: 'Say what is to be corrected, or what you ask.',
   })
-  .refine((m) => m.place === 'line' || m.kind !== 'agrees' || m.drawing !== '', {
+  .refine((m) => m.place !== 'basis' || m.kind === 'query', {
+    path: ['kind'],
+    message: 'The basis is asked about; lines and inputs are marked.',
+  })
+  .refine((m) => m.place !== 'input' || m.kind !== 'agrees' || m.drawing !== '', {
     path: ['drawing'],
     message: 'Name the drawing that this input agrees with.',
   });
@@ -48,6 +53,8 @@ export async function markLine(actor: Actor, raw: unknown): Promise<Result<null>
     if (check.checker_id !== actor.personId) throw new NotAllowed('only its checker marks a sheet');
     if (check.state === 'void') refuse('check-void', '', 'The sheet changed meanwhile: this check is void.');
     if (check.state !== 'open') refuse('check-closed', '', 'This check is closed.');
+    if (place !== 'basis' && (await isHidden(trx, actor, [r.sheet_id])))
+      refuse('not-compared', '', 'Compare your own sheet first. Until then, ask about the basis.');
     requirePlace(r, place, line);
     const there = (await marksOf(trx, officeId, checkId)).find((m) => m.place === place && m.line === line);
     if (there?.last_step)
@@ -74,6 +81,7 @@ export async function markLine(actor: Actor, raw: unknown): Promise<Result<null>
 }
 
 function requirePlace(r: RevisionLine, place: MarkRow['place'], line: string): void {
+  if (place === 'basis') return;
   const there =
     place === 'line'
       ? blocks.parse(r.blocks).some((b) => b.id === line)

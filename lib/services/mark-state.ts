@@ -13,7 +13,7 @@ export function isSettled(state: MarkState): boolean {
   return state === 'agrees' || state === 'accepted' || state === 'verified' || state === 'carried';
 }
 
-/** "line 7.5", or the place of an input in words. */
+/** "line 7.5", the place of an input in words, or what of the basis is asked about. */
 export function markPlace({ place, line }: Pick<MarkRow, 'place' | 'line'>): string {
   return place === 'line' ? `line ${line}` : line;
 }

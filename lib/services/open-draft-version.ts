@@ -5,6 +5,7 @@ import { draftByVersion } from '@/db/queries/sheets';
 import { draft as draftSchema } from '@/lib/model/draft';
 import type { Actor } from './actor';
 import { everyone, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
 import { NotFound } from './service-error';
 
 const input = z.object({ sheetId: z.string().max(36), version: z.coerce.number().int().min(1) });
@@ -15,5 +16,6 @@ export async function openDraftVersion(actor: Actor, raw: unknown) {
   const { sheetId, version } = input.parse(raw);
   const row = await draftByVersion(database(), actor.officeId, sheetId, version);
   if (!row) throw new NotFound(`version ${version} of sheet ${sheetId}`);
+  await requireSeen(database(), actor, [sheetId]);
   return { version: row.version, keptAt: row.kept_at, by: row.name, draft: draftSchema.parse(row.body) };
 }

@@ -1,58 +1,14 @@
 // server only
 import { database } from '@/db/connection';
-import { checkById, marksOf } from '@/db/queries/checks';
-import { jobById } from '@/db/queries/jobs';
-import { peopleOf } from '@/db/queries/people';
-import { revisionById, revisionsOfSheet } from '@/db/queries/revisions';
-import { blocks } from '@/templates/block';
-import { lastChanged } from '@/templates/last-changed';
 import type { Actor } from './actor';
+import { readRevision } from './read-revision';
 import { everyone, requireRole } from './require-role';
-import { NotFound } from './service-error';
-import { sheetName } from './sheet-state';
+import { requireSeen } from './require-seen';
 
-/** A frozen revision as it stands on the page, with its check and marks, and who could check it. */
+/** A frozen revision, its check and marks; not for a checker who works without it. */
 export async function openRevision(actor: Actor, revisionId: string) {
   requireRole(actor, ...everyone);
-  const db = database();
-  const r = await revisionById(db, actor.officeId, revisionId);
-  const job = r && (await jobById(db, actor.officeId, r.job_id));
-  if (!r || !job) throw new NotFound(`revision ${revisionId}`);
-  const check = r.check_id ? await checkById(db, actor.officeId, r.check_id) : undefined;
-  const people = await peopleOf(db, actor.officeId);
-  const past = (await revisionsOfSheet(db, actor.officeId, r.sheet_id)).filter((o) => o.number <= r.number);
-  return {
-    job: { id: job.id, number: job.number, title: job.title },
-    revision: {
-      id: r.id,
-      sheetId: r.sheet_id,
-      sheet: sheetName(r.sheet_number),
-      title: r.title,
-      number: r.number,
-      reason: r.reason,
-      digest: r.digest,
-      engine: r.engine,
-      frozenAt: r.frozen_at,
-      originator: r.originator_name,
-      originatorId: r.originator_id,
-    },
-    blocks: blocks.parse(r.blocks),
-    /** Lines that changed after the first revision, each with the revision in which it last did. */
-    changedIn: [
-      ...lastChanged(past.reverse().map((p) => ({ number: p.number, blocks: blocks.parse(p.blocks) }))),
-    ],
-    check: check && {
-      id: check.id,
-      state: check.state,
-      category: check.category,
-      note: check.note,
-      mine: check.checker_id === actor.personId,
-      checker: people.find((p) => p.id === check.checker_id)?.name,
-      closedAt: check.closed_at,
-    },
-    marks: check ? await marksOf(db, actor.officeId, check.id) : [],
-    checkers: people
-      .filter((p) => p.roles.includes('checker') && p.id !== r.originator_id && Number(p.active) === 1)
-      .map((p) => ({ id: p.id, name: p.name })),
-  };
+  const opened = await readRevision(actor, revisionId);
+  await requireSeen(database(), actor, [opened.revision.sheetId]);
+  return opened;
 }

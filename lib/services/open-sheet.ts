@@ -6,6 +6,7 @@ import { newestDraft, sheetById } from '@/db/queries/sheets';
 import { draft as draftSchema } from '@/lib/model/draft';
 import type { Actor } from './actor';
 import { everyone, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
 
@@ -16,6 +17,7 @@ export async function openSheet(actor: Actor, sheetId: string) {
   const kept = await newestDraft(database(), actor.officeId, sheetId);
   const job = sheet && (await jobById(database(), actor.officeId, sheet.job_id));
   if (!sheet || !kept || !job) throw new NotFound(`sheet ${sheetId}`);
+  await requireSeen(database(), actor, [sheetId]);
   const revisions = await revisionsOfSheet(database(), actor.officeId, sheetId);
   return {
     job: { id: job.id, number: job.number, title: job.title },

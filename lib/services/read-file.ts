@@ -1,8 +1,10 @@
 // server only
 import { database } from '@/db/connection';
+import { revisionsOfSubmittal } from '@/db/queries/revisions';
 import { fileOf, preparedSealById } from '@/db/queries/submittals';
 import type { Actor } from './actor';
 import { everyone, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
 import { NotFound } from './service-error';
 
 /** The file of a submittal as it stands: sealed when it is sealed. */
@@ -13,6 +15,12 @@ export async function readSubmittalFile(actor: Actor, submittalId: string): Prom
     (await fileOf(db, actor.officeId, submittalId, 'sealed')) ??
     (await fileOf(db, actor.officeId, submittalId, 'unsigned'));
   if (!file) throw new NotFound(`file of ${submittalId}`);
+  const revisions = await revisionsOfSubmittal(db, actor.officeId, submittalId);
+  await requireSeen(
+    db,
+    actor,
+    revisions.map((r) => r.sheet_id),
+  );
   return file.bytes;
 }
 

@@ -8,6 +8,8 @@ import type { Actor } from './actor';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
+import { requireSeen } from './require-seen';
+import { requireWriter } from './require-writer';
 import { type Result, unread } from './result';
 import { NotFound } from './service-error';
 import { sheetName } from './sheet-state';
@@ -28,6 +30,8 @@ export async function restoreRevision(
   const body = draftSchema.parse(r.inputs);
   return inTransaction(actor, async (trx, record) => {
     await jobOpenToWork(trx, officeId, r.job_id);
+    await requireSeen(trx, actor, [r.sheet_id]);
+    await requireWriter(trx, actor, r.sheet_id);
     const newest = await newestDraft(trx, officeId, r.sheet_id, true);
     if (!newest) throw new NotFound(`draft of ${r.sheet_id}`);
     const version = newest.version + 1;

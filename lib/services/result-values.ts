@@ -57,14 +57,16 @@ function reactionWords(q: Quantity): string {
   return `reaction at ${q.joint} along ${q.component}`;
 }
 
-export interface ValuePair {
-  name: string;
-  unit: string;
-  before?: number;
-  after?: number;
+/** One value of two sheets side by side. */
+export const valuePair = z.object({
+  name: z.string(),
+  unit: z.string(),
+  before: z.number().optional(),
+  after: z.number().optional(),
   /** Change over the earlier value; absent where one side is missing or the earlier value is nothing beside the rest. */
-  change?: number;
-}
+  change: z.number().optional(),
+});
+export type ValuePair = z.infer<typeof valuePair>;
 
 /** Below this part of the greatest value of its unit, a value is rounding and no change is reckoned against it. */
 const nothing = 1e-9;

@@ -24,6 +24,8 @@ const input = z.object({
   category: z.coerce.number().int().min(0).max(3),
   standardSolution: z.string().trim().max(200).default(''),
   inputsAsked: z.boolean().default(false),
+  /** Whether the checker works without the sheet; categories 2 and 3 always do. */
+  blind: z.boolean().default(false),
 });
 
 const already = 'This revision is with a checker already.';
@@ -33,7 +35,7 @@ export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ 
   requireRole(actor, ...makers);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const { revisionId, checkerId, category, standardSolution, inputsAsked } = parsed.data;
+  const { revisionId, checkerId, category, standardSolution, inputsAsked, blind } = parsed.data;
   const { officeId } = actor;
   return inTransaction(actor, async (trx, record) => {
     const r = await revisionById(trx, officeId, revisionId);
@@ -55,7 +57,7 @@ export async function sendToCheck(actor: Actor, raw: unknown): Promise<Result<{ 
       category,
       standard_solution: category === 0 ? standardSolution : '',
       inputs_asked: inputsAsked ? 1 : 0,
-      blind: 0,
+      blind: blind || category >= 2 ? 1 : 0,
       declaration: '',
       state: 'open',
       note: '',

@@ -74,6 +74,7 @@ export const doors: Door[] = [
     status: 404,
   },
   inJob('/checks/[check]', (f) => `/checks/${f.sent.checkId}`),
+  { ...inJob('/checks/[check]/comparison', (f) => `/checks/${f.sent.checkId}/comparison`), status: 404 },
   inJob('/checks/[check]/inputs', (f) => `/checks/${f.sent.checkId}/inputs`),
   inJob('/submittals/new', () => '/submittals/new', makers),
   inJob('/submittals/[submittal]', (f) => `/submittals/${f.sent.submittalId}`),

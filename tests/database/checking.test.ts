@@ -37,8 +37,7 @@ afterAll(() => database().destroy());
 const codeOf = (result: Result<unknown>) => (result.ok ? 'done' : result.errors[0]?.code);
 const send = (more: object = {}) =>
   sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 1, ...more });
-const agree = (checkId: string, declared = false) =>
-  concludeCheck(checker, { checkId, outcome: 'agreed', note: '', declared });
+const agree = (checkId: string) => concludeCheck(checker, { checkId, outcome: 'agreed', note: '' });
 const correct = async (checkId: string, line = '2.1') => {
   need(await markLine(checker, { checkId, line, kind: 'correct', text: 'The span is 6.2 m.' }));
   const mark = (await openCheck(checker, checkId)).marks.find((m) => m.line === line);
@@ -90,15 +89,6 @@ describe('the category of independence', () => {
       }),
     );
     expect(codeOf(await send(ask))).toBe('done');
-  });
-
-  it('2 is agreed only with the declaration, which is kept', async () => {
-    const { checkId } = need(await send({ category: 2 }));
-    expect(codeOf(await agree(checkId))).toBe('not-declared');
-    expect(codeOf(await agree(checkId, true))).toBe('done');
-    expect((await openCheck(engineer, checkId)).check.declaration).toMatch(
-      /neither involved in nor consulted/,
-    );
   });
 });
 

@@ -39,13 +39,13 @@ export async function fillRecord(): Promise<Filled> {
   const frozen = await frozenSheet(office, jobId);
   const { sheetId, revisionId } = await frozenSheet(office, jobId);
   const { checkId } = need(
-    await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 2 }),
+    await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 1 }),
   );
   need(await markLine(checker, { checkId, line: '2.1', kind: 'query', text: 'Which drawing is this from?' }));
   const markId = (await openRevision(engineer, revisionId)).marks[0]?.id as string;
   need(await answerMark(engineer, { markId, answer: 'From A-201.' }));
   need(await settleMark(checker, { markId, outcome: 'accepted' }));
-  need(await concludeCheck(checker, { checkId, outcome: 'agreed', note: '', declared: true }));
+  need(await concludeCheck(checker, { checkId, outcome: 'agreed', note: '' }));
   const submittalId = await draftedSubmittal(office, jobId, [revisionId]);
   await sealSubmittal(office, submittalId);
   const link = await reviewLinkOf(await sendTo(office, submittalId));

@@ -2,9 +2,11 @@ import type { Actor, Role } from '@/lib/services/actor';
 import { addLicence } from '@/lib/services/add-licence';
 import { answerComment } from '@/lib/services/answer-comment';
 import { answerMark } from '@/lib/services/answer-mark';
+import { beginOwnSheet } from '@/lib/services/begin-own-sheet';
 import { changeOffice } from '@/lib/services/change-office';
 import { changePassword } from '@/lib/services/change-password';
 import { changePerson } from '@/lib/services/change-person';
+import { compareOwnSheet } from '@/lib/services/compare-own-sheet';
 import { compareRevisions } from '@/lib/services/compare-revisions';
 import { completeSeal } from '@/lib/services/complete-seal';
 import { concludeCheck } from '@/lib/services/conclude-check';
@@ -91,6 +93,8 @@ export const verbs: Verb[] = [
   ),
   on(addSheet, makers, (a, f) => addSheet(a, f.jobId, 'T', proppedDraft(), 'made sheet')),
   on(answerComment, makers, (a, f) => answerComment(a, { commentId: f.sent.commentId, answer: 'x' })),
+  on(beginOwnSheet, ['checker'], (a, f) => beginOwnSheet(a, { checkId: f.sent.checkId })),
+  on(compareOwnSheet, ['checker'], (a, f) => compareOwnSheet(a, { checkId: f.sent.checkId })),
   on(answerMark, makers, (a, f) => answerMark(a, { markId: f.sent.markId, answer: 'x' })),
   on(changeOffice, ['administrator'], (a) => changeOffice(a, { lateAfter: 10 }), makes),
   on(

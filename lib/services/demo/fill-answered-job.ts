@@ -40,7 +40,6 @@ export async function fillAnsweredJob(jobId: string, people: DemoPeople): Promis
       checkId,
       outcome: 'agreed',
       note: 'Loads and spans held against A-110.',
-      declared: true,
     }),
   );
 
@@ -93,7 +92,7 @@ async function freezeAndSend(
 ): Promise<{ revisionId: string; checkId: string }> {
   const { revisionId } = need(await freezeSheet(engineer, { sheetId, reason }));
   const { checkId } = need(
-    await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 2 }),
+    await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 1 }),
   );
   return { revisionId, checkId };
 }

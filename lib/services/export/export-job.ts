@@ -12,6 +12,7 @@ import { fileOf, submittalsOf } from '@/db/queries/submittals';
 import type { Actor } from '../actor';
 import { inTransaction } from '../in-transaction';
 import { makers, requireRole } from '../require-role';
+import { requireSeen } from '../require-seen';
 import { NotFound } from '../service-error';
 import { sheetName } from '../sheet-state';
 import { indexPage } from './index-page';
@@ -51,6 +52,11 @@ export async function exportJob(actor: Actor, jobId: string): Promise<Exported> 
   const job = await jobById(db, officeId, jobId);
   if (!job) throw new NotFound(`job ${jobId}`);
   const revisions = await revisionsOfJob(db, officeId, jobId);
+  await requireSeen(
+    db,
+    actor,
+    revisions.map((r) => r.sheet_id),
+  );
   const sheets = [...revisions.map(revisionFile), ...(await draftFiles(db, officeId, jobId))];
   const packages = await packageFiles(db, officeId, jobId);
   const registers = await registersOf(db, officeId, jobId, revisions);

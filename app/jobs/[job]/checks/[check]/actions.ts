@@ -1,9 +1,12 @@
 'use server';
 
 import { revalidatePath } from 'next/cache';
+import { redirect } from 'next/navigation';
 import { afterRefusal, type FormState } from '@/app/components/form-state';
 import { orRefuse, requireActor } from '@/app/session';
 import { answerMark } from '@/lib/services/answer-mark';
+import { beginOwnSheet } from '@/lib/services/begin-own-sheet';
+import { compareOwnSheet } from '@/lib/services/compare-own-sheet';
 import { concludeCheck } from '@/lib/services/conclude-check';
 import { markLine } from '@/lib/services/mark-line';
 import type { Result } from '@/lib/services/result';
@@ -91,6 +94,39 @@ export async function verify(
   const outcome = form.get('outcome');
   const words = outcome === 'verified' ? 'The correction is verified.' : 'The mark is carried on.';
   return after(await orRefuse(verifyCorrection(actor, { checkId, markId, outcome })), form, path, words);
+}
+
+/** Begins the checker's own sheet, and opens its desk. */
+export async function beginOwn(checkId: string, state: FormState): Promise<FormState> {
+  const actor = await requireActor();
+  const begun = await orRefuse(beginOwnSheet(actor, { checkId }));
+  if (!begun.ok) return { ...state, errors: begun.errors };
+  redirect(`/jobs/${begun.value.jobId}/sheets/${begun.value.sheetId}`);
+}
+
+export async function compareOwn(path: string, checkId: string, state: FormState): Promise<FormState> {
+  const actor = await requireActor();
+  const compared = await orRefuse(compareOwnSheet(actor, { checkId }));
+  if (!compared.ok) return { ...state, errors: compared.errors };
+  redirect(`${path}/comparison`);
+}
+
+/** A query about the basis, of a checker who does not see the sheet. */
+export async function askAboutBasis(
+  path: string,
+  checkId: string,
+  _state: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = await requireActor();
+  const query = {
+    checkId,
+    place: 'basis',
+    kind: 'query',
+    line: form.get('line') ?? '',
+    text: form.get('text') ?? '',
+  };
+  return after(await orRefuse(markLine(actor, query)), form, path, 'The query is in the schedule.');
 }
 
 /** The checker's mark at an input: agrees with a drawing, correct this, or query. */

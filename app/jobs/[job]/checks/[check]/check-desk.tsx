@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useState } from 'react';
 import { LinePicker } from '@/app/components/line-picker';
 import { ReadingPage } from '@/app/components/reading-page';
@@ -37,6 +38,8 @@ interface Props {
   onSettle: MarkAction;
   onVerify: MarkAction;
   mayAnswer: boolean;
+  /** Where the checker's own values stand beside the designer's. */
+  comparison?: string;
 }
 
 const noMark = { kind: 'agrees', text: '' } as const;
@@ -79,6 +82,13 @@ export function CheckDesk(props: Props) {
         <p>{sentence(check)}</p>
         {check.note === '' ? null : <p>{check.note}</p>}
         {check.declaration === '' ? null : <p className="ans">Declared: {check.declaration}</p>}
+        {props.comparison ? (
+          <p>
+            <Link className="t" href={props.comparison}>
+              The checker’s own values beside the designer’s
+            </Link>
+          </p>
+        ) : null}
         <InputsLink {...inputs} marks={marks} />
         <EarlierMarks marks={earlier} onVerify={working ? props.onVerify : undefined} />
         {working ? (

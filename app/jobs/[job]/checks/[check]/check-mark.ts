@@ -4,8 +4,8 @@ import type { Mark } from '@/app/components/status-mark';
 /** A mark as the screens of a check show it. */
 export interface CheckMark {
   id: string;
-  place: 'line' | 'input';
-  /** Number of the line, or the place of the input in words. */
+  place: 'line' | 'input' | 'basis';
+  /** Number of the line, or the place of the input in words, or what of the basis is asked about. */
   line: string;
   /** "line 7.5", or the place of the input. */
   where: string;

@@ -20,6 +20,7 @@ export async function giveToChecker(
       checkerId: form.get('checkerId') ?? '',
       category: form.get('category'),
       standardSolution: form.get('standardSolution') ?? '',
+      blind: form.get('blind') === 'yes',
       inputsAsked: form.get('inputsAsked') === 'yes',
     }),
   );

@@ -44,6 +44,17 @@ export function CheckForm({ action, checkers }: Props) {
       {category === '0' ? (
         <TextField name="standardSolution" label="Standard solution" state={state} maxLength={200} />
       ) : null}
+      {Number(category) >= 2 ? (
+        <p className="ans">
+          The checker works without this sheet: they derive their own, and the two are compared value by
+          value.
+        </p>
+      ) : (
+        <label className="declare">
+          <input type="checkbox" name="blind" value="yes" />
+          The checker works without this sheet, and derives their own.
+        </label>
+      )}
       <label className="declare">
         <input type="checkbox" name="inputsAsked" value="yes" defaultChecked />
         Every input is held against a drawing before the sheet is agreed.

@@ -1,5 +1,6 @@
 import { ReadingPage } from '@/app/components/reading-page';
 import type { ValuePair } from '@/lib/services/result-values';
+import { writeDifference, writeValue } from '@/templates/write-pair';
 
 interface Props {
   values: readonly ValuePair[];
@@ -7,19 +8,9 @@ interface Props {
   after: number;
 }
 
-const figures = new Intl.NumberFormat('en-US', { minimumFractionDigits: 3, maximumFractionDigits: 3 });
-const percent = new Intl.NumberFormat('en-US', {
-  style: 'percent',
-  minimumFractionDigits: 1,
-  maximumFractionDigits: 1,
-  signDisplay: 'exceptZero',
-});
-const write = (value: number | undefined) =>
-  value === undefined ? '–' : figures.format(Math.abs(value) < 5e-4 ? 0 : value).replace('-', '−');
-
 /** Results value by value. */
 export function ValueChanges({ values, before, after }: Props) {
-  const moved = values.filter((v) => write(v.before) !== write(v.after));
+  const moved = values.filter((v) => writeValue(v.before) !== writeValue(v.after));
   if (moved.length === 0)
     return <p className="i2">All {values.length} reactions and greatest moments are as they were.</p>;
   const same = values.length - moved.length;
@@ -46,11 +37,9 @@ export function ValueChanges({ values, before, after }: Props) {
             <tr key={`${v.name} ${v.unit}`}>
               <th scope="row">{v.name}</th>
               <td>{v.unit}</td>
-              <td className="r">{write(v.before)}</td>
-              <td className="r">{write(v.after)}</td>
-              <td className="r">
-                {v.change === undefined ? '–' : percent.format(v.change).replace('-', '−')}
-              </td>
+              <td className="r">{writeValue(v.before)}</td>
+              <td className="r">{writeValue(v.after)}</td>
+              <td className="r">{writeDifference(v.change)}</td>
             </tr>
           ))}
         </tbody>
