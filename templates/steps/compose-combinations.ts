@@ -1,4 +1,5 @@
-import type { CombinationsStep, CombinedRow } from '@/lib/engine/derivation/combinations-step';
+import type { CombinationsStep } from '@/lib/engine/derivation/combinations-step';
+import type { CombinedRow } from '@/lib/engine/derivation/combined-rows';
 import { drawDiagram } from '@/lib/figures/draw-diagram';
 import { drawEnvelope } from '@/lib/figures/draw-envelope';
 import { writeNumber } from '@/lib/figures/write-number';

@@ -58,6 +58,13 @@ export function lengthValue(ctx: Context, symbol: SymbolName | undefined, value:
   return { kind: 'value', symbol, value, dimension: dimensions.length, decimals };
 }
 
+/** A load of a case by its place in it. */
+export function loadAt(ctx: Context, id: string, index: number) {
+  const load = ctx.analysis.cases.find((c) => c.id === id)?.loads[index];
+  if (!load) throw new Error(`case ${id} has no load ${index}`);
+  return load;
+}
+
 /** Magnitude of a load as the load table has it. */
 export function loadValue(ctx: Context, id: string, index: number, part?: LoadPart, size?: number): Value {
   const found = ctx.loads.find(

@@ -1,9 +1,10 @@
 import { quantityKey } from '@/lib/model/quantity';
 import type { StaticsLine, StaticsTerm } from '../statics/statics-line';
+import { type Acting, symbolOf } from './acting';
 import type { Context } from './context';
 import { type Expression, negative, number, sum, type Value } from './expression';
 import type { Relation } from './relation';
-import { type Acting, type SignedTerm, signedTerm, symbolOf } from './statics-terms';
+import { type SignedTerm, signedTerm } from './statics-terms';
 import type { SymbolName } from './symbol-name';
 import type { EquationOfSet } from './together';
 

@@ -1,9 +1,9 @@
 import type { StaticsLine } from '../statics/statics-line';
+import { type Acting, figuresOf, sumFigures, symbolOf } from './acting';
 import type { Context } from './context';
 import { negative, number, quotient, sum } from './expression';
 import { type Relation, relate } from './relation';
 import { type StaticsStep, sameForce, type Written, writeEquation } from './statics-equation';
-import { type Acting, figuresOf, sumFigures, symbolOf } from './statics-terms';
 import { writeSet } from './together';
 
 /** The lines of one state of the primary structure; structures without an order give none. */

@@ -1,4 +1,5 @@
 import type { StaticsLine } from '../statics/statics-line';
+import { type Acting, figuresOf, sumFigures, symbolOf } from './acting';
 import type { Context } from './context';
 import { per } from './dimensions';
 import { type Expression, evaluate, negative, number, product, sum, type Value } from './expression';
@@ -6,7 +7,6 @@ import { exactDecimals } from './figure-plan';
 import { type Relation, relate } from './relation';
 import { solvePair } from './solve-pair';
 import { type StaticsStep, sameForce, type Written, writeEquation } from './statics-equation';
-import { type Acting, figuresOf, sumFigures, symbolOf } from './statics-terms';
 
 /** One of several equations that give their unknowns only together. */
 export interface EquationOfSet {

@@ -8,11 +8,11 @@ import { type LoadState, loadState } from '../statics/load-state';
 import { planStatics } from '../statics/plan-statics';
 import { writeStatics } from '../statics/write-statics';
 import { displacementRows } from './displacement-rows';
-import { settlementRow, springRow } from './flexibility';
 import { endForces, memberDiagram } from './member-state';
 import type { Reference } from './reference';
 import { type PrimaryBasis, primaryForces, writtenRedundants } from './self-stress';
 import type { SolvedCase, SolvedForces } from './solve-redundants';
+import { settlementRow, springRow } from './support-rows';
 import type { WorkRow } from './work';
 
 /**

@@ -1,8 +1,10 @@
 import type { Equilibrium } from '../statics/equilibrium';
 import { conditionOf } from './condition';
 import { type EnvelopeMatrix, envelopeMatrix, factorEnvelope } from './envelope-cholesky';
-import { flexibilityRows, type Springs, springs, type UnitState, unitState } from './flexibility';
+import { flexibilityRows } from './flexibility';
 import type { PrimaryBasis } from './self-stress';
+import { type Springs, springs } from './support-rows';
+import { type UnitState, unitState } from './unit-state';
 import type { WorkRow } from './work';
 
 /** EI0 f with its rows, its factor and its condition; the states it was worked from, in true forces. */

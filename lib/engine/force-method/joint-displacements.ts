@@ -2,10 +2,10 @@ import { between, integralOfProduct } from '../diagrams/piecewise';
 import type { PiecewisePolynomial } from '../diagrams/piecewise-polynomial';
 import type { Equilibrium } from '../statics/equilibrium';
 import { solveBasisTransposed } from '../statics/solve-lu';
-import type { Springs } from './flexibility';
 import type { memberDiagram } from './member-state';
 import type { PrimaryBasis } from './self-stress';
 import type { SolvedCase } from './solve-redundants';
+import type { Springs } from './support-rows';
 
 /**
  * Displacements of all joints from the deformations that the final forces cause: for every kept quantity its column of

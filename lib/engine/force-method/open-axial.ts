@@ -3,10 +3,10 @@ import { integralOfProduct } from '../diagrams/piecewise';
 import type { Bar, Equilibrium } from '../statics/equilibrium';
 import { listed } from '../statics/name-force';
 import { tolerance } from '../tolerance';
-import { unitState } from './flexibility';
 import { endForces, memberDiagram } from './member-state';
 import type { PrimaryBasis } from './self-stress';
 import type { SolvedCase, SolvedForces } from './solve-redundants';
+import { unitState } from './unit-state';
 
 /** Members whose axial force bending cannot determine: held lengthwise, and they do not stretch. */
 export function openMembers(eq: Equilibrium, basis: PrimaryBasis): string[] {

@@ -3,9 +3,10 @@ import { quantityKey } from '@/lib/model/quantity';
 import type { Equilibrium } from '../statics/equilibrium';
 import { type LoadState, loadState } from '../statics/load-state';
 import { solveEnvelope } from './envelope-cholesky';
-import { gapRows, type LoadedPrimary, loadedPrimary, type Movement } from './flexibility';
 import { type FlexibilityMatrix, flexibilityMatrix } from './flexibility-matrix';
+import { gapRows, type LoadedPrimary, loadedPrimary } from './gap-rows';
 import { addState, type PrimaryBasis, primaryForces } from './self-stress';
+import type { Movement } from './support-rows';
 import type { MomentPart, WorkRow } from './work';
 
 export interface SolvedCase {
