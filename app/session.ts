@@ -37,6 +37,27 @@ export async function leaveSession(): Promise<void> {
   jar.delete(cookieName);
 }
 
+const stepName = 'fairhand_step';
+
+/** Keeps the token of a sign-in that waits for its second step. */
+export async function keepStep(step: { token: string; expiresAt: Date }): Promise<void> {
+  (await cookies()).set(stepName, step.token, {
+    httpOnly: true,
+    sameSite: 'strict',
+    secure: env().appUrl.startsWith('https:'),
+    path: '/sign-in',
+    expires: step.expiresAt,
+  });
+}
+
+export async function readStep(): Promise<string | undefined> {
+  return (await cookies()).get(stepName)?.value;
+}
+
+export async function leaveStep(): Promise<void> {
+  (await cookies()).delete({ name: stepName, path: '/sign-in' });
+}
+
 /** The address a request comes from, as the nearest proxy says it; only for counting attempts. */
 export async function requestAddress(): Promise<string> {
   const list = await headers();

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { Hung } from '../components/ledger';
 import { Page } from '../components/page-layout';
 import { roleWords } from '../office/role-words';
@@ -35,6 +36,15 @@ export default async function AccountPage() {
         <h2>Password</h2>
         <p className="i2">Changing it signs you out on every machine.</p>
         <ChangePasswordForm />
+      </Hung>
+      <Hung at="section">
+        <h2>Second factor</h2>
+        <p className="i2 max-w-[676px]">
+          A code from a device of yours, asked for beside the password.{' '}
+          <Link className="t" href="/account/two-factor">
+            Turn it on or off
+          </Link>
+        </p>
       </Hung>
       <Hung at="section">
         <h2>Sessions</h2>

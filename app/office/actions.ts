@@ -19,7 +19,12 @@ export async function submitInvite(_: FormState, form: FormData): Promise<FormSt
 
 export async function submitOffice(_: FormState, form: FormData): Promise<FormState> {
   const actor = await requireActor();
-  const changed = await orRefuse(changeOffice(actor, Object.fromEntries(form)));
+  const changed = await orRefuse(
+    changeOffice(actor, {
+      lateAfter: form.get('lateAfter'),
+      sealNeedsSecond: form.get('sealNeedsSecond') === 'yes',
+    }),
+  );
   if (!changed.ok) return afterRefusal(changed, form);
   revalidatePath('/office');
   return { errors: [], typed: {}, done: 'The settings are kept.' };

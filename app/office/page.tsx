@@ -104,7 +104,7 @@ export default async function OfficePage() {
       {leads ? (
         <Hung at="section">
           <h2>Settings</h2>
-          <OfficeForm lateAfter={settings.lateAfter} />
+          <OfficeForm lateAfter={settings.lateAfter} sealNeedsSecond={settings.sealNeedsSecond} />
         </Hung>
       ) : null}
     </Page>

@@ -18,6 +18,8 @@ export interface OfficeRow {
   zone: string;
   /** Days after which something that waits is called late. */
   late_after: number;
+  /** Whether only a person with a second factor seals. */
+  seal_needs_second: boolean | number;
 }
 
 export async function officeById(db: Knex, id: string): Promise<OfficeRow | undefined> {

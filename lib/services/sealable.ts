@@ -2,8 +2,10 @@
 import type { Knex } from 'knex';
 import { uncheckedOf } from '@/db/queries/checks';
 import { type JobRow, jobById } from '@/db/queries/jobs';
+import { officeById } from '@/db/queries/offices';
 import { type LicenceRow, licencesOf } from '@/db/queries/people';
 import { revisionsOfSubmittal } from '@/db/queries/revisions';
+import { secondFactorOf } from '@/db/queries/second-factors';
 import { type SubmittalRow, submittalById } from '@/db/queries/submittals';
 import type { Actor } from './actor';
 import { licenceInForce } from './licence-in-force';
@@ -30,6 +32,14 @@ export async function sealable(
     refuse('sealed-already', '', 'This submittal is sealed already. A sealed file is never written again.');
   if (submittal.engineer_id !== actor.personId)
     throw new NotAllowed('only the engineer of record named on the cover seals');
+  const office = await officeById(trx, officeId);
+  const factor = await secondFactorOf(trx, officeId, actor.personId);
+  if (Number(office?.seal_needs_second) === 1 && !factor?.confirmed_at)
+    refuse(
+      'second-factor-needed',
+      '',
+      'The office asks for a second factor before sealing. Turn it on in your account; nothing is sealed.',
+    );
   const revisions = await revisionsOfSubmittal(trx, officeId, submittalId);
   const unchecked = await uncheckedOf(
     trx,

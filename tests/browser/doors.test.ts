@@ -97,6 +97,7 @@ describe('every action of a form', () => {
     'app/reset-password/[token]/actions.ts': /resetPassword\(/,
     'app/review/[token]/actions.ts': /reviewDoor\(token, await requestAddress\(\)\)/,
     'app/sign-in/actions.ts': /signIn\(.+requestAddress\(\)\)/,
+    'app/sign-in/second-step/actions.ts': /answerSecondStep\([\s\S]+requestAddress\(\)/,
     'app/sign-in/leave.ts': /leaveSession\(\)/,
   };
 

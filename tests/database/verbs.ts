@@ -42,6 +42,11 @@ import { resendLetter } from '@/lib/services/resend-letter';
 import { restoreRevision } from '@/lib/services/restore-revision';
 import { revokeApiToken } from '@/lib/services/revoke-api-token';
 import { revokeReview } from '@/lib/services/revoke-review';
+import { beginSecondFactor } from '@/lib/services/second-factor/begin-second-factor';
+import { clearSecondFactor } from '@/lib/services/second-factor/clear-second-factor';
+import { confirmSecondFactor } from '@/lib/services/second-factor/confirm-second-factor';
+import { dropSecondFactor } from '@/lib/services/second-factor/drop-second-factor';
+import { readSecondFactor } from '@/lib/services/second-factor/read-second-factor';
 import { sendSubmittal } from '@/lib/services/send-submittal';
 import { sendToCheck } from '@/lib/services/send-to-check';
 import { setJobState } from '@/lib/services/set-job-state';
@@ -97,6 +102,13 @@ export const verbs: Verb[] = [
   on(compareOwnSheet, ['checker'], (a, f) => compareOwnSheet(a, { checkId: f.sent.checkId })),
   on(answerMark, makers, (a, f) => answerMark(a, { markId: f.sent.markId, answer: 'x' })),
   on(changeOffice, ['administrator'], (a) => changeOffice(a, { lateAfter: 10 }), makes),
+  on(beginSecondFactor, everyone, (a) => beginSecondFactor(a), makes),
+  on(clearSecondFactor, ['administrator'], (a, f) =>
+    clearSecondFactor(a, { personId: f.office.people.checker.personId }),
+  ),
+  on(confirmSecondFactor, everyone, (a) => confirmSecondFactor(a, { code: '000000' }), makes),
+  on(dropSecondFactor, everyone, (a) => dropSecondFactor(a, { code: '000000' }), makes),
+  on(readSecondFactor, everyone, (a) => readSecondFactor(a), reads),
   on(
     changePassword,
     everyone,

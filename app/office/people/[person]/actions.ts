@@ -5,6 +5,7 @@ import { afterRefusal, type FormState } from '@/app/components/form-state';
 import { orRefuse, requireActor } from '@/app/session';
 import { addLicence } from '@/lib/services/add-licence';
 import { changePerson } from '@/lib/services/change-person';
+import { clearSecondFactor } from '@/lib/services/second-factor/clear-second-factor';
 import { withdrawLicence } from '@/lib/services/withdraw-licence';
 
 export async function submitPerson(personId: string, _: FormState, form: FormData): Promise<FormState> {
@@ -37,5 +38,11 @@ export async function submitLicence(personId: string, _: FormState, form: FormDa
 export async function withdraw(licenceId: string): Promise<void> {
   const actor = await requireActor();
   await orRefuse(withdrawLicence(actor, { licenceId }));
+  revalidatePath('/office', 'layout');
+}
+
+export async function clearSecond(personId: string): Promise<void> {
+  const actor = await requireActor();
+  await orRefuse(clearSecondFactor(actor, { personId }));
   revalidatePath('/office', 'layout');
 }

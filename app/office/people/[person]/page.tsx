@@ -2,10 +2,11 @@ import type { Metadata } from 'next';
 import { forbidden, notFound } from 'next/navigation';
 import { Hung } from '@/app/components/ledger';
 import { Page } from '@/app/components/page-layout';
+import { SubmitButton } from '@/app/components/submit-button';
 import { orRefuse, requireActor } from '@/app/session';
 import { dayIn } from '@/lib/services/licence-in-force';
 import { openOffice } from '@/lib/services/open-office';
-import { submitLicence, submitPerson, withdraw } from './actions';
+import { clearSecond, submitLicence, submitPerson, withdraw } from './actions';
 import { LicenceForm } from './licence-form';
 import { LicenceList } from './licence-list';
 import { PersonForm } from './person-form';
@@ -43,6 +44,18 @@ export default async function PersonPage({ params }: Props) {
         </p>
         <PersonForm action={submitPerson.bind(null, id)} person={person} />
       </Hung>
+      {person.secondFactor ? (
+        <Hung at="section">
+          <h2>Second factor</h2>
+          <p className="i2 max-w-[676px]">
+            On. Take it off only for a person who lost the device and the recovery codes, and be sure who
+            asks: the password alone then signs in. Every session of this person ends.
+          </p>
+          <form action={clearSecond.bind(null, id)} className="row">
+            <SubmitButton tone="plain">Take off the second factor</SubmitButton>
+          </form>
+        </Hung>
+      ) : null}
       {person.roles.includes('engineer-of-record') || person.licences.length > 0 ? (
         <Hung at="section">
           <h2>Licences</h2>

@@ -1,0 +1,30 @@
+// server only
+import { randomBytes } from 'node:crypto';
+import { putSecondFactor, secondFactorOf } from '@/db/queries/second-factors';
+import type { Actor } from '../actor';
+import { inTransaction } from '../in-transaction';
+import { everyone, requireRole } from '../require-role';
+import type { Result } from '../result';
+import { refuse } from '../service-error';
+import { toBase32 } from './base32';
+
+/** A new secret for the person's device, 160 bits (RFC 4226, section 4, R6). It counts only after a code confirms it. */
+export async function beginSecondFactor(actor: Actor): Promise<Result<{ secret: string; address: string }>> {
+  requireRole(actor, ...everyone);
+  const { officeId, personId } = actor;
+  return inTransaction(actor, async (trx, record) => {
+    const factor = await secondFactorOf(trx, officeId, personId, true);
+    if (factor?.confirmed_at) refuse('second-factor-on', '', 'Your second factor is on already.');
+    const secret = toBase32(randomBytes(20));
+    await putSecondFactor(trx, {
+      person_id: personId,
+      office_id: officeId,
+      secret,
+      confirmed_at: null,
+      last_step: 0,
+    });
+    await record('began a second factor', actor.name, { aboutId: personId });
+    const label = encodeURIComponent(`Fairhand:${actor.email}`);
+    return { secret, address: `otpauth://totp/${label}?secret=${secret}&issuer=Fairhand` };
+  });
+}
