@@ -7,7 +7,9 @@ import { draft as draftSchema } from '@/lib/model/draft';
 import { type Quantity, quantity as quantitySchema } from '@/lib/model/quantity';
 import { freezeSheet as freeze } from '@/lib/services/freeze-sheet';
 import { keepDraft as keep } from '@/lib/services/keep-draft';
-import type { Keeping, Trial, Writing } from './_desk/writing';
+import { listDraftVersions } from '@/lib/services/list-draft-versions';
+import { openDraftVersion } from '@/lib/services/open-draft-version';
+import type { Keeping, OpenedVersion, Trial, VersionLine, Writing } from './_desk/writing';
 import { describeTrial } from './describe-trial';
 import { describeWriting } from './describe-writing';
 
@@ -55,6 +57,25 @@ export async function tryRedundants(draft: Draft, quantities: Quantity[]): Promi
   const parsed = z.object({ draft: draftSchema, quantities: chosen }).safeParse({ draft, quantities });
   if (!parsed.success) return { good: false, message: sayIssues(parsed.error), drawing: undefined };
   return describeTrial(parsed.data.draft, parsed.data.quantities);
+}
+
+/** A page of the history of the draft, newest first, and whether there is more. */
+export async function listVersions(
+  sheetId: string,
+  page: number,
+): Promise<{ versions: VersionLine[]; more: boolean }> {
+  const actor = await requireActor();
+  const versions = await orRefuse(listDraftVersions(actor, { sheetId, page }));
+  return {
+    versions: versions.map((v) => ({ ...v, keptAt: v.keptAt.toISOString() })),
+    more: (versions.at(-1)?.version ?? 1) > 1,
+  };
+}
+
+export async function openVersion(sheetId: string, version: number): Promise<OpenedVersion> {
+  const actor = await requireActor();
+  const opened = await orRefuse(openDraftVersion(actor, { sheetId, version }));
+  return { ...opened, keptAt: opened.keptAt.toISOString() };
 }
 
 /** Freezes the sheet; answers where the revision can be read. */

@@ -18,8 +18,8 @@ export function ConflictSlip({ state, onMine, onTheirs }: Props) {
     <section className="conflict" role="alertdialog" aria-label="Two versions">
       <h2>Two versions of this sheet</h2>
       <p>
-        {state.by} kept another version at {when.format(new Date(state.at))}. Yours is still here. The version
-        you do not go on from stays in the history of the draft.
+        {state.by} kept another version at {when.format(new Date(state.at))}. Yours is still here. If you go
+        on with yours, theirs stays in the history; if you go on with theirs, undo brings yours back.
       </p>
       <div className="flex gap-3 mt-3">
         <button type="button" className="btn p" onClick={onMine}>

@@ -10,6 +10,7 @@ import { ConflictSlip } from './conflict-slip';
 import { DeskProvider } from './desk-context';
 import type { DeskStepKey } from './desk-step';
 import { changeDraft } from './draft-history';
+import { DraftVersions } from './draft-versions';
 import { FreezeForm } from './freeze-form';
 import { KeepingLine } from './keeping-line';
 import { LivePage } from './live-page';
@@ -95,6 +96,13 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
           errors={errors}
           writing={writing}
         />
+        <div className="mgfoot">
+          <DraftVersions
+            sheetId={sheet.id}
+            draft={draft}
+            onReturn={(d) => dispatch({ type: 'replace', draft: d })}
+          />
+        </div>
         <FreezeForm
           sheetId={sheet.id}
           number={sheet.nextRevision}

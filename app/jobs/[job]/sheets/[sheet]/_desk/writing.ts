@@ -1,4 +1,5 @@
 import type { Drawing } from '@/lib/figures/drawing';
+import type { Draft } from '@/lib/model/draft';
 import type { FieldError } from '@/lib/model/field-reader';
 import type { Quantity } from '@/lib/model/quantity';
 import type { Refusal } from '@/lib/model/refusal';
@@ -50,3 +51,14 @@ export type Keeping =
   | { ok: true; version: number; keptAt: string }
   | { ok: false; reason: 'conflict'; version: number; draft: unknown; by: string; at: string }
   | { ok: false; reason: 'refused'; message: string };
+
+/** One kept version of the draft in its history. */
+export interface VersionLine {
+  version: number;
+  keptAt: string;
+  by: string;
+}
+
+export interface OpenedVersion extends VersionLine {
+  draft: Draft;
+}
