@@ -38,9 +38,10 @@ export function refusedExchanges(ctx: Context): RefusedSets[] {
     if (!choice.good && choice.mechanism) note(byMotion, choice, [quantity]);
   }
   for (let i = 0; i < n; i++) {
+    const callsUp = calledUp(ctx, i);
     for (const other of others) {
       if (++trials > most.trials) break;
-      if (callsUp(ctx, i, other)) continue;
+      if (callsUp(other)) continue;
       const set = redundants.map((q, k) => (k === i ? other : q));
       const choice = ask(set);
       if (choice.good || !choice.mechanism) continue;
@@ -53,15 +54,18 @@ export function refusedExchanges(ctx: Context): RefusedSets[] {
 /** Beside the largest force of a unit state: what is surely called up. */
 const clear = 1e-6;
 
-/** A force that a unit state calls up can take the place of its redundant, so such sets need no trial. */
-function callsUp(ctx: Context, i: number, q: Quantity): boolean {
+/** Whether a unit state calls up a force: then that can take the place of its redundant, and the set needs no trial. */
+function calledUp(ctx: Context, i: number): (q: Quantity) => boolean {
   const unit = ctx.solution.primary.units[i];
-  if (!unit) return false;
-  const ends = endForcesOf(ctx, unit.members);
-  const own = new Map(unit.reactions.map((r) => [quantityKey(r.quantity), r.value]));
-  for (const e of ends) own.set(quantityKey({ kind: 'moment', member: e.member, end: e.end }), e.M);
-  const largest = Math.max(...[...own.values()].map(Math.abs));
-  return Math.abs(own.get(quantityKey(q)) ?? 0) > clear * largest;
+  if (!unit) return () => false;
+  const sizes = new Map(unit.reactions.map((r) => [quantityKey(r.quantity), Math.abs(r.value)]));
+  for (const { member, end, M } of endForcesOf(ctx, unit.members))
+    sizes.set(quantityKey({ kind: 'moment', member, end }), Math.abs(M));
+  const least = clear * Math.max(...sizes.values());
+  return (q) => {
+    const size = sizes.get(quantityKey(q));
+    return size !== undefined && size > least;
+  };
 }
 
 /** Quantities that equilibrium fixes; moments on both sides of a joint that are one stand once. */

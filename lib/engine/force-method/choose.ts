@@ -4,8 +4,9 @@ import type { Choice } from '../solution';
 import { validate } from '../validate';
 import { chooseBasis } from './choose-basis';
 import { flexibilityMatrix } from './flexibility-matrix';
-import { type Ground, layGround } from './ground';
+import { type Ground, isLaid, layGround } from './ground';
 import { poorChoice } from './poor-choice';
+import { fixedQuantities } from './self-stress';
 import { tryRedundants } from './try-redundants';
 
 /**
@@ -33,14 +34,16 @@ export function chooser(analysis: Analysis): (quantities: readonly Quantity[]) =
 export function trier(analysis: Analysis): (quantities: readonly Quantity[]) => Tried {
   const ground = groundOf(analysis);
   if ('good' in ground) return () => ground;
-  return (quantities) => tryRedundants(ground.eq, ground.proposed, quantities);
+  const { eq, proposed } = ground;
+  const fixed = new Set(fixedQuantities(eq, proposed));
+  return (quantities) => tryRedundants(eq, proposed, quantities, fixed);
 }
 
 type Tried = { good: true } | Extract<Choice, { good: false }>;
 
 /** What every answer starts from, or why there can be none. */
 export function groundOf(analysis: Analysis): Ground | Extract<Choice, { good: false }> {
-  const fault = validate(analysis);
+  const fault = isLaid(analysis) ? undefined : validate(analysis);
   if (fault) return { good: false, code: fault.code, message: fault.message };
   const ground = layGround(analysis);
   if (ground.proposed.unstable)

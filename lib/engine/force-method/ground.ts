@@ -15,6 +15,9 @@ export interface Ground {
 /** One analysis is solved, asked about its redundants and written out; its ground is laid once. */
 const laid = new WeakMap<Analysis, Ground>();
 
+/** Whether an analysis was found valid and prepared before. */
+export const isLaid = (analysis: Analysis): boolean => laid.has(analysis);
+
 /** The ground of a valid analysis; `proposed.unstable` where it is a mechanism. An analysis is never changed in place. */
 export function layGround(analysis: Analysis): Ground {
   const known = laid.get(analysis);

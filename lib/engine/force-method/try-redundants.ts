@@ -20,9 +20,9 @@ export function tryRedundants(
   eq: Equilibrium,
   proposed: PrimaryBasis,
   quantities: readonly Quantity[],
+  fixed: ReadonlySet<number> = new Set(fixedQuantities(eq, proposed)),
 ): TriedSet {
   const columns: number[] = [];
-  const fixed = new Set(fixedQuantities(eq, proposed));
   for (const q of quantities) {
     const column = eq.indexOf.get(quantityKey(q));
     const alone = column === undefined ? missing(eq, q) : faultOf(eq, proposed, column, columns, fixed);
