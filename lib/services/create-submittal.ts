@@ -9,6 +9,7 @@ import { type RevisionLine, revisionById } from '@/db/queries/revisions';
 import { insertFile, insertSubmittal } from '@/db/queries/submittals';
 import { placeSignatureFields } from '@/lib/signing/place-signature-fields';
 import type { Actor } from './actor';
+import { certifiedCheck } from './certified-check';
 import { engineerOfRecord } from './engineer-of-record';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
@@ -68,6 +69,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
           people,
           revisions.map((r) => r.checker),
         ),
+        checks: await checksOf(trx, officeId, revisions),
         history: await packageHistory(trx, officeId, jobId, revisions),
         comments: await registerOfJob(trx, officeId, jobId),
       },
@@ -157,4 +159,10 @@ async function printWithField(
     refuse('too-large', '', `The package has ${size} MB; at most 48 can be kept. Send it in two submittals.`);
   }
   return { bytes, pages: printed.pages.length };
+}
+
+async function checksOf(trx: Knex.Transaction, officeId: string, revisions: readonly RevisionLine[]) {
+  return Promise.all(
+    revisions.flatMap((r) => (r.check_id === null ? [] : [certifiedCheck(trx, officeId, r.check_id)])),
+  );
 }

@@ -4,6 +4,7 @@ import type { JobRow } from '@/db/queries/jobs';
 import type { RevisionLine } from '@/db/queries/revisions';
 import { env } from '@/lib/env';
 import { blocks } from '@/templates/block';
+import { type CertifiedCheck, composeChecks } from '@/templates/compose-certificate';
 import { type AnsweredComment, composeResponses } from '@/templates/compose-responses';
 import { composeRevisions } from '@/templates/compose-revisions';
 import type { PrintedPackage } from '@/templates/paper/package-print';
@@ -21,6 +22,8 @@ export interface PackageRequest {
   engineer: { name: string; initials: string };
   originators: { name: string; initials: string }[];
   checkers: { name: string; initials: string }[];
+  /** Of each revision that was checked, in their order. */
+  checks?: readonly CertifiedCheck[];
   /** Of each revision, in their order. */
   history: readonly RevisionPast[];
   /** Comments of the rounds before, with their answers. */
@@ -53,6 +56,7 @@ export async function printPackage(
   const digest = createHash('sha256')
     .update(revisions.map((r) => r.digest).join('\n'))
     .digest('hex');
+  const checks = composeChecks(request.checks ?? []);
   return renderPackage({
     office,
     job: {
@@ -85,6 +89,7 @@ export async function printPackage(
       digest: shortDigest(r.digest),
     })),
     closing: [
+      ...checks.blocks,
       ...composeResponses(request.comments ?? []),
       ...composeRevisions(
         revisions.map((r, i) => ({
@@ -93,6 +98,7 @@ export async function printPackage(
         })),
       ),
     ],
+    closingMarks: checks.marks,
     seal: { on: 'cover', covers: revisions.map((r) => sheetName(r.sheet_number)).join(', ') },
     verifyAt: `${env().appUrl}/verify`,
     data: { name: packageFileName, description: 'Inputs and results of every sheet', bytes },

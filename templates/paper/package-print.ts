@@ -58,6 +58,8 @@ export type PackagePrint = {
   readonly sheets: readonly PackageSheet[];
   /** Governing results and assumptions, set before the cautions on the last pages. */
   readonly closing?: readonly Block[];
+  /** Shapes in the margin of the closing lines, such as a checker's marks. */
+  readonly closingMarks?: PrintedSheet['marks'];
   /** Where a seal goes, and the sheets it covers: "S-01 to S-06". */
   readonly seal?: { readonly on: 'cover' | 'every-page'; readonly covers: string };
   readonly data?: AttachedData;

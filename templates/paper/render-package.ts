@@ -120,7 +120,8 @@ function closingPart(print: PackagePrint): Part {
   const blocks: Block[] = [...(print.closing ?? []), ...cautionBlocks(print.mode, print.verifyAt)];
   const heads = (print.closing ?? []).flatMap((b) => (b.kind === 'heading' ? [b.text] : []));
   const title = heads.length > 0 ? `${heads.join(', ')}, cautions` : 'Cautions';
-  return flowPart({ number: 'cautions', unnumbered: true, title, blocks }, packageImprint(print), print);
+  const sheet = { number: 'cautions', unnumbered: true, title, blocks, marks: print.closingMarks };
+  return flowPart(sheet, packageImprint(print), print);
 }
 
 function indexEntries(parts: readonly Part[], first: number, of: number): IndexEntry[] {

@@ -77,6 +77,7 @@ export const doors: Door[] = [
   },
   inJob('/checks/[check]', (f) => `/checks/${f.sent.checkId}`),
   { ...inJob('/checks/[check]/comparison', (f) => `/checks/${f.sent.checkId}/comparison`), status: 404 },
+  inJob('/checks/[check]/certificate', (f) => `/checks/${f.sent.checkId}/certificate`),
   inJob('/checks/[check]/inputs', (f) => `/checks/${f.sent.checkId}/inputs`),
   inJob('/submittals/new', () => '/submittals/new', makers),
   inJob('/submittals/[submittal]', (f) => `/submittals/${f.sent.submittalId}`),

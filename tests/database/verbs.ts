@@ -34,6 +34,7 @@ import { openRevision } from '@/lib/services/open-revision';
 import { openSheet } from '@/lib/services/open-sheet';
 import { openSubmittal } from '@/lib/services/open-submittal';
 import { prepareSeal } from '@/lib/services/prepare-seal';
+import { printCertificate } from '@/lib/services/print-certificate';
 import { printResponses } from '@/lib/services/print-responses';
 import { listApiTokens } from '@/lib/services/read-api-token';
 import { readAudit } from '@/lib/services/read-audit';
@@ -190,6 +191,7 @@ export const verbs: Verb[] = [
   on(openSubmittal, everyone, (a, f) => openSubmittal(a, f.sent.submittalId)),
   on(prepareSeal, ['engineer-of-record'], (a, f) => prepareSeal(a, { submittalId: f.sent.submittalId })),
   on(printResponses, everyone, (a, f) => printResponses(a, f.jobId)),
+  on(printCertificate, everyone, (a, f) => printCertificate(a, f.sent.checkId)),
   on(readAudit, everyone, (a, f) => readAudit(a, { jobId: f.jobId }), reads),
   on(readPreparedFile, ['engineer-of-record'], (a) => readPreparedFile(a, 'not-there')),
   on(readSubmittalFile, everyone, (a, f) => readSubmittalFile(a, f.sent.submittalId)),

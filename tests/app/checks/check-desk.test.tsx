@@ -42,6 +42,7 @@ function page(
       onMark={never}
       onConclude={never}
       onAnswer={never}
+      certificate="/certificate"
       onSettle={never}
       onVerify={never}
       mayAnswer={mayAnswer}

@@ -38,6 +38,8 @@ interface Props {
   onSettle: MarkAction;
   onVerify: MarkAction;
   mayAnswer: boolean;
+  /** Where the certificate with the query schedule is. */
+  certificate: string;
   /** Where the checker's own values stand beside the designer's. */
   comparison?: string;
 }
@@ -89,6 +91,11 @@ export function CheckDesk(props: Props) {
             </Link>
           </p>
         ) : null}
+        <p>
+          <a className="t" href={props.certificate}>
+            {check.state === 'agreed' ? 'Certificate and query schedule' : 'Query schedule so far'}, PDF
+          </a>
+        </p>
         <InputsLink {...inputs} marks={marks} />
         <EarlierMarks marks={earlier} onVerify={working ? props.onVerify : undefined} />
         {working ? (

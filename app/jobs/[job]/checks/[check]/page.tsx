@@ -80,6 +80,7 @@ export default async function CheckPage({ params }: Props) {
           onSettle={settle.bind(null, path)}
           onVerify={verify.bind(null, path, id)}
           mayAnswer={revision.originatorId === actor.personId}
+          certificate={`${path}/certificate`}
           comparison={own?.comparison ? `${path}/comparison` : undefined}
         />
       )}
