@@ -56,6 +56,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
     const printed = await printWithField(
       {
         office: actor.officeName,
+        zone: actor.zone,
         job,
         purpose,
         submittal: number,
@@ -71,7 +72,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
         ),
         checks: await checksOf(trx, officeId, revisions),
         history: await packageHistory(trx, officeId, jobId, revisions),
-        comments: await registerOfJob(trx, officeId, jobId),
+        comments: await registerOfJob(trx, actor, jobId),
       },
       revisions,
     );

@@ -1,18 +1,7 @@
 import type { LicenceRow } from '@/db/queries/people';
+import { dayIn } from './day-in';
 
 /** Whether a licence is in force at an instant: to the end of its last day, by the calendar of the office. */
 export function licenceInForce(licence: Pick<LicenceRow, 'expires'>, at: Date, zone: string): boolean {
   return dayIn(zone, at) <= licence.expires.toISOString().slice(0, 10);
-}
-
-/** The calendar day of an instant in a time zone, as 2028-06-30. */
-export function dayIn(zone: string, at: Date): string {
-  const parts = new Intl.DateTimeFormat('en-CA', {
-    timeZone: zone,
-    year: 'numeric',
-    month: '2-digit',
-    day: '2-digit',
-  }).formatToParts(at);
-  const part = (type: string) => parts.find((p) => p.type === type)?.value;
-  return `${part('year')}-${part('month')}-${part('day')}`;
 }

@@ -13,6 +13,6 @@ export async function openComments(actor: Actor, jobId: string) {
   if (!job) throw new NotFound(`job ${jobId}`);
   return {
     job: { id: job.id, number: job.number, title: job.title },
-    comments: await registerOfJob(database(), actor.officeId, jobId),
+    comments: await registerOfJob(database(), actor, jobId),
   };
 }

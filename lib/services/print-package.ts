@@ -9,12 +9,15 @@ import { type AnsweredComment, composeResponses } from '@/templates/compose-resp
 import { composeRevisions } from '@/templates/compose-revisions';
 import type { PrintedPackage } from '@/templates/paper/package-print';
 import { renderPackage } from '@/templates/paper/render-package';
+import { dayIn } from './day-in';
 import type { RevisionPast } from './package-history';
 import { sheetName } from './sheet-state';
 import { type EmbeddedPackage, packageFileName, packageForm } from './verification/embedded-package';
 
 export interface PackageRequest {
   office: string;
+  /** Time zone of the office: days on paper are its days. */
+  zone: string;
   job: JobRow & { authority: string | null };
   purpose: string;
   submittal: number;
@@ -30,14 +33,13 @@ export interface PackageRequest {
   comments?: readonly AnsweredComment[];
 }
 
-const day = (date: Date) => date.toISOString().slice(0, 10);
-
 /** Prints frozen revisions as one package. Inputs, results and digests ride inside as a file, so that it can be proved. */
 export async function printPackage(
   request: PackageRequest,
   revisions: readonly RevisionLine[],
 ): Promise<PrintedPackage> {
   const { office, job, purpose, submittal, date } = request;
+  const day = (at: Date) => dayIn(request.zone, at);
   const data: EmbeddedPackage = {
     form: packageForm,
     job: { number: job.number, title: job.title },

@@ -13,7 +13,7 @@ export async function printResponses(actor: Actor, jobId: string): Promise<Uint8
   requireRole(actor, ...everyone);
   const job = await jobById(database(), actor.officeId, jobId);
   if (!job) throw new NotFound(`job ${jobId}`);
-  const blocks = composeResponses(await registerOfJob(database(), actor.officeId, jobId));
+  const blocks = composeResponses(await registerOfJob(database(), actor, jobId));
   if (blocks.length === 0) throw new NotFound(`comments of job ${jobId}`);
   const { bytes } = await renderSheet({
     sheet: { number: 'answers', unnumbered: true, title: `Answers to comments, ${job.title}`, blocks },

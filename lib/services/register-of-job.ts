@@ -2,6 +2,8 @@
 import type { Knex } from 'knex';
 import { commentRegister, type RegisterRow, responsesOfJob } from '@/db/queries/reviews';
 import type { AnsweredComment } from '@/templates/compose-responses';
+import type { Actor } from './actor';
+import { dayIn } from './day-in';
 import { sheetName } from './sheet-state';
 
 export interface RegisterEntry extends AnsweredComment {
@@ -11,7 +13,12 @@ export interface RegisterEntry extends AnsweredComment {
 }
 
 /** The comments of all rounds of a job, each with all that was said under it. */
-export async function registerOfJob(db: Knex, officeId: string, jobId: string): Promise<RegisterEntry[]> {
+export async function registerOfJob(
+  db: Knex,
+  { officeId, zone }: Pick<Actor, 'officeId' | 'zone'>,
+  jobId: string,
+): Promise<RegisterEntry[]> {
+  const day = (at: Date) => dayIn(zone, at);
   const comments = await commentRegister(db, officeId, jobId);
   const responses = await responsesOfJob(db, officeId, jobId);
   return comments.map((c) => ({
@@ -32,8 +39,6 @@ export async function registerOfJob(db: Knex, officeId: string, jobId: string): 
       .map((r) => ({ kind: r.kind, text: r.text, place: r.place, author: r.author, date: day(r.at) })),
   }));
 }
-
-const day = (at: Date) => at.toISOString().slice(0, 10);
 
 function placeOf(c: RegisterRow): string {
   if (c.sheet === null || c.revision === null) return `line ${c.line}`;

@@ -3,7 +3,7 @@ import type { JobRow } from '@/db/queries/jobs';
 import type { SubmittalRow } from '@/db/queries/submittals';
 import { env } from '@/lib/env';
 import type { Actor } from './actor';
-import { dayIn } from './licence-in-force';
+import { dayIn } from './day-in';
 
 export interface Sending {
   job: JobRow;

@@ -69,6 +69,7 @@ describe('an unsigned copy', () => {
     const printed = await printPackage(
       {
         office: 'Office',
+        zone: 'UTC',
         job,
         purpose: 'for permit',
         submittal: 1,

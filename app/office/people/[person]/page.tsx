@@ -4,7 +4,7 @@ import { Hung } from '@/app/components/ledger';
 import { Page } from '@/app/components/page-layout';
 import { SubmitButton } from '@/app/components/submit-button';
 import { orRefuse, requireActor } from '@/app/session';
-import { dayIn } from '@/lib/services/licence-in-force';
+import { dayIn } from '@/lib/services/day-in';
 import { openOffice } from '@/lib/services/open-office';
 import { clearSecond, submitLicence, submitPerson, withdraw } from './actions';
 import { LicenceForm } from './licence-form';
