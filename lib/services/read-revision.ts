@@ -21,7 +21,9 @@ export async function readRevision(
   if (!r || !job) throw new NotFound(`revision ${revisionId}`);
   const check = r.check_id ? await checkById(db, officeId, r.check_id) : undefined;
   const people = await peopleOf(db, officeId);
-  const past = (await revisionsOfSheet(db, officeId, r.sheet_id)).filter((o) => o.number <= r.number);
+  const all = await revisionsOfSheet(db, officeId, r.sheet_id);
+  const past = all.filter((o) => o.number <= r.number);
+  const newest = all.find((o) => o.number > r.number);
   return {
     job: { id: job.id, number: job.number, title: job.title },
     revision: {
@@ -36,6 +38,14 @@ export async function readRevision(
       frozenAt: r.frozen_at,
       originator: r.originator_name,
       originatorId: r.originator_id,
+    },
+    /** The newest revision, when this one is no longer it: checks and unsent seals of this one are void. */
+    newer: newest && {
+      id: newest.id,
+      number: newest.number,
+      reason: newest.reason,
+      frozenAt: newest.frozen_at,
+      originator: newest.originator_name,
     },
     blocks: blocks.parse(r.blocks),
     /** Lines that changed after the first revision, each with the revision in which it last did. */

@@ -41,7 +41,10 @@ describe('a new revision', () => {
     const conclude = await concludeCheck(checker, { checkId, outcome: 'agreed', note: '' });
     expect(mark).toMatchObject({ ok: false, errors: [{ code: 'check-void' }] });
     expect(conclude).toMatchObject({ ok: false, errors: [{ code: 'check-void' }] });
-    expect((await openRevision(checker, revisionId)).check?.state).toBe('void');
+    const old = await openRevision(checker, revisionId);
+    expect(old.check?.state).toBe('void');
+    expect(old.newer).toMatchObject({ number: 1, reason: 'The load changed.' });
+    expect((await openRevision(checker, old.newer?.id as string)).newer).toBeUndefined();
     expect(await lettersTo(checker.email)).toEqual([
       expect.stringMatching(/^To check/),
       expect.stringMatching(/S-01 revision 1 takes the place/),

@@ -1,7 +1,7 @@
 'use client';
 
 import Link from 'next/link';
-import { useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import { LinePicker } from '@/app/components/line-picker';
 import { ReadingPage } from '@/app/components/reading-page';
 import type { Block } from '@/templates/block';
@@ -38,6 +38,8 @@ interface Props {
   onSettle: MarkAction;
   onVerify: MarkAction;
   mayAnswer: boolean;
+  /** That a later revision took the place of this one. */
+  notice?: ReactNode;
   /** Where the certificate with the query schedule is. */
   certificate: string;
   /** Where the checker's own values stand beside the designer's. */
@@ -82,6 +84,7 @@ export function CheckDesk(props: Props) {
       </ReadingPage>
       <aside className="frozenside">
         <p>{sentence(check)}</p>
+        {props.notice}
         {check.note === '' ? null : <p>{check.note}</p>}
         {check.declaration === '' ? null : <p className="ans">Declared: {check.declaration}</p>}
         {props.comparison ? (

@@ -3,6 +3,7 @@ import { Page } from '@/app/components/page-layout';
 import { orRefuse, requireActor } from '@/app/session';
 import { categoryWords } from '@/lib/model/independence';
 import { openCheck } from '@/lib/services/open-check';
+import { NewerNote } from '../../revisions/[revision]/newer-note';
 import { answer, askAboutBasis, beginOwn, compareOwn, conclude, leaveMark, settle, verify } from './actions';
 import { BlindDesk } from './blind-desk';
 import { CheckDesk } from './check-desk';
@@ -19,7 +20,7 @@ export const metadata: Metadata = { title: 'Check' };
 export default async function CheckPage({ params }: Props) {
   const actor = await requireActor();
   const { check: id } = await params;
-  const { job, revision, blocks, check, marks, earlier, inputs, own, basis } = await orRefuse(
+  const { job, revision, newer, blocks, check, marks, earlier, inputs, own, basis } = await orRefuse(
     openCheck(actor, id),
   );
   const path = `/jobs/${job.id}/checks/${id}`;
@@ -80,6 +81,7 @@ export default async function CheckPage({ params }: Props) {
           onSettle={settle.bind(null, path)}
           onVerify={verify.bind(null, path, id)}
           mayAnswer={revision.originatorId === actor.personId}
+          notice={newer ? <NewerNote jobId={job.id} newer={newer} zone={actor.zone} /> : null}
           certificate={`${path}/certificate`}
           comparison={own?.comparison ? `${path}/comparison` : undefined}
         />

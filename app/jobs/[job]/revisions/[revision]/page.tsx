@@ -10,6 +10,7 @@ import { makers } from '@/lib/services/require-role';
 import { giveToChecker, goBack } from './actions';
 import { CheckForm } from './check-form';
 import { FrozenSheet } from './frozen-sheet';
+import { NewerNote } from './newer-note';
 import { RestoreForm } from './restore-form';
 import './revision.css';
 
@@ -23,7 +24,9 @@ export const metadata: Metadata = { title: 'Revision' };
 export default async function RevisionPage({ params }: Props) {
   const actor = await requireActor();
   const { revision: id } = await params;
-  const { job, revision, blocks, changedIn, check, checkers } = await orRefuse(openRevision(actor, id));
+  const { job, revision, newer, blocks, changedIn, check, checkers } = await orRefuse(
+    openRevision(actor, id),
+  );
   const mayMake = actor.roles.some((r) => makers.includes(r));
   return (
     <Page
@@ -61,6 +64,7 @@ export default async function RevisionPage({ params }: Props) {
         </ReadingPage>
         <aside className="frozenside">
           <StatusMark mark={standing(check?.state)} />
+          {newer ? <NewerNote jobId={job.id} newer={newer} zone={actor.zone} /> : null}
           <dl className="facts3">
             <dt>Reason</dt>
             <dd>{revision.reason}</dd>
@@ -82,7 +86,7 @@ export default async function RevisionPage({ params }: Props) {
                   : `Check by ${check.checker}: ${check.state}`}
               </Link>
             </p>
-          ) : mayMake ? (
+          ) : newer ? null : mayMake ? (
             <CheckForm action={giveToChecker.bind(null, job.id, id)} checkers={checkers} />
           ) : (
             <p>An engineer of the office sends it to a checker.</p>
