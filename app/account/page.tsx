@@ -1,17 +1,22 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { listApiTokens } from '@/lib/services/read-api-token';
+import { makers } from '@/lib/services/require-role';
 import { Hung } from '../components/ledger';
 import { Page } from '../components/page-layout';
 import { roleWords } from '../office/role-words';
 import { requireActor } from '../session';
 import { leaveEverywhere } from './actions';
 import { ChangePasswordForm } from './change-password-form';
+import { TokenForm } from './token-form';
+import { TokenList } from './token-list';
 
 export const metadata: Metadata = { title: 'Your account' };
 
 /** What a person settles for themself. */
 export default async function AccountPage() {
   const actor = await requireActor();
+  const mayMake = actor.roles.some((r) => makers.includes(r));
   return (
     <Page
       wide
@@ -46,6 +51,21 @@ export default async function AccountPage() {
           </Link>
         </p>
       </Hung>
+      {mayMake ? (
+        <Hung at="section">
+          <h2>Access tokens</h2>
+          <p className="i2 max-w-[676px]">
+            For a program of your own that has structures solved by POST to <code>/api/v1/analyses</code>. It
+            acts as you; revoke it when it is no longer needed. The form it sends is at{' '}
+            <a className="t" href="/api/v1/analyses/schema">
+              /api/v1/analyses/schema
+            </a>
+            .
+          </p>
+          <TokenForm />
+          <TokenList tokens={await listApiTokens(actor)} zone={actor.zone} />
+        </Hung>
+      ) : null}
       <Hung at="section">
         <h2>Sessions</h2>
         <form action={leaveEverywhere} className="max-w-[676px]">

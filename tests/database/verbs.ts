@@ -53,6 +53,7 @@ import { sendToCheck } from '@/lib/services/send-to-check';
 import { setJobState } from '@/lib/services/set-job-state';
 import { settleMark } from '@/lib/services/settle-mark';
 import { signOutEverywhere } from '@/lib/services/sign-out-everywhere';
+import { solveAnalysis } from '@/lib/services/solve-analysis';
 import { verifyAudit } from '@/lib/services/verify-audit';
 import { verifyCorrection } from '@/lib/services/verify-correction';
 import { verifyRevision } from '@/lib/services/verify-revision';
@@ -214,6 +215,7 @@ export const verbs: Verb[] = [
     settleMark(a, { markId: f.sent.markId, outcome: 'reopened', text: 'x' }),
   ),
   on(signOutEverywhere, everyone, (a) => signOutEverywhere(a), makes),
+  on(solveAnalysis, makers, (a) => solveAnalysis(a, {}, false), makes),
   on(verifyAudit, everyone, (a) => verifyAudit(a), reads),
   on(verifyRevision, everyone, (a, f) => verifyRevision(a, f.sent.revisionId)),
   on(verifyCorrection, ['checker'], (a, f) =>

@@ -1,3 +1,4 @@
+import { readBody } from '@/app/read-body';
 import { requestAddress } from '@/app/session';
 import { mostBytes, verifyFile } from '@/lib/services/verification/verify-file';
 
@@ -14,21 +15,4 @@ export async function POST(request: Request): Promise<Response> {
 
 function say(status: number, message: string): Response {
   return Response.json({ message }, { status, headers: { 'cache-control': 'no-store' } });
-}
-
-/** The body, or undefined as soon as it grows past `most`. */
-async function readBody(request: Request, most: number): Promise<Uint8Array | undefined> {
-  const parts: Uint8Array[] = [];
-  let length = 0;
-  const reader = request.body?.getReader();
-  for (;;) {
-    const part = await reader?.read();
-    if (!part || part.done) return Buffer.concat(parts);
-    length += part.value.length;
-    if (length > most) {
-      await reader?.cancel();
-      return undefined;
-    }
-    parts.push(part.value);
-  }
 }
