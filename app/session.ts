@@ -15,6 +15,11 @@ export const currentActor = cache(async (): Promise<Actor | undefined> => {
   return token ? readSession(token) : undefined;
 });
 
+/** The token of the session of this request; empty without one. */
+export async function sessionToken(): Promise<string> {
+  return (await cookies()).get(cookieName)?.value ?? '';
+}
+
 /** Who is signed in; everyone else is sent to the sign-in page. */
 export async function requireActor(): Promise<Actor> {
   return (await currentActor()) ?? redirect('/sign-in');

@@ -55,3 +55,10 @@ export async function endSession(token: string): Promise<void> {
 export async function endAllSessions(personId: string): Promise<void> {
   await lucia.invalidateUserSessions(personId);
 }
+
+/** Signs a person out everywhere but in the session of this token. */
+export async function endOtherSessions(personId: string, token: string): Promise<void> {
+  const own = tokenHash(token);
+  for (const session of await lucia.getUserSessions(personId))
+    if (session.id !== own) await lucia.invalidateSession(session.id);
+}

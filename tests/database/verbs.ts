@@ -108,7 +108,7 @@ export const verbs: Verb[] = [
   on(clearSecondFactor, ['administrator'], (a, f) =>
     clearSecondFactor(a, { personId: f.office.people.checker.personId }),
   ),
-  on(confirmSecondFactor, everyone, (a) => confirmSecondFactor(a, { code: '000000' }), makes),
+  on(confirmSecondFactor, everyone, (a) => confirmSecondFactor(a, { code: '000000' }, ''), makes),
   on(dropSecondFactor, everyone, (a) => dropSecondFactor(a, { code: '000000' }), makes),
   on(readSecondFactor, everyone, (a) => readSecondFactor(a), reads),
   on(

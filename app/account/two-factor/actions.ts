@@ -2,16 +2,14 @@
 
 import { revalidatePath } from 'next/cache';
 import { afterRefusal, type FormState } from '@/app/components/form-state';
-import { keepSession, orRefuse, requireActor } from '@/app/session';
+import { orRefuse, requireActor, sessionToken } from '@/app/session';
 import { beginSecondFactor } from '@/lib/services/second-factor/begin-second-factor';
 import { confirmSecondFactor } from '@/lib/services/second-factor/confirm-second-factor';
 import { dropSecondFactor } from '@/lib/services/second-factor/drop-second-factor';
 
 export interface TwoFactorState extends FormState {
-  /** The secret for the device and its address, while it waits for a first code. */
-  begun?: { secret: string; address: string };
-  /** Recovery codes, shown once. */
-  codes?: string[];
+  /** The secret for the device, its address and the recovery codes, shown once, while a first code is waited for. */
+  begun?: { secret: string; address: string; codes: string[] };
 }
 
 export async function begin(_: TwoFactorState): Promise<TwoFactorState> {
@@ -23,10 +21,12 @@ export async function begin(_: TwoFactorState): Promise<TwoFactorState> {
 
 export async function confirm(_: TwoFactorState, form: FormData): Promise<TwoFactorState> {
   const actor = await requireActor();
-  const confirmed = await orRefuse(confirmSecondFactor(actor, { code: form.get('code') }));
+  const confirmed = await orRefuse(
+    confirmSecondFactor(actor, { code: form.get('code') }, await sessionToken()),
+  );
   if (!confirmed.ok) return afterRefusal(confirmed, form, ['code']);
-  await keepSession(confirmed.value.session);
-  return { errors: [], typed: {}, codes: confirmed.value.codes };
+  revalidatePath('/account', 'layout');
+  return { errors: [], typed: {} };
 }
 
 export async function drop(_: TwoFactorState, form: FormData): Promise<TwoFactorState> {

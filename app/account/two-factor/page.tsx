@@ -3,7 +3,8 @@ import { Hung } from '@/app/components/ledger';
 import { Page } from '@/app/components/page-layout';
 import { orRefuse, requireActor } from '@/app/session';
 import { readSecondFactor } from '@/lib/services/second-factor/read-second-factor';
-import { TwoFactorPanel } from './two-factor-panel';
+import { TurnOff } from './turn-off';
+import { TurnOn } from './turn-on';
 
 export const metadata: Metadata = { title: 'Second factor' };
 
@@ -27,11 +28,11 @@ export default async function TwoFactorPage() {
         <h1>Second factor</h1>
         <p className="i2 max-w-[676px]">
           {on
-            ? `On. ${codesLeft === 1 ? 'One recovery code is' : `${codesLeft} recovery codes are`} left.`
+            ? `On. ${codesLeft === 1 ? 'One recovery code is' : `${codesLeft} recovery codes are`} left. Every sign-in asks for a code.`
             : 'Off. Your password alone signs you in.'}{' '}
           {neededToSeal ? 'Your office asks for it before sealing.' : ''}
         </p>
-        <TwoFactorPanel on={on} />
+        {on ? <TurnOff /> : <TurnOn />}
       </Hung>
     </Page>
   );

@@ -7,11 +7,10 @@ import { SubmitButton } from '@/app/components/submit-button';
 import { TextField } from '@/app/components/text-field';
 import { begin, confirm, type TwoFactorState } from './actions';
 
-/** A secret for the device, a first code of it, and then the recovery codes. */
+/** A secret for the device and the recovery codes, shown once; then a first code of the device. */
 export function TurnOn() {
   const [begun, start] = useActionState<TwoFactorState>(begin, untouched);
   const [state, send] = useActionState<TwoFactorState, FormData>(confirm, untouched);
-  if (state.codes) return <RecoveryCodes codes={state.codes} />;
   if (!begun.begun)
     return (
       <form action={start}>
@@ -19,7 +18,7 @@ export function TurnOn() {
         <SubmitButton>Turn the second factor on</SubmitButton>
       </form>
     );
-  const { secret, address } = begun.begun;
+  const { secret, address, codes } = begun.begun;
   return (
     <>
       <ol className="plainlist max-w-[676px] mt-4">
@@ -30,7 +29,20 @@ export function TurnOn() {
             Open it on this device
           </a>
         </li>
-        <li>Type the code that it shows now.</li>
+        <li>
+          Keep these recovery codes away from the device. Each signs you in once; they are not shown again.
+          <span className="block">
+            {codes.map((code) => (
+              <code key={code} className="block">
+                {code}
+              </code>
+            ))}
+          </span>
+        </li>
+        <li>
+          Type the code that the device shows now. You stay signed in here and are signed out on every other
+          machine.
+        </li>
       </ol>
       <form action={send} noValidate className="max-w-[320px] mt-4">
         <FormMessage state={state} />
@@ -47,23 +59,5 @@ export function TurnOn() {
         </div>
       </form>
     </>
-  );
-}
-
-function RecoveryCodes({ codes }: { codes: string[] }) {
-  return (
-    <div className="max-w-[676px]" role="status">
-      <p className="message done">
-        The second factor is on. You were signed out on every other machine. Keep these recovery codes away
-        from your device: each signs you in once, and they are not shown again.
-      </p>
-      <ul className="plainlist">
-        {codes.map((code) => (
-          <li key={code}>
-            <code>{code}</code>
-          </li>
-        ))}
-      </ul>
-    </div>
   );
 }

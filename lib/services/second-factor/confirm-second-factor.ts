@@ -1,15 +1,14 @@
 // server only
 import { z } from 'zod';
-import { insertRecoveryCodes, putSecondFactor, secondFactorOf } from '@/db/queries/second-factors';
+import { putSecondFactor, secondFactorOf } from '@/db/queries/second-factors';
 import type { Actor } from '../actor';
 import { inTransaction } from '../in-transaction';
 import { allowAttempt, forgiveAttempts, tooOften } from '../limit-attempts';
 import { everyone, requireRole } from '../require-role';
 import { done, mend, type Result, unread } from '../result';
 import { refuse } from '../service-error';
-import { endAllSessions, startSession } from '../session';
+import { endOtherSessions } from '../session';
 import { passCode, wrongCode } from './pass-code';
-import { newRecoveryCodes, recoveryHash } from './recovery-code';
 
 const input = z.object({
   code: z
@@ -19,19 +18,15 @@ const input = z.object({
 });
 
 /**
- * Turns the second factor on by a first code of the device. Answers the recovery codes, which are shown this once. Every
- * session ends, since none of them gave the code; the person goes on in a new one.
+ * Turns the second factor on by a first code of the device. Every other session of the person ends, since only the one of
+ * `token` gave a code.
  */
-export async function confirmSecondFactor(
-  actor: Actor,
-  raw: unknown,
-): Promise<Result<{ codes: string[]; session: { token: string; expiresAt: Date } }>> {
+export async function confirmSecondFactor(actor: Actor, raw: unknown, token: string): Promise<Result<null>> {
   requireRole(actor, ...everyone);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
   const { officeId, personId } = actor;
   if (!(await allowAttempt(`second-factor:${personId}`, 8))) return mend('too-often', '', tooOften);
-  const codes = newRecoveryCodes();
   const confirmed = await inTransaction(actor, async (trx, record) => {
     const now = new Date();
     if ((await passCode(trx, officeId, personId, parsed.data.code, now)) !== 'device')
@@ -39,11 +34,10 @@ export async function confirmSecondFactor(
     const factor = await secondFactorOf(trx, officeId, personId, true);
     if (!factor || factor.confirmed_at) refuse('second-factor-on', '', 'Your second factor is on already.');
     await putSecondFactor(trx, { ...factor, confirmed_at: now });
-    await insertRecoveryCodes(trx, officeId, personId, codes.map(recoveryHash));
     await record('turned the second factor on', actor.name, { aboutId: personId });
   });
   if (!confirmed.ok) return confirmed;
   await forgiveAttempts(`second-factor:${personId}`);
-  await endAllSessions(personId);
-  return done({ codes, session: await startSession(personId, officeId) });
+  await endOtherSessions(personId, token);
+  return done(null);
 }

@@ -39,7 +39,8 @@ export default async function CommentsPage({ params }: Props) {
           <b>{actor.officeName}</b>
         </span>,
         job.number,
-        `${comments.length} comments, ${waits.length} to answer`,
+        comments.length === 1 ? '1 comment' : `${comments.length} comments`,
+        `${waits.length} to answer`,
         <span key="zone" className="end">{`Times in ${actor.zone}`}</span>,
       ]}
     >
@@ -81,7 +82,7 @@ export default async function CommentsPage({ params }: Props) {
                     {s.text === '' ? '' : `: ${s.text}`}
                     {s.place === '' ? '' : ` (${s.place})`}
                     <small className="block">
-                      {s.author}, {s.date}
+                      {s.author}, {sayDate(new Date(s.date), 'UTC')}
                     </small>
                   </p>
                 ))}
