@@ -28,7 +28,6 @@ export default async function ComparisonPage({ params }: Props) {
   return (
     <Page
       actor={actor}
-      wide
       path={[
         { label: `${job.number} ${job.title}`, href: `/jobs/${job.id}` },
         { label: 'Check', href: back },

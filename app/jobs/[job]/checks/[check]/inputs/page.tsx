@@ -25,7 +25,6 @@ export default async function InputsPage({ params }: Props) {
   return (
     <Page
       actor={actor}
-      wide
       path={[
         { label: `${job.number} ${job.title}`, href: `/jobs/${job.id}` },
         { label: `${revision.sheet} ${revision.title}`, href: `/jobs/${job.id}/revisions/${revision.id}` },
