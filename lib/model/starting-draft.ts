@@ -7,9 +7,8 @@ import {
   draftForm,
 } from './draft';
 
-/** The starting sheets an engineer may choose from. */
-export const startingSheets = ['beam', 'portal', 'frame'] as const;
-export type StartingSheet = (typeof startingSheets)[number];
+/** The forms that a sheet can have at the desk. */
+export type StartingSheet = DraftGeometry['shape'];
 
 const stiffness: DraftStiffness = {
   k: '1',

@@ -5,31 +5,39 @@ import { z } from 'zod';
 import { takeNumber, touchJob } from '@/db/queries/jobs';
 import { insertDraft, insertSheet } from '@/db/queries/sheets';
 import type { Draft } from '@/lib/model/draft';
-import { startingDraft, startingSheets } from '@/lib/model/starting-draft';
+import { startSheet } from '@/lib/model/start-sheet';
+import { startingChoice } from '@/lib/model/starting-choice';
 import type { Actor } from './actor';
 import { inTransaction, type Record } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
 import { makers, requireRole } from './require-role';
 import { type Result, unread } from './result';
-import { NotFound } from './service-error';
+import { NotFound, refuse } from './service-error';
 import { sheetName } from './sheet-state';
 
-const input = z.object({
-  jobId: z.string().max(36),
-  start: z.enum(startingSheets),
-  title: z.string().trim().min(1, 'A sheet needs a title.').max(120),
-});
+const input = z.intersection(
+  z.object({
+    jobId: z.string().max(36),
+    title: z.string().trim().min(1, 'A sheet needs a title.').max(120),
+  }),
+  startingChoice,
+);
 
 /** A new sheet from a starting sheet; its number is never used again. */
 export async function createSheet(actor: Actor, raw: unknown): Promise<Result<{ id: string }>> {
   requireRole(actor, ...makers);
   const parsed = input.safeParse(raw);
   if (!parsed.success) return unread(parsed.error);
-  const { jobId, start, title } = parsed.data;
+  const { jobId, title } = parsed.data;
   return inTransaction(actor, async (trx, record) => {
     const job = await jobOpenToWork(trx, actor.officeId, jobId);
-    const draft = startingDraft(start, job.units, title);
-    return { id: await writeSheet(trx, record, actor, { jobId, title, draft, verb: 'made sheet' }) };
+    const started = startSheet(parsed.data, job.units, title);
+    if (!started.ok) {
+      const [first] = started.errors;
+      refuse('size', first?.path ?? '', first?.message ?? 'A size cannot be read.');
+    }
+    const sheet = { jobId, title, draft: started.draft, verb: 'made sheet' };
+    return { id: await writeSheet(trx, record, actor, sheet) };
   });
 }
 

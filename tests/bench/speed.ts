@@ -43,3 +43,27 @@ export function speed(): void {
     }),
   );
 }
+
+/** What is refused must not keep anybody waiting: the longest of some large inputs that cannot be solved. */
+export function refusals(): void {
+  const slides = beam(1_900);
+  const loose = slides.joints.map((j) => ({
+    ...j,
+    support: { x: 'free', y: 'held', turn: 'free' } as const,
+  }));
+  const inputs: [string, AnalysisInput][] = [
+    ['1,900 spans that slide', { ...slides, joints: loose }],
+    ['3,000 spans, too many', beam(3_000)],
+    ['1,900 spans, the last member without a joint', { ...slides, joints: slides.joints.slice(0, -1) }],
+  ];
+  print('Refused, ms; target 1000');
+  table(
+    ['input', 'code', 'best', 'median'],
+    inputs.map(([name, input]) => {
+      const refused = solve(input);
+      if (refused.ok) throw new Error(`${name} was solved`);
+      const { best, median } = warm(() => solve(input), 5);
+      return [name, refused.refusal.code, figures(best), figures(median)];
+    }),
+  );
+}

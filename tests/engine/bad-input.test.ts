@@ -4,9 +4,6 @@ import { solve } from '@/lib/engine/solve';
 import type { AnalysisInput } from '@/lib/model/analysis';
 import { joints, members, structure } from './statics/build-structure';
 
-/** Longest that a refusal may take, ms. */
-const patience = 1000;
-
 const sound: AnalysisInput = {
   ...structure(
     joints('A 0 0 fixed', 'B 6 0 roller', 'C 10 0 roller'),
@@ -225,10 +222,8 @@ test.each([
     },
     'unstable-parallel',
   ],
-])('refuses %s within a second', (_, input, code) => {
-  const start = performance.now();
+])('refuses %s', (_, input, code) => {
   const result = solve(input);
-  expect(performance.now() - start).toBeLessThan(patience);
   expect(result.ok ? 'solved' : result.refusal.code).toBe(code);
 });
 

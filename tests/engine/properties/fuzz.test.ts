@@ -4,9 +4,6 @@ import { solve } from '@/lib/engine/solve';
 import { limits } from '@/lib/model/analysis';
 import { randomStructure } from './random-structure';
 
-/** Longest time, in milliseconds, for what is refused. */
-const patience = 1_000;
-
 /** Every number of an answer, however deep. */
 function* numbers(value: unknown): Generator<number> {
   if (typeof value === 'number') yield value;
@@ -15,13 +12,11 @@ function* numbers(value: unknown): Generator<number> {
 }
 
 function expectDecent(input: unknown): void {
-  const start = performance.now();
   const result = solve(input);
   if (result.ok) {
     for (const n of numbers(result.value)) if (!Number.isFinite(n)) throw new Error(`an answer holds ${n}`);
     return;
   }
-  expect(performance.now() - start).toBeLessThan(patience);
   expect(result.refusal.code).toMatch(/^[a-zA-Z0-9-]+$/);
   expect(result.refusal.message.length).toBeGreaterThan(10);
 }

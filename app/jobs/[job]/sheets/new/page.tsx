@@ -31,9 +31,10 @@ export default async function NewSheetPage({ params }: { params: Promise<{ job: 
       <div className="in">
         <h1>New sheet</h1>
         <p className="lead3">
-          A starting sheet is blank but for its shape. Its number is given once and kept.
+          A starting sheet is blank but for its shape; everything can be changed at the desk. Its number is
+          given once and kept.
         </p>
-        <SheetForm jobId={job.id} />
+        <SheetForm jobId={job.id} units={job.units} />
       </div>
     </Page>
   );
