@@ -1,4 +1,4 @@
-import { createElement, type ReactNode } from 'react';
+import { createElement, memo, type ReactNode } from 'react';
 import type { ShapeRef } from '@/lib/figures/drawing';
 import type { Block } from '../block';
 import { EquationView } from './equation-view';
@@ -20,8 +20,12 @@ export interface BlockProps {
   onLight?: (ref: ShapeRef | undefined) => void;
 }
 
-/** One numbered line of a sheet: number, source and marks outside the double rule, the work inside. */
-export function BlockView({ block, on, delta, marks, after, lit, onLight }: BlockProps) {
+/**
+ * One numbered line of a sheet: number, source and marks outside the double rule, the work inside. A line whose block
+ * is the same object as before is not set again.
+ */
+export const BlockView = memo(function BlockView(props: BlockProps) {
+  const { block, on, delta, marks, after, lit, onLight } = props;
   const source = 'source' in block ? block.source : undefined;
   return (
     <div className={`blk ${block.kind}${on ? ' on' : ''}`} id={`line-${block.id}`} data-line={block.id}>
@@ -41,7 +45,7 @@ export function BlockView({ block, on, delta, marks, after, lit, onLight }: Bloc
       </div>
     </div>
   );
-}
+});
 
 function BlockBody({ block, lit, onLight }: Pick<BlockProps, 'block' | 'lit' | 'onLight'>) {
   switch (block.kind) {

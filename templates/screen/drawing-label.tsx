@@ -23,6 +23,8 @@ export function DrawingLabel({ label, className }: { label: LabelShape; classNam
   return (
     <text
       className={`${className} fill-${label.tone ?? 'ink'}${label.halo ? ' halo' : ''}`}
+      data-of={label.ref?.of}
+      data-id={label.ref?.id}
       fontSize={size}
       textAnchor={anchor}
       transform={turn ? `rotate(${-turn} ${x} ${y})` : undefined}

@@ -32,7 +32,7 @@ export function SheetView({ blocks, on, delta, marks, after, lit, onLight, wideM
             delta={delta?.(block)}
             marks={marks?.(block)}
             after={after?.(block)}
-            lit={lit}
+            lit={block.kind === 'figure' ? lit : undefined}
             onLight={onLight}
           />
         ))}

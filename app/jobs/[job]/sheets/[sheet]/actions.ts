@@ -9,7 +9,15 @@ import { freezeSheet as freeze } from '@/lib/services/freeze-sheet';
 import { keepDraft as keep } from '@/lib/services/keep-draft';
 import { listDraftVersions } from '@/lib/services/list-draft-versions';
 import { openDraftVersion } from '@/lib/services/open-draft-version';
-import type { Keeping, OpenedVersion, Trial, VersionLine, Writing } from './_desk/writing';
+import {
+  type Keeping,
+  type OpenedVersion,
+  type Overlay,
+  overlays,
+  type Trial,
+  type VersionLine,
+  type Writing,
+} from './_desk/writing';
 import { describeTrial } from './describe-trial';
 import { describeWriting } from './describe-writing';
 
@@ -39,7 +47,7 @@ export async function keepDraft(sheetId: string, version: number, draft: Draft):
 }
 
 /** Solves and writes a draft for the live page. Nothing is stored. */
-export async function writeCalculation(draft: Draft): Promise<Writing> {
+export async function writeCalculation(draft: Draft, overlay: Overlay): Promise<Writing> {
   await requireActor();
   const parsed = draftSchema.safeParse(draft);
   if (!parsed.success) {
@@ -48,7 +56,7 @@ export async function writeCalculation(draft: Draft): Promise<Writing> {
       errors: parsed.error.issues.map((i) => ({ path: i.path.join('.'), message: i.message })),
     };
   }
-  return describeWriting(parsed.data);
+  return describeWriting(parsed.data, z.enum(overlays).parse(overlay));
 }
 
 /** Tries another set of redundants on a draft. */

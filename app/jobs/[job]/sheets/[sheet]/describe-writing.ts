@@ -16,12 +16,12 @@ import { readDraft } from '@/lib/model/read-draft';
 import { solveDraft } from '@/lib/services/solve-draft';
 import { symbolTex } from '@/lib/typeset/write-symbol';
 import { measureLabel } from '@/templates/screen/lay-out-label';
-import type { QuantityChoice, Writing } from './_desk/writing';
+import type { Overlay, QuantityChoice, Writing } from './_desk/writing';
 
 const width = 418;
 
 /** A draft solved and written, in the words and drawings the desk shows. */
-export function describeWriting(draft: Draft): Writing {
+export function describeWriting(draft: Draft, overlay: Overlay): Writing {
   const start = performance.now();
   const solved = solveDraft(draft);
   if (!solved.ok) {
@@ -78,22 +78,23 @@ export function describeWriting(draft: Draft): Writing {
           ]
         : [];
     }),
-    overlays: {
-      moments: cases.map((id) =>
-        drawDiagram(analysis, solution.cases[id]?.members ?? {}, {
-          ...options,
-          which: 'M',
-          title: `Moments, case ${id}`,
-        }),
-      ),
-      deflected: cases.map((id) =>
-        drawDeflected(analysis, solution.cases[id]?.members ?? {}, {
-          ...options,
-          timesEI0: solution.cases[id]?.displacementsTimesEI0,
-        }),
-      ),
-    },
+    overlay: { which: overlay, drawings: cases.map((id) => drawOverlay(solution, id, overlay)) },
   };
+}
+
+const overlayNames = { N: 'Axial force', V: 'Shear', M: 'Moments' };
+
+function drawOverlay(solution: Solution, id: string, which: Overlay) {
+  const options = { width, measure: measureLabel };
+  const solved = solution.cases[id];
+  const members = solved?.members ?? {};
+  return which === 'deflected'
+    ? drawDeflected(solution.analysis, members, { ...options, timesEI0: solved?.displacementsTimesEI0 })
+    : drawDiagram(solution.analysis, members, {
+        ...options,
+        which,
+        title: `${overlayNames[which]}, case ${id}`,
+      });
 }
 
 function reactionRows(

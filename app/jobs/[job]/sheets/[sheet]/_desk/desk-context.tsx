@@ -17,6 +17,10 @@ export interface DeskContext {
   visit: (path: string) => void;
   lit: ShapeRef | undefined;
   light: (ref: ShapeRef | undefined) => void;
+  /** Opens what belongs to an element of the drawing: a joint's support, a member's load. */
+  open: (ref: ShapeRef) => void;
+  /** Puts the focus on the field at `path`, on whichever step it stands. */
+  goTo: (path: string) => void;
 }
 
 const Context = createContext<DeskContext | undefined>(undefined);

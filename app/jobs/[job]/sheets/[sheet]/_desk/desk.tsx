@@ -6,17 +6,20 @@ import type { Draft } from '@/lib/model/draft';
 import type { FieldError } from '@/lib/model/field-reader';
 import { readDraft } from '@/lib/model/read-draft';
 import { keepDraft, tryRedundants, writeCalculation } from '../actions';
-import { ConflictSlip } from './conflict-slip';
 import { DeskProvider } from './desk-context';
-import type { DeskStepKey } from './desk-step';
 import { changeDraft } from './draft-history';
+import { DraftNotices } from './draft-notices';
 import { DraftVersions } from './draft-versions';
+import type { Shown } from './drawing-tools';
 import { FreezeForm } from './freeze-form';
 import { KeepingLine } from './keeping-line';
 import { LivePage } from './live-page';
 import { StepForm } from './step-form';
 import { StepList } from './step-list';
-import { readBackup, useKeeping } from './use-keeping';
+import { useKeeping } from './use-keeping';
+import { useOpenElement } from './use-open-element';
+import { usePlace } from './use-place';
+import { useUndoKeys } from './use-undo-keys';
 import { useWriting } from './use-writing';
 import { writeAtPath } from './write-at-path';
 import './desk.css';
@@ -30,33 +33,21 @@ export interface DeskProps {
   imprint: string[];
 }
 
-type Zone = 'steps' | 'form' | 'page';
-
 /** The screen where one sheet is made: steps in the margin, the step's form, the live page. */
 export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskProps) {
   const [history, dispatch] = useReducer(changeDraft, { past: [], present: initial, future: [] });
   const draft = history.present;
-  const [step, setStep] = useState<DeskStepKey>('geometry');
-  const [zone, setZone] = useState<Zone>('form');
+  const place = usePlace();
+  const { step, zone, caseIndex, goTo } = place;
+  const [shown, setShown] = useState<Shown>('structure');
   const [visited, setVisited] = useState<ReadonlySet<string>>(new Set());
-  const [lit, light] = useState<ShapeRef | undefined>();
-  const [waiting, setWaiting] = useState<Draft | undefined>();
+  const [lit, setLit] = useState<ShapeRef | undefined>();
 
   const keep = useCallback((at: number, d: Draft) => keepDraft(sheet.id, at, d), [sheet.id]);
   const keeping = useKeeping(sheet.id, draft, { version, keptAt }, keep);
-  const { writing, pages, late } = useWriting(draft, writeCalculation);
-
-  useEffect(() => setWaiting(readBackup(sheet.id, version)), [sheet.id, version]);
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent) => {
-      const command = event.ctrlKey || event.metaKey;
-      if (!command || event.key.toLowerCase() !== 'z') return;
-      event.preventDefault();
-      dispatch({ type: event.shiftKey ? 'redo' : 'undo' });
-    };
-    window.addEventListener('keydown', onKey);
-    return () => window.removeEventListener('keydown', onKey);
-  }, []);
+  const overlay = shown === 'structure' ? 'M' : shown;
+  const { writing, pages, late } = useWriting(draft, overlay, writeCalculation);
+  useUndoKeys(dispatch);
 
   const errors = useMemo((): FieldError[] => {
     const read = readDraft(draft);
@@ -66,6 +57,17 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
       : [];
   }, [draft, writing]);
 
+  // The tables speak of joints; a support is lit as its joint.
+  const light = useCallback(
+    (ref: ShapeRef | undefined) => setLit(ref?.of === 'support' ? { of: 'joint', id: ref.id } : ref),
+    [],
+  );
+  const change = useCallback(
+    (name: string, apply: (d: Draft) => Draft) =>
+      dispatch({ type: 'edit', path: name, at: Date.now(), apply }),
+    [],
+  );
+  const open = useOpenElement({ draft, caseIndex, change, goTo });
   const desk = useMemo(
     () => ({
       draft,
@@ -73,14 +75,18 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
       visited,
       lit,
       light,
-      edit: (path: string, value: unknown) =>
-        dispatch({ type: 'edit', path, at: Date.now(), apply: (d) => writeAtPath(d, path, value) }),
-      change: (name: string, apply: (d: Draft) => Draft) =>
-        dispatch({ type: 'edit', path: name, at: Date.now(), apply }),
+      open,
+      goTo,
+      change,
+      edit: (path: string, value: unknown) => change(path, (d) => writeAtPath(d, path, value)),
       visit: (path: string) => setVisited((v) => (v.has(path) ? v : new Set(v).add(path))),
     }),
-    [draft, errors, visited, lit],
+    [draft, errors, visited, lit, light, open, goTo, change],
   );
+  useEffect(() => {
+    if (caseIndex > 0 && caseIndex >= draft.cases.length) place.setCase(Math.max(0, draft.cases.length - 1));
+  }, [caseIndex, draft.cases.length, place.setCase]);
+  const replace = (next: Draft) => dispatch({ type: 'replace', draft: next });
 
   return (
     <DeskProvider value={desk}>
@@ -88,20 +94,16 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
         <div className="bigno">{sheet.number}</div>
         <div className="under">{draft.title}</div>
         <StepList
+          draft={draft}
           current={step}
           onStep={(key) => {
-            setStep(key);
-            setZone('form');
+            place.goStep(key);
           }}
           errors={errors}
           writing={writing}
         />
         <div className="mgfoot">
-          <DraftVersions
-            sheetId={sheet.id}
-            draft={draft}
-            onReturn={(d) => dispatch({ type: 'replace', draft: d })}
-          />
+          <DraftVersions sheetId={sheet.id} draft={draft} onReturn={replace} />
         </div>
         <FreezeForm
           sheetId={sheet.id}
@@ -113,42 +115,34 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
       <main id="main" className="deskmain" data-zone={zone}>
         <div className="zones">
           <div className="in form">
-            {waiting ? (
-              <p className="ans" role="status">
-                This browser holds changes that were not handed over.{' '}
-                <button
-                  type="button"
-                  className="linkish"
-                  onClick={() => {
-                    dispatch({ type: 'replace', draft: waiting });
-                    setWaiting(undefined);
-                  }}
-                >
-                  Take them back
-                </button>
-              </p>
-            ) : null}
-            {keeping.state.state === 'conflict' ? (
-              <ConflictSlip
-                state={keeping.state}
-                onMine={() =>
-                  keeping.state.state === 'conflict' && keeping.goOn(keeping.state.version, undefined)
-                }
-                onTheirs={(theirs) => {
-                  if (keeping.state.state === 'conflict') keeping.goOn(keeping.state.version, theirs);
-                  dispatch({ type: 'replace', draft: theirs });
-                }}
-              />
-            ) : null}
+            <DraftNotices
+              sheetId={sheet.id}
+              version={version}
+              state={keeping.state}
+              goOn={keeping.goOn}
+              replace={replace}
+            />
             <StepForm
               step={step}
               writing={writing}
               pages={pages}
               sets={sets}
+              caseIndex={caseIndex}
+              onCase={place.setCase}
+              shown={shown}
+              onShow={setShown}
               tryOut={(q) => tryRedundants(draft, q)}
             />
           </div>
-          <LivePage sheet={sheet.number} writing={writing} pages={pages} late={late} errors={errors} />
+          <LivePage
+            sheet={sheet.number}
+            step={step}
+            caseIndex={caseIndex}
+            writing={writing}
+            pages={pages}
+            late={late}
+            errors={errors}
+          />
         </div>
       </main>
       <nav className="three" aria-label="Parts of the desk">
@@ -157,7 +151,7 @@ export function Desk({ sheet, initial, version, keptAt, sets, imprint }: DeskPro
             key={z}
             type="button"
             aria-current={z === zone ? 'true' : undefined}
-            onClick={() => setZone(z)}
+            onClick={() => place.setZone(z)}
           >
             {z === 'steps' ? 'Steps' : z === 'form' ? 'Form' : 'Page'}
           </button>

@@ -30,7 +30,7 @@ export function FreezeForm({ sheetId, number, ready, handOver }: Props) {
     return (
       <div className="mgfoot">
         <button type="button" className="linkish" onClick={() => setOpen(true)} disabled={!ready}>
-          Freeze as revision {number}
+          Freeze<span className="wide-only"> as revision {number}</span>
         </button>
       </div>
     );

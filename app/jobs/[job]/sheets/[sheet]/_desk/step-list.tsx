@@ -1,10 +1,13 @@
 'use client';
 
+import type { Draft } from '@/lib/model/draft';
 import type { FieldError } from '@/lib/model/field-reader';
 import { type DeskStepKey, deskSteps, errorsOfStep } from './desk-step';
+import { stepWords } from './step-words';
 import type { Writing } from './writing';
 
 interface Props {
+  draft: Draft;
   current: DeskStepKey;
   onStep: (step: DeskStepKey) => void;
   errors: readonly FieldError[];
@@ -12,11 +15,11 @@ interface Props {
 }
 
 /** The steps in the margin, each with what it still needs; any may be visited at any time. */
-export function StepList({ current, onStep, errors, writing }: Props) {
+export function StepList({ draft, current, onStep, errors, writing }: Props) {
   return (
     <ol className="steps" aria-label="Steps">
       {deskSteps.map((step, i) => {
-        const state = stepState(step.key, errors, writing);
+        const state = stepState(step.key, draft, errors, writing);
         return (
           <li key={step.key}>
             <button
@@ -40,11 +43,16 @@ export function StepList({ current, onStep, errors, writing }: Props) {
   );
 }
 
-function stepState(step: DeskStepKey, errors: readonly FieldError[], writing: Writing | undefined) {
+function stepState(
+  step: DeskStepKey,
+  draft: Draft,
+  errors: readonly FieldError[],
+  writing: Writing | undefined,
+) {
   const open = errorsOfStep(errors, step).length;
   if (open > 0) return { done: false, words: open === 1 ? 'one field open' : `${open} fields open` };
   const later = step === 'redundants' || step === 'results' || step === 'checks';
-  if (!later) return { done: true, words: 'complete' };
+  if (!later) return { done: true, words: stepWords(draft, step) };
   if (writing?.state === 'refused') return { done: false, words: 'not solved' };
   if (writing?.state !== 'written') return { done: false, words: 'waits' };
   switch (step) {

@@ -41,13 +41,11 @@ export function useKeeping(
   const [state, setState] = useState<KeepingState>({ state: 'kept', at: initial.keptAt });
   const version = useRef(initial.version);
   const handed = useRef(draft);
-  const busy = useRef(false);
+  const under = useRef<Promise<void> | undefined>(undefined);
   const latest = useRef(draft);
   latest.current = draft;
 
-  const handOver = useCallback(async () => {
-    if (busy.current || handed.current === latest.current) return;
-    busy.current = true;
+  const send = useCallback(async () => {
     const sent = latest.current;
     setState((s) => (s.state === 'offline' ? s : { state: 'keeping' }));
     try {
@@ -72,10 +70,18 @@ export function useKeeping(
       }
     } catch {
       setState({ state: 'offline' });
-    } finally {
-      busy.current = false;
     }
   }, [keep, sheetId]);
+
+  /** Resolves when the draft as it stands now was handed over, after what is under way. */
+  const handOver = useCallback(async () => {
+    while (under.current) await under.current;
+    if (handed.current === latest.current) return;
+    under.current = send().finally(() => {
+      under.current = undefined;
+    });
+    await under.current;
+  }, [send]);
 
   const stopped = state.state === 'conflict';
   useEffect(() => {

@@ -19,6 +19,12 @@ export interface FixedQuantity extends QuantityChoice {
   values: { case: string; value: string }[];
 }
 
+/** What may be drawn over the structure: axial force, shear, moment, or the deflected shape. */
+export const overlays = ['N', 'V', 'M', 'deflected'] as const;
+export type Overlay = (typeof overlays)[number];
+
+export type WrittenPages = Extract<Writing, { state: 'written' }>;
+
 /** What the server says of a draft: its written pages, what is still missing, or why it cannot be solved. */
 export type Writing =
   | {
@@ -36,7 +42,8 @@ export type Writing =
       checks: { subject: string; residual: string; tolerance: string; holds: boolean }[];
       primary?: Drawing;
       units: { symbol: string; drawing: Drawing }[];
-      overlays: { moments: Drawing[]; deflected: Drawing[] };
+      /** The diagram asked for, a drawing a case in their order. */
+      overlay: { which: Overlay; drawings: Drawing[] };
     }
   | { state: 'incomplete'; errors: FieldError[] }
   | { state: 'refused'; refusal: Refusal; drawing?: Drawing };

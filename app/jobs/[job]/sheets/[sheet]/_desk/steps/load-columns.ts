@@ -81,7 +81,7 @@ export function loadColumns(
     {
       key: 'kind',
       head: 'Load',
-      width: '96px',
+      width: '88px',
       field: 'kind',
       options: loadKinds,
       read: (row) => row.kind,
@@ -90,7 +90,7 @@ export function loadColumns(
     {
       key: 'on',
       head: 'On',
-      width: '60px',
+      width: '56px',
       field: 'on',
       options: (row) =>
         atJoint(row)
@@ -104,7 +104,7 @@ export function loadColumns(
     {
       key: 'direction',
       head: 'Sense',
-      width: '98px',
+      width: '88px',
       field: 'direction',
       options: directionsOf,
       used: directed,
@@ -115,16 +115,16 @@ export function loadColumns(
       kind: (row) => loadFieldKinds(row).first ?? 'number',
       used: (row) => loadFieldKinds(row).first !== undefined,
     }),
-    text('second', 'to value', '70px', {
+    text('second', 'to value', '64px', {
       kind: (row) => loadFieldKinds(row).second ?? 'number',
       used: (row) => loadFieldKinds(row).second !== undefined,
     }),
-    text('from', 'from', '54px', { kind: 'length', used: placed, L: spanOf }),
-    text('to', 'to', '54px', { kind: 'length', used: spread, L: spanOf }),
+    text('from', 'from', '48px', { kind: 'length', used: placed, L: spanOf }),
+    text('to', 'to', '48px', { kind: 'length', used: spread, L: spanOf }),
     {
       key: 'source',
       head: 'Source',
-      width: 'auto',
+      width: '96px',
       field: 'source',
       read: (row) => row.source,
       write: (row, source) => ({ ...row, source }),

@@ -54,22 +54,24 @@ export function LoadsStep({ current, onCase }: { current: number; onCase: (index
 
   return (
     <>
-      <div className="tabs" role="tablist" aria-label="Load cases">
-        {draft.cases.map((c, i) => (
-          <button
-            key={`${c.id}-${c.title}`}
-            type="button"
-            role="tab"
-            aria-selected={i === current}
-            onClick={() => onCase(i)}
-          >
-            <span className="num">{c.id}</span> {c.title}
-          </button>
-        ))}
+      <div className="casehead">
+        <div className="tabs" role="tablist" aria-label="Load cases">
+          {draft.cases.map((c, i) => (
+            <button
+              key={`${c.id}-${c.title}`}
+              type="button"
+              role="tab"
+              aria-selected={i === current}
+              onClick={() => onCase(i)}
+            >
+              <span className="num">{c.id}</span> {c.title}
+            </button>
+          ))}
+        </div>
+        <button type="button" className="addcase" onClick={addCase}>
+          Add a case
+        </button>
       </div>
-      <button type="button" className="addrow" onClick={addCase}>
-        Add a case
-      </button>
       {chosen ? (
         <div role="tabpanel" aria-label={`Case ${chosen.id}`}>
           <CaseFields index={current} chosen={chosen} onRemove={removeCase} />

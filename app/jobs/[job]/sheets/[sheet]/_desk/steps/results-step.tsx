@@ -4,10 +4,11 @@ import type { DraftAsk } from '@/lib/model/draft';
 import { DrawingView } from '@/templates/screen/drawing-view';
 import { RichText } from '@/templates/screen/rich-text';
 import { useDesk } from '../desk-context';
+import { type Shown, shownNames } from '../drawing-tools';
 import { CellTable } from '../table/cell-table';
 import type { Column } from '../table/column';
 import { writeAtPath } from '../write-at-path';
-import type { Writing } from '../writing';
+import { overlays, type Writing } from '../writing';
 
 const directions = [
   { value: 'across', label: 'across the member' },
@@ -67,9 +68,11 @@ function blankAsk(members: readonly string[]): DraftAsk {
 export function ResultsStep({
   pages,
   members,
+  onShow,
 }: {
   pages: Extract<Writing, { state: 'written' }> | undefined;
   members: readonly string[];
+  onShow: (shown: Shown) => void;
 }) {
   const { draft, change } = useDesk();
   return (
@@ -104,8 +107,28 @@ export function ResultsStep({
               ))}
             </tbody>
           </table>
-          {pages.overlays.moments.map((d) => (
-            <DrawingView key={d.alt} drawing={d} className="mt-3" />
+          <div className="drawtools mt-5">
+            <fieldset>
+              <legend className="sr-only">Diagram of each case</legend>
+              {overlays.map((which) => (
+                <button
+                  key={which}
+                  type="button"
+                  aria-pressed={pages.overlay.which === which}
+                  onClick={() => onShow(which)}
+                >
+                  {shownNames[which]}
+                </button>
+              ))}
+            </fieldset>
+          </div>
+          {pages.overlay.drawings.map((d, i) => (
+            <figure key={draft.cases[i]?.id ?? d.alt} className="mt-3">
+              <figcaption className="ans">
+                <span className="num">{draft.cases[i]?.id}</span> {draft.cases[i]?.title}
+              </figcaption>
+              <DrawingView drawing={d} />
+            </figure>
           ))}
         </>
       ) : (
