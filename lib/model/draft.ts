@@ -161,6 +161,8 @@ export const draft = z.object({
   cases: z.array(draftCase).max(64, 'A sheet takes at most 64 cases.'),
   /** Key of a published set of combinations, or blank; the office's own come after it. */
   combinationSet: z.string().max(40).default(''),
+  /** Whether the live load acts on the spans in turn, in the arrangements that govern. */
+  patterns: z.boolean().default(false),
   combinations: z.array(draftCombination).max(256, 'A sheet takes at most 256 sums of its own.').default([]),
   redundants: z.array(quantity).max(2_000).optional(),
   displacements: z.array(draftAsk).max(64).default([]),

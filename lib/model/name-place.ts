@@ -35,6 +35,7 @@ const names: Record<string, string> = {
   on: 'where',
   per: 'measured per',
   combinationSet: 'published set of combinations',
+  patterns: 'live load on spans in turn',
   combinations: 'own combination',
   redundants: 'redundants',
   displacements: 'displacement',

@@ -66,7 +66,7 @@ function signs(s: BasisStep): string {
 
 function unitWords(s: BasisStep): string {
   const u = unitNames(s.units);
-  const small = s.units === 'US' ? 'inches, 1 ft = 12 in.' : 'millimetres';
+  const small = s.units === 'US' ? 'inches (1 ft = 12 in)' : 'millimetres';
   const said = [`${u.force} and ${u.length}; deflections in ${small}.`];
   if (s.relative) said.push('Bending stiffnesses are multiples $k$ of one reference $EI_0$.');
   else said.push('$EI_0$ is the bending stiffness of the reference member; $k=EI/EI_0$.');

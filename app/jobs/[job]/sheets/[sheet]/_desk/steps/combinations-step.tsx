@@ -60,7 +60,9 @@ interface Props {
 
 /** A published set of combinations, and the office's own. */
 export function CombinationsStep({ sets, writing }: Props) {
-  const { draft, change } = useDesk();
+  const { draft, change, edit } = useDesk();
+  const fault =
+    writing?.state === 'incomplete' ? writing.errors.find((e) => e.path === 'patterns')?.message : undefined;
   const options = [{ value: '', label: 'none' }, ...sets.map((s) => ({ value: s.key, label: s.title }))];
   return (
     <>
@@ -71,6 +73,19 @@ export function CombinationsStep({ sets, writing }: Props) {
         options={options}
       />
       <p className="ans">Factors follow the nature of each case. The local code decides which set governs.</p>
+      <label className="flex gap-2 items-center mt-3">
+        <input
+          type="checkbox"
+          checked={draft.patterns}
+          disabled={draft.combinationSet === ''}
+          onChange={(event) => edit('patterns', event.target.checked)}
+        />
+        Live load on the spans in turn
+      </label>
+      <p className={fault ? 'ans e' : 'ans'}>
+        {fault ??
+          'The live case is split span by span and combined in the arrangements that give the greatest and least moments and reactions. The page grows with the spans.'}
+      </p>
       {writing?.state === 'written' && writing.combinations.length > 0 ? (
         <ol className="plainlist">
           {writing.combinations.map((c) => (
