@@ -62,7 +62,7 @@ describe('the main job', () => {
     await page.getByRole('button', { name: 'Freeze', exact: true }).click();
     await page.waitForURL(/\/revisions\//);
     await expectAccessible(page);
-    await page.getByLabel('Checker').selectOption({ label: 'Jonas Weir' });
+    await page.getByLabel('Checker', { exact: true }).selectOption({ label: 'Jonas Weir' });
     await page.getByLabel(/Every input is held/).uncheck();
     await page.getByRole('button', { name: 'Send to check' }).click();
     await page.waitForURL(/\/checks\//);

@@ -1,11 +1,11 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { notFound } from 'next/navigation';
 import { Page } from '@/app/components/page-layout';
 import { ReadingPage } from '@/app/components/reading-page';
 import { sayMoment } from '@/app/components/say-date';
 import { orRefuse, requireActor } from '@/app/session';
 import { openCheck } from '@/lib/services/open-check';
-import { NotFound } from '@/lib/services/service-error';
 import { writeDifference, writeValue } from '@/templates/write-pair';
 import '../../../revisions/[revision]/changes/changes.css';
 import '../inputs/inputs.css';
@@ -22,7 +22,7 @@ export default async function ComparisonPage({ params }: Props) {
   const { check: id } = await params;
   const { job, revision, check, own } = await orRefuse(openCheck(actor, id));
   const compared = own?.comparison;
-  if (!own || !compared) throw new NotFound(`comparison of check ${id}`);
+  if (!own || !compared) notFound();
   const back = `/jobs/${job.id}/checks/${id}`;
   const alone = compared.pairs.filter((p) => p.before === undefined || p.after === undefined).length;
   return (
