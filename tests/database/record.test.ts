@@ -116,7 +116,7 @@ describe('checking', () => {
     const { checker, engineer } = office.people;
     const { revisionId } = await frozenSheet(office, await makeJob(office));
     const { checkId } = need(
-      await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 2 }),
+      await sendToCheck(engineer, { revisionId, checkerId: checker.personId, category: 1 }),
     );
     need(
       await markLine(checker, {
