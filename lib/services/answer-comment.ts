@@ -40,7 +40,7 @@ export async function answerComment(actor: Actor, raw: unknown): Promise<Result<
       at: new Date(),
     });
     const about = { jobId: comment.job_id, aboutId: comment.submittal_id };
-    await record('answered a comment', `comment ${comment.number}: ${answer}`.slice(0, 400), about);
+    await record('answered', `comment ${comment.number}: ${answer}`.slice(0, 400), about);
     return null;
   });
 }

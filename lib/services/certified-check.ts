@@ -9,6 +9,8 @@ import { listInputs } from '@/lib/model/list-inputs';
 import { blocks } from '@/templates/block';
 import type { CertifiedCheck } from '@/templates/compose-certificate';
 import { writeDate } from '@/templates/paper/imprint';
+import type { Actor } from './actor';
+import { dayIn } from './day-in';
 import { markPlace, markState } from './mark-state';
 import { valuePair } from './result-values';
 import { NotFound } from './service-error';
@@ -22,10 +24,13 @@ const stateWords: Record<MarkStep, string> = {
   carried: 'carried on',
 };
 const kindWords = { agrees: 'agrees', correct: 'correct this', query: 'query' };
-const day = (at: Date) => writeDate(at.toISOString().slice(0, 10));
-
-/** What the record holds of a check, as it is certified; days are those of UTC. Throws NotFound without such a check. */
-export async function certifiedCheck(db: Knex, officeId: string, checkId: string): Promise<CertifiedCheck> {
+/** What the record holds of a check, as it is certified; days are those of the office. Throws NotFound without such a check. */
+export async function certifiedCheck(
+  db: Knex,
+  { officeId, zone }: Pick<Actor, 'officeId' | 'zone'>,
+  checkId: string,
+): Promise<CertifiedCheck> {
+  const day = (at: Date) => writeDate(dayIn(zone, at));
   const check = await checkById(db, officeId, checkId);
   const r = check && (await revisionById(db, officeId, check.revision_id));
   if (!check || !r) throw new NotFound(`check ${checkId}`);
@@ -73,7 +78,7 @@ export async function certifiedCheck(db: Knex, officeId: string, checkId: string
       const mark = marks.find((m) => m.place === 'input' && m.line === i.place);
       return mark ? { ...i, mark: kindWords[mark.kind], drawing: mark.drawing } : i;
     }),
-    ...(compared ? { comparison: await sideBySide(db, officeId, compared) } : {}),
+    ...(compared ? { comparison: await sideBySide(db, officeId, compared, day) } : {}),
   };
 }
 
@@ -83,6 +88,7 @@ async function sideBySide(
   db: Knex,
   officeId: string,
   compared: { own_revision_id: string; pairs: unknown; at: Date },
+  day: (at: Date) => string,
 ) {
   const own = await revisionById(db, officeId, compared.own_revision_id);
   if (!own) throw new Error(`revision ${compared.own_revision_id} is gone`);

@@ -42,7 +42,7 @@ export async function commentOnReview(
     const number = await insertComment(trx, row);
     const words = `comment ${number} on ${sheetName(revision.sheet_number)}, line ${line}: ${text}`;
     const about = { digest: revision.digest, jobId: submittal.job_id, aboutId: submittal_id };
-    await record('commented', words.slice(0, 400), about);
+    await record('left', words.slice(0, 400), about);
     return { number };
   });
 }

@@ -70,7 +70,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
           people,
           revisions.map((r) => r.checker),
         ),
-        checks: await checksOf(trx, officeId, revisions),
+        checks: await checksOf(trx, actor, revisions),
         history: await packageHistory(trx, officeId, jobId, revisions),
         comments: await registerOfJob(trx, actor, jobId),
       },
@@ -162,8 +162,8 @@ async function printWithField(
   return { bytes, pages: printed.pages.length };
 }
 
-async function checksOf(trx: Knex.Transaction, officeId: string, revisions: readonly RevisionLine[]) {
+async function checksOf(trx: Knex.Transaction, actor: Actor, revisions: readonly RevisionLine[]) {
   return Promise.all(
-    revisions.flatMap((r) => (r.check_id === null ? [] : [certifiedCheck(trx, officeId, r.check_id)])),
+    revisions.flatMap((r) => (r.check_id === null ? [] : [certifiedCheck(trx, actor, r.check_id)])),
   );
 }

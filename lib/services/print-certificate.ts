@@ -7,6 +7,7 @@ import { composeCertificate } from '@/templates/compose-certificate';
 import { renderSheet } from '@/templates/paper/render-sheet';
 import type { Actor } from './actor';
 import { certifiedCheck } from './certified-check';
+import { dayIn } from './day-in';
 import { shortDigest } from './print-package';
 import { everyone, requireRole } from './require-role';
 import { requireSeen } from './require-seen';
@@ -26,10 +27,10 @@ export async function printCertificate(
   const job = r && (await jobById(db, officeId, r.job_id));
   if (!check || !r || !job) throw new NotFound(`check ${checkId}`);
   await requireSeen(db, actor, [r.sheet_id]);
-  const certified = await certifiedCheck(db, officeId, checkId);
+  const certified = await certifiedCheck(db, actor, checkId);
   const { blocks, marks } = composeCertificate(certified);
   const sheet = sheetName(r.sheet_number);
-  const date = (at: Date) => at.toISOString().slice(0, 10);
+  const date = (at: Date) => dayIn(actor.zone, at);
   const printed = await renderSheet({
     sheet: {
       number: 'check',

@@ -67,16 +67,18 @@ export default async function JobPage({ params }: JobPageProps) {
         {job.state === 'closed' ? (
           <p className="message">This job is closed. It can be read; nothing new is made in it.</p>
         ) : null}
-        <p className="i2">
-          {people.length === 0
-            ? 'Nobody is named for this job yet.'
-            : people.map((p) => `${p.name}, ${p.part.replaceAll('-', ' ')}`).join('; ')}{' '}
+        <p className="facts">
+          <span>
+            {people.length === 0
+              ? 'Nobody is named for this job yet.'
+              : people.map((p) => `${p.name}, ${p.part.replaceAll('-', ' ')}`).join('; ')}
+          </span>
           <Link className="t" href={`/jobs/${job.id}/comments`}>
             Comments
-          </Link>{' '}
+          </Link>
           <Link className="t" href={`/jobs/${job.id}/record`}>
             Record
-          </Link>{' '}
+          </Link>
           {mayExport ? (
             <Link className="t" href={`/jobs/${job.id}/people`}>
               People, close the job

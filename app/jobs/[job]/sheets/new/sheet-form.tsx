@@ -47,7 +47,9 @@ export function SheetForm({ jobId, units }: Props) {
         </div>
         {error ? <p className="ans e">{error}</p> : null}
       </fieldset>
-      <StartFields fields={fields} state={state} units={units} />
+      <div className="mb-5">
+        <StartFields fields={fields} state={state} units={units} />
+      </div>
       <TextField name="title" label="Title" state={state} maxLength={120} required />
       <div className="row">
         <SubmitButton>Make the sheet</SubmitButton>

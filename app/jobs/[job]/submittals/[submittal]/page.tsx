@@ -52,7 +52,7 @@ export default async function SubmittalPage({ params }: Props) {
           Submittal {submittal.number}, {submittal.purpose}
         </h1>
         {decision ? (
-          <p className="message done">
+          <p className="message">
             {decision.author} decided on {sayDate(decision.at, actor.zone)}: <b>{decision.words}</b>
           </p>
         ) : null}

@@ -19,7 +19,7 @@ export function GeometryStep() {
         <p className="ans">
           <button type="button" className="linkish" onClick={() => change('shape', toFrame)}>
             Turn into joints and members
-          </button>
+          </button>{' '}
           for a shape this form does not know; nothing typed is lost.
         </p>
       )}
