@@ -73,6 +73,10 @@ describe('the main job', () => {
     await checker.page.goto(checkUrl);
     await checker.page.locator('body').press('j');
     await checker.page.locator('body').press('a');
+    // Whoever is hindered by single keys switches them off (WCAG 2.2, 2.1.4).
+    await checker.page.getByLabel('Single keys mark and move').uncheck();
+    await checker.page.locator('body').press('c');
+    await checker.page.getByLabel('Single keys mark and move').check();
     await checker.page.getByRole('button', { name: 'Leave the mark' }).click();
     await checker.page.getByText(/is marked/).waitFor();
     await expectAccessible(checker.page);

@@ -14,6 +14,7 @@ import { LineMark } from './line-mark';
 import { MarkForm } from './mark-form';
 import { MarkList } from './mark-list';
 import { useCheckKeys } from './use-check-keys';
+import { useKeysChoice } from './use-keys-choice';
 
 export type MarkDraft = Pick<CheckMark, 'kind' | 'text'>;
 
@@ -65,7 +66,8 @@ export function CheckDesk(props: Props) {
     document.getElementById(`line-${to}`)?.scrollIntoView({ block: 'nearest' });
   };
   const step = (by: number) => go(lines[lines.indexOf(line) + by]);
-  useCheckKeys({ working, onStep: step, onKind: (kind) => write({ kind }) });
+  const [keys, chooseKeys] = useKeysChoice();
+  useCheckKeys({ working: working && keys, onStep: step, onKind: (kind) => write({ kind }) });
   const sheet = (
     <SheetView
       blocks={blocks}
@@ -88,11 +90,9 @@ export function CheckDesk(props: Props) {
         {check.note === '' ? null : <p>{check.note}</p>}
         {check.declaration === '' ? null : <p className="ans">Declared: {check.declaration}</p>}
         {props.comparison ? (
-          <p>
-            <Link className="t" href={props.comparison}>
-              The checker’s own values beside the designer’s
-            </Link>
-          </p>
+          <Link className="t" href={props.comparison}>
+            The checker’s own values beside the designer’s
+          </Link>
         ) : null}
         <p>
           <a className="t" href={props.certificate}>
@@ -113,6 +113,10 @@ export function CheckDesk(props: Props) {
                 setDrafts((all) => Object.fromEntries(Object.entries(all).filter(([at]) => at !== left)))
               }
             />
+            <label className="declare">
+              <input type="checkbox" checked={keys} onChange={(event) => chooseKeys(event.target.checked)} />
+              Single keys mark and move
+            </label>
             <p className="ans">
               {marks.filter((m) => m.place === 'line').length} of {lines.length} lines marked.
             </p>

@@ -23,6 +23,10 @@ import { useUndoKeys } from './use-undo-keys';
 import { useWriting } from './use-writing';
 import { writeAtPath } from './write-at-path';
 import './desk.css';
+import './desk-fields.css';
+import './desk-table.css';
+import './desk-page.css';
+import './desk-versions.css';
 
 export interface DeskProps {
   sheet: { id: string; number: string; nextRevision: number };
