@@ -20,7 +20,7 @@ const times = (k: string) => ({ ...blankStiffness(), k });
 export function threeSpanBeam(): Draft {
   const draft = startingDraft('beam', 'US', 'Deck beam on grid B, three spans');
   draft.basis = 'Drawing A-201 (invented). Members are designed on another sheet.';
-  draft.stiffness = { ...draft.stiffness, kind: 'relative', EI0: '31000 kip*ft^2' };
+  draft.stiffness = { ...draft.stiffness, kind: 'relative', EI0: '36000 kip*ft^2' };
   draft.geometry = {
     shape: 'beam',
     spans: ['18\'-0"', '22\'-0"', '16\'-0"'].map((length) => ({ length, stiffness: blankStiffness() })),
