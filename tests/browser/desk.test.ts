@@ -65,7 +65,7 @@ describe('the drawing and the page beside the form', () => {
     );
     await clickMember(page, '2-3');
     await page.getByRole('heading', { name: 'Loads', level: 1 }).waitFor();
-    expect(await focusedPath(page)).toBe('cases.0.loads.0.first');
+    await expect.poll(() => focusedPath(page), { timeout: 30_000 }).toBe('cases.0.loads.0.first');
     expect(await page.locator('[data-path="cases.0.loads.0.on"]').inputValue()).toBe('2-3');
     await page.keyboard.type('0.8 kip/ft');
     await page.getByText('Solution', { exact: true }).first().waitFor();
@@ -92,9 +92,9 @@ describe('the drawing and the page beside the form', () => {
     const width = () => drawing.evaluate((svg) => svg.getBoundingClientRect().width);
     const fitted = await width();
     await page.getByRole('button', { name: 'Larger' }).press('Enter');
-    expect(await width()).toBeCloseTo(1.5 * fitted, 0);
+    await expect.poll(width, { timeout: 30_000 }).toBeGreaterThan(1.4 * fitted);
     await page.getByRole('button', { name: 'Fit' }).press('Enter');
-    expect(await width()).toBe(fitted);
+    await expect.poll(width, { timeout: 30_000 }).toBe(fitted);
     await expectAccessible(page);
     expect(errors).toEqual([]);
   });
