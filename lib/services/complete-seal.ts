@@ -6,12 +6,10 @@ import { licencesOf } from '@/db/queries/people';
 import { dropPreparedSeals, insertFile, preparedSealById, setSubmittalState } from '@/db/queries/submittals';
 import { env } from '@/lib/env';
 import { log } from '@/lib/log';
-import { checkCms, type Person } from '@/lib/signing/check-cms';
-import { insertSignature } from '@/lib/signing/insert-signature';
+import type { Person } from '@/lib/signing/check-cms';
+import { completeSignature, NotIntact } from '@/lib/signing/complete-signature';
 import { SignatureRefusal } from '@/lib/signing/signature-refusal';
-import { type Hole, signedPart } from '@/lib/signing/signed-part';
-import { stampSignature } from '@/lib/signing/time-stamp';
-import { verifyPdf } from '@/lib/signing/verify-pdf';
+import type { Hole } from '@/lib/signing/signed-part';
 import type { Actor } from './actor';
 import { sealField } from './create-submittal';
 import { inTransaction } from './in-transaction';
@@ -51,7 +49,7 @@ export async function completeSeal(actor: Actor, raw: unknown): Promise<Result<n
   const person = { name: actor.name, licenceNumber: licence.number };
   try {
     const file = { bytes: new Uint8Array(prepared.bytes), hole: hole.parse(prepared.hole) };
-    const sealed = await signAndVerify(file, new Uint8Array(parsed.data.cms), person, now);
+    const sealed = await finish(file, new Uint8Array(parsed.data.cms), person);
     const sha256 = createHash('sha256').update(sealed).digest('hex');
     return await inTransaction(actor, async (trx, record) => {
       const { submittal, job } = await sealable(trx, actor, prepared.submittal_id, new Date());
@@ -81,28 +79,27 @@ export async function completeSeal(actor: Actor, raw: unknown): Promise<Result<n
   }
 }
 
-/** The file with the signature in its place, stamped if a service is set, and verified as a stranger would verify it. */
-async function signAndVerify(
+/** The finished file; without a trusted authority, or when it does not verify, nothing is stored. */
+async function finish(
   file: { bytes: Uint8Array<ArrayBuffer>; hole: Hole },
   signature: Uint8Array<ArrayBuffer>,
   person: Person,
-  now: Date,
 ): Promise<Uint8Array> {
   const trusted = trust();
   if (!trusted)
     refuse('no-trust', '', 'No authority is trusted here yet, so nothing can be sealed. Set TRUST_PEM_FILE.');
-  await checkCms(signature, signedPart(file.bytes, file.hole), person, trusted, now);
-  const url = env().timeStampUrl;
-  const stamped = url ? await stampSignature(signature, { url, anchors: trusted.stampAnchors }) : undefined;
-  const sealed = insertSignature(file, stamped ? stamped.cms : signature);
-  const report = await verifyPdf(sealed, {
-    trust: trusted,
-    expected: { fields: [sealField], stamped: url !== undefined },
-  });
-  if (!report.intact) {
-    log.error({ reasons: report.reasons }, 'a sealed file did not verify');
-    const why = report.reasons[0]?.sentence ?? 'no reason given';
+  try {
+    const { pdf } = await completeSignature(file, signature, person, {
+      trust: trusted,
+      timeStampUrl: env().timeStampUrl,
+      fields: [sealField],
+    });
+    return pdf;
+  } catch (error) {
+    if (!(error instanceof NotIntact)) throw error;
+    const { reasons } = error.report;
+    log.error({ reasons }, 'a sealed file did not verify');
+    const why = reasons[0]?.sentence ?? 'the signature does not cover the whole file.';
     refuse('not-intact', '', `The sealed file did not verify: ${why} Nothing was stored.`);
   }
-  return sealed;
 }

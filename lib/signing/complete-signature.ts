@@ -11,9 +11,18 @@ import { verifyPdf } from './verify-pdf';
 
 export interface SealingOffice {
   readonly trust: Trust;
-  /** Address of the RFC 3161 time-stamping service. */
-  readonly timeStampUrl: string;
+  /** Address of the RFC 3161 time-stamping service; without one the signature carries no stamp. */
+  readonly timeStampUrl?: string | undefined;
+  /** Fields that must be signed in the finished file. */
+  readonly fields?: readonly string[];
   readonly now?: () => Date;
+}
+
+/** A finished file that does not verify; it is never handed out. */
+export class NotIntact extends Error {
+  constructor(readonly report: FileReport) {
+    super('the sealed file does not verify');
+  }
 }
 
 export interface SealedFile {
@@ -24,21 +33,22 @@ export interface SealedFile {
 
 /**
  * Makes a sealed file of a prepared one and the signature a browser sent for it: checks the signature and its person,
- * has it stamped, inserts it, and verifies the whole file as a stranger would. Throws SignatureRefusal; nothing is
- * returned that does not verify. The caller makes sure that the file it was prepared from is still the current one.
+ * has it stamped, inserts it, and verifies the whole file as a stranger would. Throws SignatureRefusal, or NotIntact:
+ * nothing is returned that does not verify. The caller makes sure that the file it was prepared from is still the current one.
  */
 export async function completeSignature(
   prepared: Pick<PreparedFile, 'bytes' | 'hole'>,
   cms: Bytes,
   person: Person,
-  { trust, timeStampUrl, now = () => new Date() }: SealingOffice,
+  { trust, timeStampUrl, fields, now = () => new Date() }: SealingOffice,
 ): Promise<SealedFile> {
   await checkCms(cms, signedPart(prepared.bytes, prepared.hole), person, trust, now());
-  const stamped = await stampSignature(cms, { url: timeStampUrl, anchors: trust.stampAnchors }, now);
-  const pdf = insertSignature(prepared, stamped.cms);
-  const report = await verifyPdf(pdf, { trust, now: now() });
-  if (!report.intact || !report.signers.at(-1)?.coversWholeFile) {
-    throw new Error('the sealed file does not verify', { cause: report });
-  }
+  const stamped = timeStampUrl
+    ? await stampSignature(cms, { url: timeStampUrl, anchors: trust.stampAnchors }, now)
+    : undefined;
+  const pdf = insertSignature(prepared, stamped ? stamped.cms : cms);
+  const expected = { stamped: timeStampUrl !== undefined, ...(fields ? { fields } : {}) };
+  const report = await verifyPdf(pdf, { trust, expected, now: now() });
+  if (!report.intact || !report.signers.at(-1)?.coversWholeFile) throw new NotIntact(report);
   return { pdf, report };
 }
