@@ -10,6 +10,7 @@ import { insertFile, insertSubmittal } from '@/db/queries/submittals';
 import { placeSignatureFields } from '@/lib/signing/place-signature-fields';
 import type { Actor } from './actor';
 import { certifiedCheck } from './certified-check';
+import { changesSince } from './changes-since';
 import { engineerOfRecord } from './engineer-of-record';
 import { inTransaction } from './in-transaction';
 import { jobOpenToWork } from './job-open-to-work';
@@ -53,6 +54,7 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
     const engineer = await engineerOfRecord(trx, actor, job, people, at);
     const number = await takeNumber(trx, officeId, jobId, 'next_submittal');
     if (number === undefined) throw new NotFound(`job ${jobId}`);
+    const changes = await changesSince(trx, { office_id: officeId, job_id: jobId, number }, revisions);
     const printed = await printWithField(
       {
         office: actor.officeName,
@@ -71,7 +73,8 @@ export async function createSubmittal(actor: Actor, raw: unknown): Promise<Resul
           revisions.map((r) => r.checker),
         ),
         checks: await checksOf(trx, actor, revisions),
-        history: await packageHistory(trx, officeId, jobId, revisions),
+        previous: changes.since,
+        history: await packageHistory(trx, officeId, changes, revisions),
         comments: await registerOfJob(trx, actor, jobId),
       },
       revisions,

@@ -1,9 +1,9 @@
 // server only
 import type { Knex } from 'knex';
-import { type RevisionLine, revisionsOfSheet, revisionsOfSubmittal } from '@/db/queries/revisions';
-import { submittalsOf } from '@/db/queries/submittals';
+import { type RevisionLine, revisionsOfSheet } from '@/db/queries/revisions';
 import { blocks } from '@/templates/block';
 import { lastChanged } from '@/templates/last-changed';
+import type { Changes } from './changes-since';
 
 /** What came before a revision that goes out. */
 export interface RevisionPast {
@@ -19,17 +19,15 @@ export interface RevisionPast {
 export async function packageHistory(
   db: Knex,
   officeId: string,
-  jobId: string,
+  changes: Changes,
   revisions: readonly RevisionLine[],
 ): Promise<RevisionPast[]> {
-  const before = await lastSent(db, officeId, jobId);
   return Promise.all(
     revisions.map(async (r): Promise<RevisionPast> => {
       const all = await revisionsOfSheet(db, officeId, r.sheet_id);
       const past = all.filter((other) => other.number <= r.number).reverse();
-      const sent = before?.get(r.sheet_id);
-      const since =
-        !before || sent === r.number ? {} : ({ since: sent === undefined ? 'new' : 'changed' } as const);
+      const how = changes.of.get(r.id);
+      const since = changes.since === undefined || how === undefined || how === 'same' ? {} : { since: how };
       return {
         ...since,
         changedIn: lastChanged(past.map((p) => ({ number: p.number, blocks: blocks.parse(p.blocks) }))),
@@ -42,15 +40,4 @@ export async function packageHistory(
       };
     }),
   );
-}
-
-/** Revision numbers by sheet of the newest submittal that went out; undefined when none did. */
-async function lastSent(db: Knex, officeId: string, jobId: string): Promise<Map<string, number> | undefined> {
-  const sent = (await submittalsOf(db, officeId, jobId)).filter(
-    (s) => s.state === 'sent' || s.state === 'decided',
-  );
-  const last = sent.at(-1);
-  if (!last) return undefined;
-  const revisions = await revisionsOfSubmittal(db, officeId, last.id);
-  return new Map(revisions.map((r) => [r.sheet_id, r.number]));
 }

@@ -21,6 +21,8 @@ export interface PackageRequest {
   job: JobRow & { authority: string | null };
   purpose: string;
   submittal: number;
+  /** The submittal that went out before, if one did. */
+  previous?: number | undefined;
   date: Date;
   engineer: { name: string; initials: string };
   originators: { name: string; initials: string }[];
@@ -70,6 +72,7 @@ export async function printPackage(
     },
     purpose: `Submittal ${submittal}, ${purpose}`,
     submittal,
+    previous: request.previous,
     mode: 'final',
     size: job.page_size,
     language: job.units === 'US' ? 'en-US' : 'en-GB',

@@ -45,6 +45,8 @@ export type PackagePrint = {
   readonly purpose: string;
   /** Number of the submittal, if it is one. */
   readonly submittal?: number;
+  /** The submittal that changes are flagged against. */
+  readonly previous?: number | undefined;
   readonly mode: PaperMode;
   readonly size: PaperSize;
   readonly language: PrintedDocument['language'];

@@ -150,19 +150,15 @@ function sealArea({ mode, seal }: PackagePrint, page: PageGeometry, typesetter: 
 }
 
 /** What the triangles of the list mean. */
-function changeLegend(
-  { sheets, submittal }: PackagePrint,
-  page: PageGeometry,
-  typesetter: Typesetter,
-): Ink[] {
+function changeLegend({ sheets, previous }: PackagePrint, page: PageGeometry, typesetter: Typesetter): Ink[] {
   const changed = sheets.find(({ since }) => since === 'changed');
-  if (!changed || submittal === undefined || submittal < 2) return [];
+  if (!changed || previous === undefined) return [];
   const bottom = page.height - FOOT;
   const word = (text: string, y: number) =>
     wordInk(text, LOOKS.small, 'ink2', { x: page.marginRight, y, side: 'right' }, typesetter);
   return [
     ...deltaIcon(changed.revision, page.marginRight, bottom - 26, typesetter),
     word('changed since', bottom - 13.2),
-    word(`submittal ${submittal - 1}`, bottom - 3),
+    word(`submittal ${previous}`, bottom - 3),
   ];
 }

@@ -27,6 +27,7 @@ export const samplePackage: PackagePrint = {
   },
   purpose: 'Submittal 2, for approval',
   submittal: 2,
+  previous: 1,
   mode: 'preliminary',
   size: 'Letter',
   language: 'en-GB',
