@@ -1,6 +1,7 @@
 'use client';
 
 import { type ClipboardEvent, type KeyboardEvent, useRef } from 'react';
+import { flushSync } from 'react-dom';
 import type { ShapeRef } from '@/lib/figures/drawing';
 import { useDesk } from '../desk-context';
 import { Cell } from './cell';
@@ -25,25 +26,22 @@ export function CellTable<Row>({ pathOf, label, rows, columns, onRows, add, refO
   const { lit, light } = useDesk();
   const table = useRef<HTMLTableElement>(null);
 
+  /** At once, so that the next key already goes to the new cell. */
   const focusCell = (row: number, column: number) =>
-    requestAnimationFrame(() => {
-      table.current?.querySelector<HTMLElement>(`[data-cell="${row}:${column}"]`)?.focus();
-    });
+    table.current?.querySelector<HTMLElement>(`[data-cell="${row}:${column}"]`)?.focus();
   const addRow = (at: number, copied?: Row) => {
     if (!add) return;
     const row = copied ?? add.blank(rows);
-    onRows([...rows.slice(0, at), row, ...rows.slice(at)], `${label} added`);
+    flushSync(() => onRows([...rows.slice(0, at), row, ...rows.slice(at)], `${label} added`));
     focusCell(
       at,
       columns.findIndex((c) => !c.used || c.used(row)),
     );
   };
   const removeRow = (at: number) => {
-    if (add)
-      onRows(
-        rows.filter((_, i) => i !== at),
-        `${label} removed`,
-      );
+    if (!add) return;
+    const left = rows.filter((_, i) => i !== at);
+    flushSync(() => onRows(left, `${label} removed`));
   };
 
   const onKey = (event: KeyboardEvent<HTMLElement>, row: number, column: number) => {
